@@ -1,0 +1,5 @@
+export * from "./auth";
+export * from "./trip";
+export * from "./shelter";
+export * from "./plan";
+export * from "./post";

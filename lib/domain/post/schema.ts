@@ -1,0 +1,33 @@
+import { z } from "zod";
+import { idSchema } from "../ids";
+import { PAPER_SIZES } from "../paper/schema";
+import { blockText, lineText } from "../text";
+
+export const MESSAGE_STATES = ["waiting", "sending", "sent", "failed"] as const;
+export type MessageState = (typeof MESSAGE_STATES)[number];
+
+/** What a message can carry: each person's own pages, every camp's field card, or the whole booklet. */
+export const PIECES = [
+  { key: "pack-list", name: "Own pack list" },
+  { key: "pitch-cards", name: "Pitch cards of their shelters" },
+  { key: "field-cards", name: "Field cards of all camps" },
+  { key: "booklet", name: "Whole booklet" },
+] as const;
+export const PIECE_KEYS = PIECES.map((piece) => piece.key);
+export type PieceKey = (typeof PIECES)[number]["key"];
+
+export const sendInput = z.object({
+  tripId: idSchema,
+  /** Made by the client: a double click has one effect. */
+  requestId: idSchema,
+  personIds: z
+    .array(idSchema)
+    .min(1, "Choose at least one person.")
+    .max(100, "At most 100 people at once.")
+    .refine((ids) => new Set(ids).size === ids.length, "Somebody is chosen twice."),
+  pieces: z.array(z.enum(PIECE_KEYS)).min(1, "Choose at least one piece of paper."),
+  subject: lineText("a subject", 150),
+  message: blockText("the message", 4000),
+  paperSize: z.enum(PAPER_SIZES),
+});
+export type SendInput = z.infer<typeof sendInput>;
