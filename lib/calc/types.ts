@@ -203,7 +203,15 @@ export interface ShelterModel {
     readonly lengthM: number;
     readonly stiffnessN: number;
   }[];
-  /** Quads of the fabric, corner nodes in order, outward normal by the right-hand rule. */
+  /** Bent poles: chains of nodes from foot to foot with axial stiffness EA (N) and bending stiffness EI (N·m²). */
+  readonly hoops: readonly {
+    readonly id: string;
+    readonly name: string;
+    readonly nodes: readonly number[];
+    readonly stiffnessN: number;
+    readonly bendingStiffnessNm2: number;
+  }[];
+  /** Quads of the fabric (a triangle repeats its last node), corner nodes in order, outward normal by the right-hand rule. */
   readonly panels: readonly { readonly nodes: readonly [number, number, number, number]; readonly zone: string }[];
   readonly tieOuts: readonly TieOut[];
   /** For drawing: plan outline (closed), ridge and seam lines, pole feet, and places where people lie. */
