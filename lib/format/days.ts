@@ -1,0 +1,58 @@
+import { tz, TZDate } from "@date-fns/tz";
+import { addDays as addCalendarDays, differenceInCalendarDays, format } from "date-fns";
+
+/** A calendar day has no zone: it is counted in UTC, where every day has 24 hours. */
+const UTC = { in: tz("UTC") };
+
+function toDate(day: string): Date {
+  return new TZDate(`${day}T00:00:00Z`, "UTC");
+}
+
+/** yyyy-mm-dd, so many days later. */
+export function addDays(day: string, count: number): string {
+  return format(addCalendarDays(toDate(day), count, UTC), "yyyy-MM-dd", UTC);
+}
+
+export function countDaysBetween(from: string, to: string): number {
+  return differenceInCalendarDays(toDate(to), toDate(from), UTC);
+}
+
+/** "Sun 14 June". */
+export function formatDay(day: string): string {
+  return format(toDate(day), "EEE d MMMM", UTC);
+}
+
+/** "Sun 14". */
+export function formatDayShort(day: string): string {
+  return format(toDate(day), "EEE d", UTC);
+}
+
+/** "14 June 2026". */
+export function formatDayLong(day: string): string {
+  return format(toDate(day), "d MMMM yyyy", UTC);
+}
+
+/** "12–18 June", "28 June – 3 July", "30 December 2026 – 2 January 2027". */
+export function formatDayRange(from: string, to: string): string {
+  if (from === to) return format(toDate(from), "d MMMM", UTC);
+  if (from.slice(0, 4) !== to.slice(0, 4)) return `${formatDayLong(from)} – ${formatDayLong(to)}`;
+  if (from.slice(0, 7) !== to.slice(0, 7)) {
+    return `${format(toDate(from), "d MMMM", UTC)} – ${format(toDate(to), "d MMMM", UTC)}`;
+  }
+  return `${format(toDate(from), "d", UTC)}–${format(toDate(to), "d MMMM", UTC)}`;
+}
+
+/** An instant on the clock of a zone: "9 June 18:20". */
+export function formatInstant(instant: Date | string, timeZone: string): string {
+  return format(new Date(instant), "d MMMM HH:mm", { in: tz(timeZone) });
+}
+
+/** "18:20". */
+export function formatTime(instant: Date | string, timeZone: string): string {
+  return format(new Date(instant), "HH:mm", { in: tz(timeZone) });
+}
+
+/** The calendar day that an instant falls on in a zone, yyyy-mm-dd. */
+export function dayOf(instant: Date | string, timeZone: string): string {
+  return format(new Date(instant), "yyyy-MM-dd", { in: tz(timeZone) });
+}
