@@ -1,6 +1,7 @@
 /** What the services hand to screens and paper: only what they need to show, dates as text, SI units. */
 import type { CampResult, Gap, Placement, ShelterAnalysis, ShelterSpec, TrayAnchor, Verdict } from "@/lib/calc/types";
 import type { CampDetails } from "./camp/schema";
+import type { GearDetails } from "./gear/schema";
 import type { KitItemDetails } from "./kit/schema";
 import type { Role } from "./permissions/permissions";
 import type { MessageState } from "./post/schema";
@@ -84,6 +85,72 @@ export interface PitchView {
   /** Null while a gap (no wind, no exposure …) keeps it from being worked out. */
   readonly analysis: ShelterAnalysis | null;
   readonly sleeperIds: readonly string[];
+}
+
+/** Who sleeps where at a camp. Everybody on the trip is in exactly one list. */
+export interface SleepingPlanView {
+  readonly campId: string;
+  readonly campName: string;
+  readonly days: readonly string[];
+  readonly people: readonly { readonly id: string; readonly name: string }[];
+  readonly pitches: readonly {
+    readonly id: string;
+    readonly name: string;
+    /** How many it sleeps. */
+    readonly sleeps: number;
+    readonly sleeperIds: readonly string[];
+    /** For the drawing: shelter, its spec at this pitch and its heading. */
+    readonly spec: ShelterSpec;
+    readonly headingDeg: number;
+  }[];
+  /** Sleep outside any shelter, and said so. */
+  readonly outsideIds: readonly string[];
+  /** Placed nowhere yet. */
+  readonly unplacedIds: readonly string[];
+}
+
+export interface GearView {
+  readonly id: string;
+  readonly details: GearDetails;
+  readonly version: number;
+}
+
+/** One change of a staking plan, newest first. */
+export interface PlanHistoryEntry {
+  readonly intentId: string;
+  readonly planVersion: number;
+  readonly byName: string;
+  readonly at: string;
+  readonly sentence: string;
+}
+
+/** Lines of a pack list as the leader edits them. */
+export interface PackItemView {
+  readonly id: string;
+  readonly personId: string | null;
+  readonly name: string;
+  readonly isGroupThing: boolean;
+  readonly massKg: number | null;
+}
+
+/** Who carries what of the group's gear, and what nobody carries yet. */
+export interface CarryPlanView {
+  readonly people: readonly { readonly id: string; readonly name: string; readonly massKg: number }[];
+  readonly shelters: readonly {
+    readonly id: string;
+    readonly name: string;
+    readonly massKg: number | null;
+    readonly carrierId: string | null;
+  }[];
+  readonly kitItems: readonly {
+    readonly id: string;
+    readonly name: string;
+    readonly massKgEach: number;
+    readonly count: number;
+    readonly carriers: readonly { readonly personId: string; readonly count: number }[];
+    /** How many nobody carries yet. */
+    readonly leftCount: number;
+  }[];
 }
 
 /** A camp as the plan sees it, for the line of nights and the overview. */

@@ -116,3 +116,6 @@ export const kitItemUpdateInput = z.object({
   version: z.number().int().min(1),
   details: kitItemDetailsSchema,
 });
+
+export const kitItemRefInput = z.object({ tripId: idSchema, kitItemId: idSchema });
+export const kitItemDeleteInput = kitItemRefInput.extend({ confirmed: z.boolean().default(false) });

@@ -50,6 +50,9 @@ export const shelterUpdateInput = z.object({
   details: shelterDetailsSchema,
 });
 
+export const shelterRefInput = z.object({ tripId: idSchema, shelterId: idSchema });
+export const shelterDeleteInput = shelterRefInput.extend({ confirmed: z.boolean().default(false) });
+
 /** How a shelter stands at one camp. Its dimensions here override those of the shelter (pitch height …). */
 export const pitchDetailsSchema = z.object({
   headingDeg: numberBetween("the heading", 0, 360, "°"),
@@ -66,6 +69,13 @@ export const pitchUpdateInput = z.object({
   pitchId: idSchema,
   version: z.number().int().min(1),
   details: pitchDetailsSchema,
+});
+
+export const pitchDeleteInput = z.object({
+  tripId: idSchema,
+  campId: idSchema,
+  pitchId: idSchema,
+  confirmed: z.boolean().default(false),
 });
 
 /** Who sleeps where at a camp: the whole intent in one save; null = sleeps outside any shelter. */

@@ -38,3 +38,19 @@ export const tripUpdateInput = tripCreateInput.extend({
   contacts: z.array(contactSchema).max(12, "At most twelve contact lines.").default([]),
 });
 export type TripUpdateInput = z.infer<typeof tripUpdateInput>;
+
+export const tripRefInput = z.object({ tripId: idSchema });
+
+/** With people: names, addresses and roles come along, not yet invited, with their sleeping places and loads. */
+export const tripCopyInput = z.object({
+  tripId: idSchema,
+  name: lineText("a name for the trip", 100),
+  startDate: daySchema,
+  withPeople: z.boolean().default(false),
+});
+
+export const tripDeleteInput = z.object({
+  tripId: idSchema,
+  /** The trip's name, typed again. */
+  confirmName: z.string({ error: "Type the name of the trip." }).max(400),
+});
