@@ -1,6 +1,6 @@
 "use client";
 
-import { useRef, useState } from "react";
+import { useState } from "react";
 import type { KeyboardEvent, PointerEvent } from "react";
 import { FieldError } from "@/components/ui/fields";
 import { useFieldErrors } from "@/components/ui/action-form";
@@ -30,6 +30,15 @@ const NUDGES: Readonly<Record<string, number>> = {
 
 const wrap = (deg: number) => ((Math.round(deg) % 360) + 360) % 360;
 
+/** Compass bearing of a pointer from the middle of the dial, in steps of 5°. */
+function bearingOf(event: PointerEvent): number {
+  const box = event.currentTarget.parentElement?.getBoundingClientRect();
+  if (!box) return 0;
+  const x = event.clientX - (box.left + box.width / 2);
+  const y = event.clientY - (box.top + box.height / 2);
+  return Math.round(((Math.atan2(x, -y) * 180) / Math.PI + 360) / 5) * 5;
+}
+
 /** The wind range: two hands to drag or nudge, or two numbers to type; clockwise from the first to the second. */
 export function WindDial({
   fromDeg,
@@ -41,7 +50,6 @@ export function WindDial({
 }: WindDialProps) {
   const [range, setRange] = useState({ from: fromDeg, to: toDeg });
   const errors = [...useFieldErrors(fromName), ...useFieldErrors(toName)];
-  const face = useRef<HTMLDivElement>(null);
   const isKnown = range.from !== null && range.to !== null;
 
   const change = (next: { from: number | null; to: number | null }) => {
@@ -52,13 +60,6 @@ export function WindDial({
     const from = range.from ?? 270;
     const to = range.to ?? 315;
     change(hand === "from" ? { from: wrap(deg), to } : { from, to: wrap(deg) });
-  };
-  const bearingOf = (event: PointerEvent) => {
-    const box = face.current?.getBoundingClientRect();
-    if (!box) return 0;
-    const x = event.clientX - (box.left + box.width / 2);
-    const y = event.clientY - (box.top + box.height / 2);
-    return Math.round(((Math.atan2(x, -y) * 180) / Math.PI + 360) / 5) * 5;
   };
   const nudge = (hand: Hand) => (event: KeyboardEvent) => {
     const step = NUDGES[event.key];
@@ -73,7 +74,7 @@ export function WindDial({
       <input type="hidden" name={`${fromName}:number`} value={range.from ?? ""} />
       <input type="hidden" name={`${toName}:number`} value={range.to ?? ""} />
       <div className="flex flex-wrap items-center gap-x-8 gap-y-4">
-        <div ref={face} className="relative w-60 max-w-full shrink-0">
+        <div className="relative w-60 max-w-full shrink-0">
           <WindDialFace fromDeg={range.from} toDeg={range.to} />
           {isKnown &&
             (["from", "to"] as const).map((hand) => (
