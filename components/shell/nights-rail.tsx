@@ -62,7 +62,7 @@ export function NightsRail({ tripId, camps, speedUnit }: NightsProps) {
               className="relative flex min-h-14 items-start gap-3 rounded-field border border-transparent py-2 pr-2 pl-2 hover:bg-spruce-wash aria-[current]:border-ink aria-[current]:bg-sheet"
             >
               <span className="mt-0.5 shrink-0">
-                <StateMark verdict={night.camp.verdict} isLabelled={false} />
+                <StateMark verdict={night.camp.verdict} isDecorative />
               </span>
               <span className="min-w-0">
                 <span className={`block truncate text-15 ${isHere ? "font-bold" : "font-semibold"}`}>
@@ -112,7 +112,7 @@ export function NightsStrip({ tripId, camps, speedUnit }: NightsProps) {
               className="flex min-h-12 min-w-11 flex-col items-center gap-1 rounded-field border border-transparent px-2 py-1 text-13 aria-[current]:border-ink aria-[current]:font-bold"
             >
               <span>{formatDayShort(night.day)}</span>
-              <StateMark verdict={night.camp.verdict} isLabelled={false} />
+              <StateMark verdict={night.camp.verdict} isDecorative />
             </Link>
           </li>
         );
