@@ -1,6 +1,6 @@
 import { NORTH_ARROW } from "@/lib/domain/drawing/wind-sector";
 import { linePath, polar, pointText, type Point } from "@/lib/domain/drawing/path";
-import { formatLength } from "@/lib/format/lengths";
+import { withUnit } from "@/lib/format/numbers";
 import type { PlanLayout } from "./plan-layout";
 
 export function NorthArrow({ at: [x, y], upDeg }: { readonly at: Point; readonly upDeg: number }) {
@@ -40,7 +40,7 @@ export function ScaleBar({
         fill="none"
       />
       <text x={x} y={y + 13} textAnchor="middle" className="fill-pencil text-13">
-        {formatLength(lengthM).replace(".0", "")}
+        {withUnit(String(lengthM), "m")}
       </text>
     </g>
   );

@@ -10,6 +10,8 @@ export interface PlanLayoutInput {
   readonly upDeg: number;
   readonly width: number;
   readonly height: number;
+  /** Tie-outs with a second stake in line, which needs room behind the first. */
+  readonly doubled?: ReadonlySet<string>;
   /** Null where nothing is drawn of the wind; both ends null where it may come from anywhere. */
   readonly wind: { readonly fromDeg: number | null; readonly toDeg: number | null } | null;
 }
@@ -78,7 +80,11 @@ export function layoutPlan(input: PlanLayoutInput): PlanLayout {
     ...wind.arrows.map(({ tail, head }) => boxAround(tail, head)),
   ];
   const labels = placeLabels(
-    points.map((point) => ({ at: point.anchor, outwardDeg: point.outwardDeg, gap: markSize * 0.86 })),
+    points.map((point) => ({
+      at: point.anchor,
+      outwardDeg: point.outwardDeg,
+      gap: markSize * (input.doubled?.has(point.tieOutId) ? 1.15 : 0.86),
+    })),
     { width: STATE_SIZE + 3, height: STATE_SIZE + NUMBER_SIZE + 3 },
     { width, height },
     taken,

@@ -61,7 +61,7 @@ export function ShelterPlan({
   className = "block h-auto w-full",
 }: ShelterPlanProps) {
   const titleId = useId();
-  const layout = given ?? layoutPlan({ model, headingDeg, upDeg, width, height, wind });
+  const layout = given ?? layoutPlan({ model, headingDeg, upDeg, width, height, wind, doubled: doubledOf(marks) });
   const { view, fit } = layout;
   return (
     <svg
@@ -112,6 +112,10 @@ export function ShelterPlan({
       <ScaleBar at={layout.scale.at} length={layout.scale.length} lengthM={layout.scale.lengthM} />
     </svg>
   );
+}
+
+export function doubledOf(marks: Readonly<Record<string, TieOutMarks>>): ReadonlySet<string> {
+  return new Set(Object.entries(marks).flatMap(([id, one]) => (one.tandem ? [id] : [])));
 }
 
 function TieOutDrawing({
