@@ -18,6 +18,8 @@ export interface GroupedProblem {
   readonly emptyValues: readonly number[];
   /** Whole-number costs of using one of a kind, most important first; they decide among equals. Default none. */
   readonly costs?: readonly (readonly number[])[];
+  /** The kind each row has now; the last tie-break is to change as few rows as can be. */
+  readonly present?: readonly (number | null)[];
 }
 
 /** The kind given to each row; null = the row stays empty. */
@@ -115,6 +117,12 @@ class Label {
     for (let i = 0; i < this.costs.length; i++) this.costs[i] = at(this.costs, i) + sign * at(costs, i);
   }
 
+  /** The last of the costs counts the rows that change. */
+  addChanges(changes: number): void {
+    const last = this.costs.length - 1;
+    this.costs[last] = at(this.costs, last) + changes;
+  }
+
   isLessThan(other: Label): boolean {
     const shared = Math.min(this.length, other.length);
     for (let i = 0; i < shared; i++) {
@@ -137,7 +145,7 @@ class Label {
 
 /**
  * The assignment that is best in its worst row, then in its second worst, and so on; among those the least of the
- * first tie-break cost, then of the second …
+ * first tie-break cost, then of the second … and last with the fewest changes from what each row has now.
  *
  * Exact. Successive shortest augmenting paths (the Hungarian method, row by row) need no more of a cost than that it
  * can be added, subtracted and ordered; so they also hold for vectors that count the rows at each level and are
@@ -156,9 +164,15 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
   if (problem.counts.some((count) => !Number.isInteger(count) || count < 0)) {
     throw new RangeError("Counts are whole numbers from 0.");
   }
-  const costCount = problem.costs?.[0]?.length ?? 0;
+  const costCount = (problem.costs?.[0]?.length ?? 0) + 1;
   const noCosts: readonly number[] = new Array<number>(costCount).fill(0);
   const costOf = (kind: number): readonly number[] => problem.costs?.[kind] ?? noCosts;
+  const presentOf = Int32Array.from(problem.values, (_, row) => {
+    const kind = problem.present?.[row];
+    return kind === undefined ? -1 : (kind ?? kinds);
+  });
+  /** 1 when the row would get something else than it has, else 0. */
+  const changeOf = (row: number, kind: number): number => (at(presentOf, row) === kind ? 0 : 1);
 
   const levels = levelsOf(problem);
   const levelOf = new Map<number, number>();
@@ -190,7 +204,8 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
             at(rank, best * kindsAndEmpty + to),
             at(rank, best * kindsAndEmpty + from),
           );
-          if (order > 0 || (order === 0 && row > best)) continue;
+          const changes = changeOf(row, to) - changeOf(row, from) - changeOf(best, to) + changeOf(best, from);
+          if (order > 0 || (order === 0 && (changes > 0 || (changes === 0 && row > best)))) continue;
         }
         best = row;
       }
@@ -211,6 +226,7 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
       if (level < 0) return;
       label.add(level, 1);
       label.addCosts(costOf(kind), 1);
+      label.addChanges(changeOf(row, kind));
       label.isSet = true;
       changed.push(kind);
     });
@@ -229,6 +245,7 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
           trial.add(at(rank, moved * kindsAndEmpty + from), -1);
           trial.addCosts(costOf(to), 1);
           trial.addCosts(costOf(from), -1);
+          trial.addChanges(changeOf(moved, to) - changeOf(moved, from));
           if (target.isSet && !trial.isLessThan(target)) continue;
           target.copyFrom(trial);
           previous[to] = from;

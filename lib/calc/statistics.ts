@@ -1,6 +1,6 @@
-/**
- * The few distributions that the verdicts and pull tests need.
- */
+/** The few distributions that the verdicts and pull tests need. */
+
+import { FIVE_PERCENT_QUANTILE } from "./constants";
 
 const SQRT_TWO_PI = Math.sqrt(2 * Math.PI);
 
@@ -84,9 +84,6 @@ export function normalQuantile(p: number): number {
   return q < 0 ? -size : size;
 }
 
-/** −z₀.₀₅: the 5 % fractile of a standard normal value lies this far below the median. Φ⁻¹(0.95). */
-export const FIVE_PERCENT_DISTANCE = 1.6448536269514722;
-
 /**
  * Regularised incomplete beta I_x(a, b), a and b > 0, 0 ≤ x ≤ 1: continued fraction of Abramowitz & Stegun (1964)
  * 26.5.8, evaluated by Lentz's method.
@@ -164,7 +161,7 @@ export function characteristicFactor(readings: number, scatter: "known" | "unkno
     throw new RangeError("EN 1990 D.7.2 gives no value for so few readings.");
   }
   const spread = Math.sqrt(1 + 1 / readings);
-  return (scatter === "known" ? FIVE_PERCENT_DISTANCE : studentQuantile(0.95, readings - 1)) * spread;
+  return (scatter === "known" ? FIVE_PERCENT_QUANTILE : studentQuantile(0.95, readings - 1)) * spread;
 }
 
 /**

@@ -1,4 +1,5 @@
-import { FIVE_PERCENT_DISTANCE, normalDistribution } from "./statistics";
+import { dependableFromMedian } from "./constants";
+import { normalDistribution } from "./statistics";
 import type { Verdict } from "./types";
 
 /**
@@ -6,7 +7,7 @@ import type { Verdict } from "./types";
  * `median` (≥ 0). `scatter` is σ of the logarithm, ≥ 0. Characteristic value: EN 1990:2002, 4.2(3).
  */
 export function dependable(median: number, scatter: number): number {
-  return median * Math.exp(-FIVE_PERCENT_DISTANCE * scatter);
+  return dependableFromMedian(median, scatter);
 }
 
 /**
