@@ -108,56 +108,64 @@ export interface PileResistance {
 
 /** Bounded iteration: 60 halvings reach the last bit of a double from any bracket; Newton steps make it about six. */
 const MAX_ITERATIONS = 60;
+/** Newton converges quadratically: a last step of 10⁻⁸ leaves an error of about 10⁻¹⁶. */
+const DEPTH_TOLERANCE = 1e-8;
 
 /**
  * Resistance of a short rigid pile normal to its axis: pressure p(z) = (γ·z·Kq + c·Kc)·d in front above the rotation
  * point and behind below it, with moment equilibrium about the point of pull; and the pull at which the stake itself
- * yields, with the ground fully mobilised above the plastic hinge. Integrals of p are closed forms.
+ * yields, with the ground fully mobilised above the plastic hinge. With K = K^∞ − (K^∞ − K⁰)/(1 + a·z), a = α/d, the
+ * integrals of p are elementary.
  * Source: Brinch Hansen (1961), Danish Geotechnical Institute Bulletin 12; hinge as in Broms (1964) for piles of
  * intermediate length.
  */
 export function pileResistance(input: PileInput): PileResistance {
   const { lengthM, eccentricityM: e } = input;
-  const pressure = pressureIntegrals(input);
-  const whole = pressure.moment(lengthM) + e * pressure.force(lengthM);
-  const rotationDepthM = solveRising(
-    (z) => 2 * (pressure.moment(z) + e * pressure.force(z)) - whole,
-    (z) => 2 * pressure.at(z) * (z + e),
+  const at = pressureOf(input);
+  const whole = at(lengthM);
+  const wholeMomentNm = whole.momentNm + e * whole.forceN;
+  // Half the moment about the point of pull lies above the turning point.
+  const turning = solveRising(
+    at,
+    (p) => p.momentNm + e * p.forceN - wholeMomentNm / 2,
+    (p) => p.perLengthNm * (p.depthM + e),
     lengthM,
     0.75 * lengthM,
   );
-  const groundN = Math.max(0, 2 * pressure.force(rotationDepthM) - pressure.force(lengthM));
-  const momentDepthM = solveRising(
-    (z) => pressure.force(z) - groundN,
-    pressure.at,
-    rotationDepthM,
-    0.5 * rotationDepthM,
+  const groundN = Math.max(0, 2 * turning.forceN - whole.forceN);
+  const largest = solveRising(
+    at,
+    (p) => p.forceN - groundN,
+    (p) => p.perLengthNm,
+    turning.depthM,
+    0.5 * turning.depthM,
   );
-  const largestMomentNm = groundN * e + pressure.moment(momentDepthM);
+  const largestMomentNm = groundN * e + largest.momentNm;
   let bendingN: number | null = null;
   if (input.bendingNm < largestMomentNm) {
-    const hinge = solveRising(
-      (z) => e * pressure.force(z) + pressure.moment(z) - input.bendingNm,
-      (z) => pressure.at(z) * (z + e),
-      momentDepthM,
-      0.5 * momentDepthM,
-    );
-    bendingN = pressure.force(hinge);
+    bendingN = solveRising(
+      at,
+      (p) => e * p.forceN + p.momentNm - input.bendingNm,
+      (p) => p.perLengthNm * (p.depthM + e),
+      largest.depthM,
+      0.5 * largest.depthM,
+    ).forceN;
   }
-  return { groundN, rotationDepthM, largestMomentNm, momentDepthM, bendingN };
+  return { groundN, rotationDepthM: turning.depthM, largestMomentNm, momentDepthM: largest.depthM, bendingN };
 }
 
-interface PressureIntegrals {
-  /** Pressure per length at depth z, N/m. */
-  readonly at: (z: number) => number;
+/** Pressure of the ground down to one depth. */
+interface PressureTo {
+  readonly depthM: number;
+  /** p(z), N/m. */
+  readonly perLengthNm: number;
   /** ∫₀ᶻ p, N. */
-  readonly force: (z: number) => number;
+  readonly forceN: number;
   /** ∫₀ᶻ p·z, N·m. */
-  readonly moment: (z: number) => number;
+  readonly momentNm: number;
 }
 
-/** With K = K^∞ − (K^∞ − K⁰)/(1 + a·z), a = α/d, all integrals are elementary. */
-function pressureIntegrals(input: PileInput): PressureIntegrals {
+function pressureOf(input: PileInput): (depthM: number) => PressureTo {
   const { kq0, kqDeep, alphaQ, kc0, kcDeep, alphaC } = input.coefficients;
   const weight = input.unitWeightNm3 * input.widthM * input.pressureFactor;
   const cohesion = input.cohesionPa * input.widthM * input.pressureFactor;
@@ -165,37 +173,42 @@ function pressureIntegrals(input: PileInput): PressureIntegrals {
   const ac = alphaC / input.widthM;
   const dq = kqDeep - kq0;
   const dc = kcDeep - kc0;
-  return {
-    at: (z) => weight * z * (kqDeep - dq / (1 + aq * z)) + cohesion * (kcDeep - dc / (1 + ac * z)),
-    force: (z) => {
-      const lq = Math.log1p(aq * z) / aq;
-      const lc = Math.log1p(ac * z) / ac;
-      return weight * ((kqDeep * z * z) / 2 - (dq * (z - lq)) / aq) + cohesion * (kcDeep * z - dc * lc);
-    },
-    moment: (z) => {
-      const lq = Math.log1p(aq * z) / aq;
-      const lc = Math.log1p(ac * z) / ac;
-      return (
-        weight * ((kqDeep * z ** 3) / 3 - (dq * ((z * z) / 2 - (z - lq) / aq)) / aq) +
-        cohesion * ((kcDeep * z * z) / 2 - (dc * (z - lc)) / ac)
-      );
-    },
+  return (z) => {
+    const square = z * z;
+    const lc = Math.log1p(ac * z) / ac;
+    let perLengthNm = cohesion * (kcDeep - dc / (1 + ac * z));
+    let forceN = cohesion * (kcDeep * z - dc * lc);
+    let momentNm = cohesion * ((kcDeep * square) / 2 - (dc * (z - lc)) / ac);
+    if (weight > 0) {
+      const lq = (z - Math.log1p(aq * z) / aq) / aq;
+      perLengthNm += weight * z * (kqDeep - dq / (1 + aq * z));
+      forceN += weight * ((kqDeep * square) / 2 - dq * lq);
+      momentNm += weight * ((kqDeep * square * z) / 3 - (dq * (square / 2 - lq)) / aq);
+    }
+    return { depthM: z, perLengthNm, forceN, momentNm };
   };
 }
 
-/** Root of a rising function on [0, high]: Newton steps kept inside a shrinking bracket. */
-function solveRising(value: (z: number) => number, slope: (z: number) => number, high: number, start: number): number {
+/** Where a rising function of depth crosses zero, 0…high: Newton steps kept inside a shrinking bracket. */
+function solveRising(
+  at: (depthM: number) => PressureTo,
+  value: (p: PressureTo) => number,
+  slope: (p: PressureTo) => number,
+  high: number,
+  start: number,
+): PressureTo {
   let lo = 0;
   let hi = high;
-  let z = start;
+  let p = at(start);
   for (let i = 0; i < MAX_ITERATIONS; i += 1) {
-    const f = value(z);
-    if (f > 0) hi = z;
-    else lo = z;
-    const newton = z - f / slope(z);
+    const f = value(p);
+    if (f > 0) hi = p.depthM;
+    else lo = p.depthM;
+    const newton = p.depthM - f / slope(p);
     const next = newton > lo && newton < hi ? newton : (lo + hi) / 2;
-    if (Math.abs(next - z) <= 1e-13 * high) return next;
-    z = next;
+    const isClose = Math.abs(next - p.depthM) <= DEPTH_TOLERANCE * high;
+    p = at(next);
+    if (isClose) return p;
   }
-  return z;
+  return p;
 }

@@ -85,7 +85,7 @@ export const BUILT_IN_ANCHORS: readonly BuiltInAnchor[] = [
     "Round hook, 180 mm",
     { shape: "round", diameterM: 0.006 },
     0.18,
-    "aluminium-7075",
+    "aluminium-6061",
     "For hems and soft pulls; little hold by itself.",
   ),
   stake(

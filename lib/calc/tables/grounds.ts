@@ -96,7 +96,7 @@ export const GROUNDS: readonly GroundRow[] = [
     kind: "hard-trodden-loam",
     name: "Hard trodden loam",
     description: "Worn pitch or woodland path, trodden for years.",
-    model: { kind: "undrained", shearStrengthPa: 110_000 },
+    model: { kind: "undrained", shearStrengthPa: 120_000 },
     unitWeightNm3: 18_500,
     saturatedUnitWeightNm3: 19_500,
     scatter: 0.5,
