@@ -70,11 +70,12 @@ export function planView(model: ShelterModel, headingDeg: number, options: PlanV
 
   const outline = model.drawing.outline.map(toPaper);
   const middle = middleOf(outline);
+  const widthM = sleeperWidthM(model.drawing.sleepingPlaces);
   const sleepers = model.drawing.sleepingPlaces.map((place) => ({
     centre: toPaper(place.centre),
     bearingDeg: toPaperDeg(place.bearingDeg + headingDeg),
     lengthM: SLEEPER_LENGTH_M,
-    widthM: SLEEPER_WIDTH_M,
+    widthM,
   }));
   const tieOuts = model.tieOuts.map((tieOut) => {
     const from = toPaper(tieOut.point);
@@ -97,6 +98,17 @@ export function planView(model: ShelterModel, headingDeg: number, options: PlanV
     tieOuts,
     sleepers,
   };
+}
+
+/** Narrower where the places are laid closer than a person is wide. */
+function sleeperWidthM(places: ShelterModel["drawing"]["sleepingPlaces"]): number {
+  const gaps = places.flatMap((a, i) =>
+    places
+      .slice(i + 1)
+      .filter((b) => Math.abs(((a.bearingDeg - b.bearingDeg + 540) % 360) - 180) < 1)
+      .map((b) => Math.hypot(a.centre.x - b.centre.x, a.centre.y - b.centre.y)),
+  );
+  return Math.max(0.3, Math.min(SLEEPER_WIDTH_M, ...gaps.map((gap) => gap * 0.86)));
 }
 
 export function boundsOf(points: readonly Point[]): Bounds {

@@ -1,0 +1,259 @@
+import type { ReactElement } from "react";
+import { View } from "@react-pdf/renderer";
+import type { ShelterResult } from "@/lib/calc/types";
+import type { PitchView } from "@/lib/domain/views";
+import { formatWindRange } from "@/lib/format/angles";
+import { formatAltitude } from "@/lib/format/lengths";
+import { withUnit } from "@/lib/format/numbers";
+import { formatPosition } from "@/lib/format/positions";
+import { formatBeaufort, formatSpeed } from "@/lib/format/speeds";
+import { columns, fillPages, hairline, rule, spacer, stack, textBlock, type Block } from "../sections/block";
+import { factRow } from "../sections/facts";
+import { contactsNote, note, stackNotes } from "../sections/notes";
+import { bodyHeight, PageFrame, pageHeader, type Heading } from "../sections/page-frame";
+import { qrCode } from "../sections/qr-code";
+import { StateIcon } from "../sections/marks";
+import { stateLegend, tieOutTable } from "../sections/tie-out-table";
+import { weakestTable } from "../sections/weakest-table";
+import { GREY, TYPE } from "../theme";
+import {
+  campHeadline,
+  capitalised,
+  facingWords,
+  groundName,
+  groundRemarks,
+  hazardNames,
+  holdsToWords,
+  nightWords,
+} from "../words";
+import { drawingOf, rowsOf, type CardContext } from "./pitch-card";
+
+type Keeping = Block & { readonly keepsWithNext?: boolean };
+
+/** A camp: what to know and all shelters on the first page, then every tie-out, shelter by shelter. */
+export function fieldCardPages(context: CardContext): ReactElement[] {
+  const { header, camp, sheet } = context;
+  const heading: Heading = {
+    kicker: `${header.tripName} · ${nightWords(camp.nightNumbers, camp.camp)}`,
+    title: camp.camp.details.name,
+  };
+  const top = pageHeader(header, heading, sheet);
+  const nextTop = pageHeader(header, heading, sheet, true);
+  const blocks: Keeping[] = [
+    headline(context),
+    factRow(campFacts(context), sheet.inner),
+    campNotes(context),
+    ...planGrid(context),
+    ...weakestTable(camp, sheet.inner, context.preferences),
+    ...camp.pitches.flatMap((pitch) => shelterSection(context, pitch)),
+  ];
+  return fillPages(blocks, (index) => bodyHeight(header, sheet, index === 0 ? top : nextTop)).map((page, index) => (
+    <PageFrame
+      key={`${camp.camp.id}-${index}`}
+      sheet={sheet}
+      header={header}
+      top={index === 0 ? top : nextTop}
+      bookmark={index === 0 ? heading.title : undefined}
+    >
+      {stack(page).node}
+    </PageFrame>
+  ));
+}
+
+function headline({ camp, sheet, preferences }: CardContext): Block {
+  const width = sheet.inner - 22;
+  const text = textBlock(campHeadline(camp.result, preferences.speedUnit), width, { size: TYPE.number, weight: 800 });
+  return stack([
+    spacer(8),
+    {
+      height: text.height,
+      node: (
+        <View style={{ flexDirection: "row" }}>
+          <View style={{ width: 22, marginTop: 2.5 }}>
+            <StateIcon verdict={camp.result.verdict} size={13} />
+          </View>
+          <View style={{ width }}>{text.node}</View>
+        </View>
+      ),
+    },
+  ]);
+}
+
+function campFacts({ camp, preferences }: CardContext) {
+  const { details } = camp.camp;
+  const gust = camp.result.designGustMs;
+  const holdsTo = holdsToWords({ ...camp.result }, null, preferences.speedUnit);
+  const hours =
+    details.strongWindHours === null
+      ? "hours of strong wind not said"
+      : `${withUnit(String(details.strongWindHours), "h")} of strong wind`;
+  return [
+    {
+      label: "Gust planned",
+      value: gust === null ? "unknown" : formatSpeed(gust, preferences.speedUnit),
+      remark: gust === null || preferences.speedUnit === "Beaufort" ? hours : `${formatBeaufort(gust)} · ${hours}`,
+    },
+    {
+      label: "Wind from",
+      value: formatWindRange(details.windFromDeg, details.windToDeg),
+      remark: windDegrees(details),
+    },
+    { label: "All holds to", ...holdsTo },
+    {
+      label: "Ground",
+      value: groundName(details.ground)?.toLowerCase() ?? "unknown",
+      remark: groundWords(details),
+    },
+  ];
+}
+
+function windDegrees({ windFromDeg, windToDeg }: CardContext["camp"]["camp"]["details"]): string {
+  if (windFromDeg === null || windToDeg === null) return "range not said";
+  return `${Math.round(windFromDeg)}° to ${Math.round(windToDeg)}°`;
+}
+
+function groundWords(details: CardContext["camp"]["camp"]["details"]): string {
+  const main = details.ground
+    ? groundRemarks(details.ground, details.slopeDeg) || "in its usual state"
+    : "Choose the ground at the camp.";
+  const second = groundName(details.secondGround);
+  return second === null ? main : `${main} · second patch: ${second.toLowerCase()}`;
+}
+
+const QR_SIDE = 62;
+const GAP = 14;
+
+function campNotes({ header, camp, contacts, sheet, preferences }: CardContext): Block {
+  const { details } = camp.camp;
+  const width = (sheet.inner - QR_SIDE - 3 * GAP) / 3;
+  const position =
+    details.latitude === null || details.longitude === null
+      ? null
+      : formatPosition(details.latitude, details.longitude);
+  const altitude = details.altitudeM === null ? null : formatAltitude(details.altitudeM, preferences.lengthUnit);
+  const hazards = hazardNames(details.hazards);
+  return stack([
+    spacer(8),
+    columns(
+      [
+        {
+          width,
+          block: stackNotes([
+            note("Place", [position ?? "position not said", altitude].filter(Boolean).join("\n"), width),
+            details.water ? note("Water", details.water, width) : null,
+          ]),
+        },
+        {
+          width,
+          block: stackNotes([
+            hazards.length ? note("Mind", `${hazards.join(", ")}.`, width) : null,
+            camp.result.retension === null ? null : note("Check again", capitalised(camp.result.retension), width),
+            details.notes ? note("Notes", details.notes, width) : null,
+          ]),
+        },
+        { width, block: contactsNote(contacts, width) },
+        { width: QR_SIDE, block: qrCode(header.address, QR_SIDE) },
+      ],
+      GAP,
+    ),
+    spacer(8),
+    hairline(),
+  ]);
+}
+
+/** All shelters at a glance, two to four side by side. */
+function planGrid(context: CardContext): Keeping[] {
+  const { camp, sheet } = context;
+  const count = camp.pitches.length;
+  if (count === 0) return [];
+  const across = count === 1 ? 1 : count === 2 || count === 4 ? 2 : 3;
+  const width = (sheet.inner - GAP * (across - 1)) / across;
+  const height = across === 1 ? 230 : across === 2 ? 180 : 150;
+  const rows: Keeping[] = [];
+  for (let i = 0; i < count; i += across) {
+    rows.push(
+      stack([
+        spacer(8),
+        columns(
+          camp.pitches
+            .slice(i, i + across)
+            .map((pitch) => ({ width, block: smallPlan(context, pitch, width, height) })),
+          GAP,
+        ),
+      ]),
+    );
+  }
+  return [...rows, stack([spacer(2), stateLegend()])];
+}
+
+const resultOf = (context: CardContext, pitch: PitchView): ShelterResult | undefined =>
+  context.camp.result.shelters.find((one) => one.pitchId === pitch.id);
+
+function smallPlan(context: CardContext, pitch: PitchView, width: number, height: number): Block {
+  const result = resultOf(context, pitch);
+  const holdsTo = holdsToWords(
+    result ?? { holdsToGustMs: null, gaps: [], verdict: "unknown" },
+    null,
+    context.preferences.speedUnit,
+  );
+  return stack([
+    textBlock(pitch.name, width, { size: TYPE.strong, weight: 800 }),
+    textBlock(
+      [facingWords(pitch), holdsTo.value === "unknown" ? "not known yet" : `holds to ${holdsTo.value}`].join(" · "),
+      width,
+      { size: TYPE.small, color: GREY },
+    ),
+    spacer(3),
+    drawingOf(context, pitch, result, width, height, "small"),
+  ]);
+}
+
+function shelterSection(context: CardContext, pitch: PitchView): Keeping[] {
+  const { camp, sheet, preferences } = context;
+  const shelter = resultOf(context, pitch);
+  if (!shelter) return [];
+  const table = tieOutTable({
+    rows: rowsOf(camp, pitch, shelter),
+    tray: camp.tray,
+    width: sheet.inner,
+    preferences,
+    isTight: true,
+  });
+  const holdsTo = holdsToWords(shelter, camp.result.designGustMs, preferences.speedUnit);
+  const names = camp.sleeperNames[pitch.id] ?? [];
+  const about = [
+    facingWords(pitch),
+    holdsTo.value === "unknown" ? holdsTo.remark : `holds to ${holdsTo.value}`,
+    names.length ? `sleep here: ${names.join(", ")}` : "nobody placed yet",
+  ].join(" · ");
+  const fallbacks = camp.fallbacks[pitch.id] ?? [];
+  const head = stack([
+    spacer(14),
+    rule(1.2),
+    spacer(4),
+    textBlock(pitch.name, sheet.inner, { size: TYPE.number, weight: 800 }),
+    textBlock(about, sheet.inner, { size: TYPE.body }),
+    spacer(3),
+    table.head,
+  ]);
+  const next = fallbacks.length
+    ? [
+        stack([
+          spacer(5),
+          note(
+            "Softer ground or stronger wind",
+            fallbacks.map((step, i) => `${i + 1}. ${step}`).join("  "),
+            sheet.inner,
+          ),
+        ]),
+      ]
+    : [];
+  return [
+    { ...head, keepsWithNext: true },
+    ...table.rows.map((row, index) => ({
+      ...row,
+      keepsWithNext: index === 0 || (index === table.rows.length - 1 && next.length > 0),
+    })),
+    ...next,
+  ];
+}

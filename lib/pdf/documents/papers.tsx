@@ -1,0 +1,63 @@
+import { cloneElement, type ReactElement } from "react";
+import { Document } from "@react-pdf/renderer";
+import type { Preferences } from "@/lib/domain/preferences";
+import type { PaperDocument } from "@/lib/domain/views";
+import { printable } from "../glyphs";
+import type { Sheet } from "../theme";
+import { bookletPages } from "./booklet";
+import { fieldCardPages } from "./field-card";
+import { packListPages } from "./pack-list";
+import { pitchCardPages } from "./pitch-card";
+
+function pagesOf(paper: PaperDocument, sheet: Sheet, preferences: Preferences): ReactElement[] {
+  switch (paper.kind) {
+    case "field-card":
+      return fieldCardPages({ ...paper, sheet, preferences });
+    case "pitch-card":
+      return paper.camp.pitches
+        .filter((pitch) => paper.pitchIds.includes(pitch.id))
+        .flatMap((pitch) => pitchCardPages({ ...paper, sheet, preferences }, pitch));
+    case "pack-list":
+      return packListPages(paper.header, paper.list, sheet);
+    case "booklet":
+      return bookletPages(paper, sheet, preferences);
+  }
+}
+
+const NAMES = {
+  "field-card": "field card",
+  "pitch-card": "pitch card",
+  "pack-list": "pack list",
+  booklet: "booklet",
+} as const;
+
+function titleOf(paper: PaperDocument): string {
+  const what =
+    paper.kind === "pack-list"
+      ? paper.list.person.name
+      : paper.kind === "booklet"
+        ? null
+        : paper.camp.camp.details.name;
+  return [paper.header.tripName, what, NAMES[paper.kind]].filter(Boolean).join(": ");
+}
+
+/** Any number of papers as one document, in order. */
+export function papersDocument(papers: readonly PaperDocument[], sheet: Sheet, preferences: Preferences) {
+  const [first] = papers;
+  const title = first ? printable(titleOf(first)) : "";
+  return (
+    <Document
+      title={title}
+      author="Leestead"
+      creator="Leestead"
+      producer="Leestead"
+      subject={first ? `Version ${first.header.version}, printed ${printable(first.header.printedAt)}` : undefined}
+      language="en-GB"
+      pageMode={papers.some((paper) => paper.kind === "booklet") ? "useOutlines" : "useNone"}
+    >
+      {papers.flatMap((paper, index) =>
+        pagesOf(paper, sheet, preferences).map((page) => cloneElement(page, { key: `${index}-${page.key}` })),
+      )}
+    </Document>
+  );
+}

@@ -1,0 +1,45 @@
+import { existsSync } from "node:fs";
+import { createRequire } from "node:module";
+import path from "node:path";
+import { Font } from "@react-pdf/renderer";
+
+/** Each file of the family holds one subset of letters; a text takes each letter from the first that has it. */
+const SUBSETS = ["latin", "latin-ext", "cyrillic", "cyrillic-ext", "vietnamese"] as const;
+const WEIGHTS = [400, 600, 800] as const;
+export type FontWeight = (typeof WEIGHTS)[number];
+
+export const FONT_STACK: string[] = SUBSETS.map((subset) => `Nunito Sans ${subset}`);
+
+const PACKAGE = "@fontsource/nunito-sans/package.json";
+
+/** Beside the bundle when bundled, beside the source in tests; the working directory when a bundler moved both. */
+function findFontFolder(): string {
+  for (const base of [import.meta.url, path.join(process.cwd(), "package.json")]) {
+    try {
+      const folder = path.join(path.dirname(createRequire(base).resolve(PACKAGE)), "files");
+      if (existsSync(folder)) return folder;
+    } catch {
+      continue;
+    }
+  }
+  throw new Error("The fonts of the papers are missing: run npm install.");
+}
+
+let isRegistered = false;
+
+/** woff, not woff2: with woff2 the text is there but cannot be seen. */
+export function registerFonts(): void {
+  if (isRegistered) return;
+  const folder = findFontFolder();
+  for (const subset of SUBSETS) {
+    Font.register({
+      family: `Nunito Sans ${subset}`,
+      fonts: WEIGHTS.map((fontWeight) => ({
+        src: path.join(folder, `nunito-sans-${subset}-${fontWeight}-normal.woff`),
+        fontWeight,
+      })),
+    });
+  }
+  Font.registerHyphenationCallback((word) => [word]);
+  isRegistered = true;
+}
