@@ -33,7 +33,7 @@ export const DIAMOND = defineFamily({
     support: "trees-or-poles",
   },
   fabric: "nylon-light",
-  lineDiameterMm: 2,
+  lineDiameterMm: 3,
   heightM: (d) => d.frontHeightM,
   check: (d) =>
     foldMap(d.sideM, d.frontHeightM) === null || d.frontHeightM > 0.75 * d.sideM

@@ -22,7 +22,7 @@ export const DOME = defineFamily({
     support: "hoops",
   },
   fabric: "polyester-light",
-  lineDiameterMm: 2.5,
+  lineDiameterMm: 3,
   heightM: (d) => d.heightM,
   check: (d) =>
     d.heightM > Math.min(d.widthM, d.depthM)

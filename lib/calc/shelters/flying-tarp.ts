@@ -18,7 +18,7 @@ export const FLYING_TARP = defineFamily({
     support: "trees-or-poles",
   },
   fabric: "nylon-light",
-  lineDiameterMm: 2,
+  lineDiameterMm: 3,
   heightM: (d) => Math.max(d.frontHeightM, d.rearHeightM),
   check: (d) =>
     Math.abs(d.frontHeightM - d.rearHeightM) > 0.5 * d.lengthM

@@ -17,7 +17,7 @@ export const HALF_PYRAMID = defineFamily({
     support: "trees-or-poles",
   },
   fabric: "nylon-light",
-  lineDiameterMm: 2,
+  lineDiameterMm: 3,
   heightM: (d) => d.heightM,
   check: (d) =>
     d.heightM > 1.2 * d.widthM

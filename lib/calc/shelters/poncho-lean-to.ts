@@ -17,7 +17,7 @@ export const PONCHO_LEAN_TO = defineFamily({
     support: "trees-or-poles",
   },
   fabric: "nylon-light",
-  lineDiameterMm: 2,
+  lineDiameterMm: 2.5,
   heightM: (d) => d.frontHeightM,
   check: (d) =>
     d.frontHeightM - HEM_HEIGHT_M > 0.9 * d.depthM

@@ -17,7 +17,7 @@ export const PYRAMID = defineFamily({
     support: "poles",
   },
   fabric: "polyester-light",
-  lineDiameterMm: 2.5,
+  lineDiameterMm: 3,
   heightM: (d) => d.heightM,
   check: (d) =>
     d.heightM > 1.2 * Math.min(d.widthM, d.depthM)

@@ -21,7 +21,7 @@ export const RIDGE_TARP = defineFamily({
     support: "trees-or-poles",
   },
   fabric: "nylon-light",
-  lineDiameterMm: 2,
+  lineDiameterMm: 3,
   heightM: (d) => d.ridgeHeightM,
   check: (d) => {
     const dropM = d.ridgeHeightM - d.hemHeightM;

@@ -22,7 +22,7 @@ export const TUNNEL = defineFamily({
     support: "hoops",
   },
   fabric: "polyester-light",
-  lineDiameterMm: 2.5,
+  lineDiameterMm: 3,
   heightM: (d) => d.heightM,
   check: (d) =>
     d.heightM > 1.2 * d.widthM
@@ -53,6 +53,20 @@ export const TUNNEL = defineFamily({
         towards: { x: 0, y: sign },
         typicalLengthM: HEM_LOOP_M,
       });
+      for (const [side, u] of [
+        ["right", 0.25],
+        ["left", 0.75],
+      ] as const) {
+        const point = endHem(u);
+        mesh.tieOut({
+          id: `hem-${end}-${side}`,
+          name: `Hem, ${end} ${side}`,
+          kind: "hem",
+          node: mesh.node(point),
+          towards: { x: point.x, y: point.y - sign * y },
+          typicalLengthM: HEM_LOOP_M,
+        });
+      }
       for (const [side, direction, foot, guy] of [
         ["right", 1, arch(0, sign * y), arch(0.25, sign * y)],
         ["left", -1, arch(1, sign * y), arch(0.75, sign * y)],
