@@ -108,6 +108,12 @@ function recallTieOut(
 
 const isLess = (a: number | null, b: number | null): boolean => a !== null && (b === null || a < b);
 
+/** The lowest of all; null when one is not known or there are none. */
+function lowest(gustsMs: readonly (number | null)[]): number | null {
+  const known = gustsMs.filter((gust) => gust !== null);
+  return known.length > 0 && known.length === gustsMs.length ? Math.min(...known) : null;
+}
+
 /** The tie-out that decides the verdict: the weakest that gives way, else the first with a gap, else the weakest. */
 function findWeakest(tieOuts: readonly TieOutResult[]): TieOutResult | null {
   let weakest: TieOutResult | null = null;
@@ -135,16 +141,15 @@ function evaluateShelter(
       : shelter.gaps.length > 0
         ? worstVerdict([...parts, "unknown"])
         : worstVerdict(parts);
-  const limits = tieOuts.map((one) => one.holdsToGustMs);
-  const isComplete = limits.length > 0 && limits.every((limit) => limit !== null);
+  const holds = lowest(tieOuts.map((one) => one.holdsToGustMs));
+  const stands = shelter.standsToGustMs;
   const result: ShelterResult = {
     pitchId,
     name,
     verdict,
     gaps: shelter.gaps,
-    holdsToGustMs: isComplete
-      ? Math.min(...limits.filter((limit) => limit !== null), shelter.standsToGustMs ?? Infinity)
-      : null,
+    holdsToGustMs: holds === null || stands === null ? null : Math.min(holds, stands),
+    isHoldsToOpen: holds !== null && stands !== null && shelter.isStandsToOpen && holds >= stands,
     tieOuts,
     weakestTieOutId: findWeakest(tieOuts)?.tieOutId ?? null,
     standing: shelter.standing,
@@ -169,22 +174,22 @@ function countLeft(prepared: PreparedCamp, placements: readonly Placement[]): Re
  * computed; results of the others are the same objects as before.
  *
  * Holds-to gusts are 3-second gusts at 10 m over open ground, m/s, found to 0.2 %, from 0 to LARGEST_GUST_MS (then
- * "this or more"). A shelter holds to what its weakest tie-out holds to, and no further than the highest wind level in
- * which a standing shape was found.
+ * "this or more"); above the highest analysed level pulls are extended by their last slope. A shelter holds to what its
+ * weakest tie-out holds to, and no further than the highest analysed level up to which it has a standing shape.
  */
 export function evaluatePlacements(prepared: PreparedCamp, placements: readonly Placement[]): CampResult {
   const placementAt = new Map(placements.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
   const shelters = prepared.shelters.map((shelter) => evaluateShelter(prepared, shelter, placementAt));
   const verdicts = shelters.map((shelter) => shelter.verdict);
-  const limits = shelters.map((shelter) => shelter.holdsToGustMs);
-  const isComplete = limits.length > 0 && limits.every((limit) => limit !== null);
+  const holds = lowest(shelters.map((shelter) => shelter.holdsToGustMs));
   const weakest = findWeakest(shelters.flatMap((shelter) => shelter.tieOuts));
   return {
     verdict: worstVerdict(prepared.isComplete ? verdicts : [...verdicts, "unknown"]),
     gaps: prepared.gaps,
     designGustMs: prepared.designGustMs,
     wind: prepared.wind,
-    holdsToGustMs: isComplete ? Math.min(...limits.filter((limit) => limit !== null)) : null,
+    holdsToGustMs: holds,
+    isHoldsToOpen: shelters.some((shelter) => shelter.holdsToGustMs === holds && shelter.isHoldsToOpen === true),
     weakest: weakest ? { pitchId: weakest.pitchId, tieOutId: weakest.tieOutId } : null,
     shelters,
     left: countLeft(prepared, placements),

@@ -1,4 +1,4 @@
-import { demandAt } from "./analyse-shelter";
+import { demandAt, standsToPa } from "./analyse-shelter";
 import { describeTieOut } from "./describe-tie-out";
 import { pullCyclesInNight } from "./loosening";
 import { buildShelter, referenceHeightM } from "./shelter-kinds";
@@ -9,7 +9,6 @@ import type {
   GroundState,
   PitchedShelter,
   Placement,
-  ShelterAnalysis,
   ShelterResult,
   ShelterSpec,
   TieOut,
@@ -47,8 +46,10 @@ export interface PreparedShelter {
   readonly tieOuts: readonly PreparedTieOut[];
   readonly gaps: readonly Gap[];
   readonly standing: boolean | null;
-  /** Gust of the highest level with a standing shape when a higher one has none; null = none was found without. */
+  /** Gust of the highest analysed level up to which there is a standing shape, m/s; null with a gap. */
   readonly standsToGustMs: number | null;
+  /** True when that is simply the highest level analysed. */
+  readonly isStandsToOpen: boolean;
   /** Gusts of the analysed levels, m/s, ascending. */
   readonly checkpointsMs: readonly number[];
   readonly memo: { last: ShelterResult | null };
@@ -77,6 +78,12 @@ export interface AnalysisRequest {
   readonly pressurePa: number;
 }
 
+/**
+ * Lightest wind that is analysed, Pa (a gust of about 10 m/s): below it pulls are read off between the levels, so that
+ * "holds to" does not end at a breeze.
+ */
+const LEAST_ANALYSED_PA = 60;
+
 const turn = (angleDeg: number): number => ((angleDeg % 360) + 360) % 360;
 
 /** The tie-outs of a shelter, or the gap that says why there are none. */
@@ -94,7 +101,7 @@ function tieOutsOf(pitch: PitchedShelter): { readonly tieOuts: readonly TieOut[]
 
 /**
  * The analysis that a pitched shelter needs in the camp's wind: directions relative to the shelter (compass − heading,
- * degrees clockwise) and the velocity pressure at its height, Pa. With gaps when the wind is not known or the shelter
+ * degrees clockwise) and the velocity pressure at its height, Pa, at least LEAST_ANALYSED_PA. With gaps when the wind is not known or the shelter
  * can't be built.
  */
 export function designAnalysisRequest(
@@ -110,21 +117,8 @@ export function designAnalysisRequest(
     relativeWindDirectionsDeg: windDirections(camp.wind.fromDeg, camp.wind.toDeg).map((direction) =>
       turn(direction - pitch.headingDeg),
     ),
-    pressurePa: found.wind.pressurePa,
+    pressurePa: Math.max(LEAST_ANALYSED_PA, found.wind.pressurePa),
   };
-}
-
-/** Pressure levels of an analysis from below, with whether each has a standing shape. */
-function levelsOf(analysis: ShelterAnalysis): { pressurePa: number; standing: boolean }[] {
-  return [analysis.design, ...analysis.levels]
-    .map(({ pressurePa, standing }) => ({ pressurePa, standing }))
-    .sort((a, b) => a.pressurePa - b.pressurePa || Number(a.standing) - Number(b.standing));
-}
-
-/** The highest pressure with a standing shape below the first without, Pa; null when all have one. */
-function standsToPressure(levels: readonly { pressurePa: number; standing: boolean }[]): number | null {
-  const fall = levels.findIndex((level) => !level.standing);
-  return fall < 0 ? null : (levels[fall - 1]?.pressurePa ?? 0);
 }
 
 type Draft = Omit<PreparedShelter, "tieOuts"> & { readonly tieOuts: readonly Omit<PreparedTieOut, "priority">[] };
@@ -150,17 +144,19 @@ function draftShelter(input: CampInput, pitch: PitchedShelter): Draft {
     gaps.push({ field: "shelter.analysis", message: `The pull in the lines of ${pitch.name} is not worked out yet.` });
   }
   const isKnown = analysis !== null && wind !== null && fits;
-  const levels = isKnown ? levelsOf(analysis) : [];
-  const standsTo = standsToPressure(levels);
+  const levelsPa = isKnown ? analysis.levels.map((level) => level.pressurePa) : [];
+  const fallsAbovePa = isKnown ? standsToPa(analysis) : null;
   const gustAt = (pressurePa: number): number =>
     wind && wind.pressurePerGustSquared > 0 ? Math.sqrt(pressurePa / wind.pressurePerGustSquared) : LARGEST_GUST_MS;
+  const { fromDeg, toDeg } = input.wind;
+  const windRange = fromDeg === null || toDeg === null ? null : { fromDeg, toDeg };
   const tieOuts = built.tieOuts.map((tieOut) => {
     const demandIndex = isKnown ? (indexOf.get(tieOut.id) ?? -1) : -1;
     const demand = isKnown ? demandAt(analysis, demandIndex, wind.pressurePa) : null;
     const consequence = isKnown ? (analysis.consequences.find((one) => one.tieOutId === tieOut.id) ?? null) : null;
     return {
       tieOut,
-      name: describeTieOut(tieOut, pitch.headingDeg, input.wind),
+      name: describeTieOut(tieOut, pitch.headingDeg, windRange),
       demandIndex,
       demandN: demand?.pullN ?? null,
       lineAngleDeg: demand?.lineAngleDeg ?? null,
@@ -177,10 +173,11 @@ function draftShelter(input: CampInput, pitch: PitchedShelter): Draft {
     wind,
     tieOuts,
     gaps,
-    // A stale analysis may have been made for another pressure; a whisker of it is rounding.
-    standing: isKnown ? standsTo === null || wind.pressurePa <= standsTo * (1 + 1e-9) : null,
-    standsToGustMs: standsTo === null ? null : gustAt(standsTo),
-    checkpointsMs: levels.map((level) => gustAt(level.pressurePa)),
+    // An analysis may have been made for another pressure; a whisker of it is rounding.
+    standing: isKnown ? fallsAbovePa === null || wind.pressurePa <= fallsAbovePa * (1 + 1e-9) : null,
+    standsToGustMs: isKnown ? gustAt(fallsAbovePa ?? Math.max(...levelsPa)) : null,
+    isStandsToOpen: isKnown && fallsAbovePa === null,
+    checkpointsMs: levelsPa.map(gustAt),
     memo: { last: null },
   };
 }

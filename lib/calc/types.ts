@@ -479,6 +479,8 @@ export interface ShelterResult {
   readonly verdict: Verdict;
   readonly gaps: readonly Gap[];
   readonly holdsToGustMs: number | null;
+  /** True when nothing gave way up to the strongest wind that was calculated: read "or more". */
+  readonly isHoldsToOpen?: boolean;
   /** Ranked by priority, highest first. */
   readonly tieOuts: readonly TieOutResult[];
   /** The tie-out that decides the verdict. */
@@ -492,6 +494,8 @@ export interface CampResult {
   readonly designGustMs: number | null;
   readonly wind: WindAtShelter | null;
   readonly holdsToGustMs: number | null;
+  /** True when nothing gave way up to the strongest wind that was calculated: read "or more". */
+  readonly isHoldsToOpen?: boolean;
   readonly weakest: { readonly pitchId: string; readonly tieOutId: string } | null;
   readonly shelters: readonly ShelterResult[];
   /** Count still free in the tray by anchor id (negative never happens: a placement that would do it is refused). */
