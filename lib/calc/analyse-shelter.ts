@@ -19,6 +19,8 @@ export const CALC_VERSION = 1;
 
 /** Pressures at which the response is worked out, as multiples of the design pressure. */
 const LEVELS: readonly number[] = [0, 0.1, 0.25, 0.5, 0.75, 1, 1.5, 2.25, 3.5, 5];
+/** Halvings of the step between two levels in which the shelter falls: a sixteenth of it remains. */
+const HALVINGS = 4;
 const LOAD_CASES: readonly LoadCase[] = ["pressing", "lifting"];
 
 export interface ShelterAnalysisInput {
@@ -90,7 +92,7 @@ export function analyseShelter(input: ShelterAnalysisInput): ShelterAnalysis {
   const designCases = cases.map((one) => solveCase(shelter, one, pressurePa));
   const governing = shelter.model.tieOuts.map((_, index) => governingCase(designCases, index));
   const levels = monotoneLevels(shelter, governing, designCases, pressurePa);
-  const design = levels[LEVELS.indexOf(1)];
+  const design = levels.find((level) => level.pressurePa === pressurePa);
   if (!design) throw new RangeError("The design level is missing.");
   return {
     design,
@@ -120,6 +122,11 @@ function governingCase(cases: readonly SolvedCase[], tieOut: number): SolvedCase
   return best;
 }
 
+interface Level {
+  readonly multiple: number;
+  readonly cases: readonly SolvedCase[];
+}
+
 /** Responses at every level, pulls made to rise with the pressure. */
 function monotoneLevels(
   shelter: ShelterNet,
@@ -132,22 +139,53 @@ function monotoneLevels(
   );
   const followed = [...new Set([...governing, lowest])].filter((one) => one !== undefined);
   // Each level starts from the shape of the next one nearer to the design pressure: it is close, so it settles soon.
-  const follow = (multiples: readonly number[]): SolvedCase[][] => {
-    const solved: SolvedCase[][] = [];
+  const follow = (multiples: readonly number[]): Level[] => {
+    const levels: Level[] = [];
     for (const multiple of multiples) {
-      const before = solved[solved.length - 1] ?? followed;
-      solved.push(before.map((one) => solveCase(shelter, one, multiple * pressurePa, startOf(one))));
+      const before = levels[levels.length - 1]?.cases ?? followed;
+      levels.push({
+        multiple,
+        cases: before.map((one) => solveCase(shelter, one, multiple * pressurePa, startOf(one))),
+      });
     }
-    return solved;
+    return levels;
   };
   const below = follow(LEVELS.filter((multiple) => multiple < 1).reverse()).reverse();
   const above = follow(LEVELS.filter((multiple) => multiple > 1));
-  const solved = [...below, designCases, ...above];
+  const levels = [...below, { multiple: 1, cases: designCases }, ...above];
+  levels.push(...closeInOnFall(shelter, followed, levels, pressurePa));
+  levels.sort((a, b) => a.multiple - b.multiple);
   const responses: ShelterResponse[] = [];
-  LEVELS.forEach((multiple, index) => {
-    responses.push(envelope(shelter, solved[index] ?? [], multiple * pressurePa, responses[index - 1]));
-  });
+  for (const { multiple, cases } of levels)
+    responses.push(envelope(shelter, cases, multiple * pressurePa, responses[responses.length - 1]));
   return responses;
+}
+
+/** Halves the step in which the shelter first loses its shape, so that its own limit is known within a few per cent. */
+function closeInOnFall(
+  shelter: ShelterNet,
+  followed: readonly SolvedCase[],
+  levels: readonly Level[],
+  pressurePa: number,
+): Level[] {
+  const stands = ({ cases }: Level) => cases.every((one) => one.equilibrium.standing);
+  const fallen = levels.findIndex((level) => !stands(level));
+  const [low, high] = [levels[fallen - 1], levels[fallen]];
+  if (!low || !high) return [];
+  const found: Level[] = [];
+  let lowMultiple = low.multiple;
+  let highMultiple = high.multiple;
+  for (let step = 0; step < HALVINGS; step += 1) {
+    const multiple = (lowMultiple + highMultiple) / 2;
+    const level = {
+      multiple,
+      cases: followed.map((one) => solveCase(shelter, one, multiple * pressurePa, startOf(one))),
+    };
+    found.push(level);
+    if (stands(level)) lowMultiple = multiple;
+    else highMultiple = multiple;
+  }
+  return found;
 }
 
 /** A shape to start from, unless the case fell down: then the drawn one. */
