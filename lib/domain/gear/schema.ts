@@ -17,3 +17,5 @@ export const gearUpdateInput = z.object({
   details: gearDetailsSchema,
 });
 export const gearDeleteInput = z.object({ gearId: idSchema });
+/** Things in one person's gear. */
+export const MAX_GEAR = 200;

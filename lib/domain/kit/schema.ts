@@ -119,3 +119,5 @@ export const kitItemUpdateInput = z.object({
 
 export const kitItemRefInput = z.object({ tripId: idSchema, kitItemId: idSchema });
 export const kitItemDeleteInput = kitItemRefInput.extend({ confirmed: z.boolean().default(false) });
+/** Kinds of things in one trip's kit. */
+export const MAX_KIT_ITEMS = 100;

@@ -15,6 +15,8 @@ export const SHELTER_KIND_IDS = [
   "dome",
   "bell",
 ] as const;
+/** Of one trip. */
+export const MAX_SHELTERS = 60;
 export const FABRIC_IDS = ["nylon-light", "polyester-light", "polyester-heavy", "cotton-canvas", "laminate"] as const;
 export const LINE_MATERIAL_IDS = ["polyester", "nylon", "uhmwpe"] as const;
 export const PATCHES = ["main", "second"] as const;

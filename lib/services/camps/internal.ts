@@ -1,0 +1,79 @@
+import { and, asc, eq } from "drizzle-orm";
+import { camp } from "@/db/schema";
+import type { CampDetails } from "@/lib/domain/camp/schema";
+import { MAX_NIGHTS } from "@/lib/domain/trip/schema";
+import type { CampView } from "@/lib/domain/views";
+import { AppError } from "@/lib/errors";
+import { addDays } from "@/lib/format/days";
+import type { Reader } from "../trips/internal";
+
+export type CampRow = typeof camp.$inferSelect;
+
+export async function listCampRows(reader: Reader, tripId: string): Promise<CampRow[]> {
+  return reader.select().from(camp).where(eq(camp.tripId, tripId)).orderBy(asc(camp.position), asc(camp.id));
+}
+
+export async function loadCampRow(reader: Reader, tripId: string, campId: string): Promise<CampRow> {
+  const [row] = await reader
+    .select()
+    .from(camp)
+    .where(and(eq(camp.id, campId), eq(camp.tripId, tripId)))
+    .limit(1);
+  if (!row) throw new AppError("not-found", "There is no such camp on this trip.");
+  return row;
+}
+
+export function countNights(camps: readonly { readonly nights: number }[]): number {
+  return camps.reduce((sum, one) => sum + one.nights, 0);
+}
+
+export function requireNightsFit(nights: number): void {
+  if (nights <= MAX_NIGHTS) return;
+  throw new AppError("bad-input", `A trip can have at most ${MAX_NIGHTS} nights.`, {
+    fieldErrors: { "details.nights": [`With this camp the trip has ${nights} nights; at most ${MAX_NIGHTS} fit.`] },
+  });
+}
+
+export function toCampDetails(row: CampRow): CampDetails {
+  return {
+    name: row.name,
+    nights: row.nights,
+    latitude: row.latitude,
+    longitude: row.longitude,
+    altitudeM: row.altitudeM,
+    ground: row.ground,
+    secondGround: row.secondGround,
+    slopeDeg: row.slopeDeg,
+    exposure: row.exposure,
+    hill: row.hill,
+    windbreak: row.windbreak,
+    underTreesSpeedRatio: row.underTreesSpeedRatio,
+    temperatureC: row.temperatureC,
+    wind: row.wind,
+    windFromDeg: row.windFromDeg,
+    windToDeg: row.windToDeg,
+    strongWindHours: row.strongWindHours,
+    hasRocks: row.hasRocks,
+    hasTrees: row.hasTrees,
+    hasSticks: row.hasSticks,
+    water: row.water,
+    notes: row.notes,
+    hazards: row.hazards,
+  };
+}
+
+/** Days follow from the trip's first day and the nights of the camps before. */
+export function toCampViews(startDate: string, rows: readonly CampRow[]): CampView[] {
+  let nightsBefore = 0;
+  return rows.map((row) => {
+    const first = nightsBefore;
+    nightsBefore += row.nights;
+    return {
+      id: row.id,
+      position: row.position,
+      days: Array.from({ length: row.nights }, (_, night) => addDays(startDate, first + night)),
+      details: toCampDetails(row),
+      version: row.version,
+    };
+  });
+}

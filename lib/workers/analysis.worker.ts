@@ -1,0 +1,4 @@
+import { computeAnalysis } from "./analysis-task";
+import { serveWorker } from "./serve-worker";
+
+serveWorker(computeAnalysis);
