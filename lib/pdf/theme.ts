@@ -10,7 +10,7 @@ export const PALE = "#c9c9c9";
 export const TYPE = { small: 9, body: 10, strong: 10.5, number: 14, fact: 22, title: 27 } as const;
 export const LEADING = 1.3;
 
-const MARGIN = 32;
+const MARGIN = 30;
 
 /** Sheet sizes of react-pdf, points, and what is left inside the margins. */
 const SHEETS: Readonly<Record<PaperSize, { readonly width: number; readonly height: number }>> = {
@@ -33,6 +33,6 @@ export function sheetOf(size: PaperSize): Sheet {
 }
 
 export const CAUTIONS =
-  "Estimates from typical ground: test on site. A shelter is no refuge in a storm: leave in time. Look up for dead " +
-  "limbs. Keep off flood plains, avalanche ground, and ridges in thunder. No flame or stove inside. Local rules, land " +
-  "managers and qualified guides come first.";
+  "Estimates from typical ground: test on site. No shelter is safe in a storm: leave in time. Look up for dead limbs. " +
+  "Keep clear of flood plains, lightning and avalanche ground. No flames or stoves inside. Local rules, land managers " +
+  "and qualified guides come first.";

@@ -11,7 +11,6 @@ import { formatDay } from "@/lib/format/days";
 import { formatLength, formatMillimetres } from "@/lib/format/lengths";
 import { withUnit } from "@/lib/format/numbers";
 import { formatBeaufort, formatHoldsTo, formatSpeed } from "@/lib/format/speeds";
-import { startSentence } from "@/lib/format/words";
 
 /** How the camps, shelters and tie-outs of a plan are put into words on paper. */
 
@@ -148,8 +147,6 @@ function weakestWords(result: CampResult): string {
 export function lowerFirst(text: string): string {
   return text.charAt(0).toLowerCase() + text.slice(1);
 }
-
-export const capitalised = startSentence;
 
 /** The address without what a hand-held reader does not need to type. */
 export function shortAddress(address: string): string {

@@ -7,8 +7,14 @@ import { joinWords, plural } from "@/lib/format/words";
 import { columns, fillPages, hairline, spacer, stack, textBlock, type Block, type TextStyle } from "../sections/block";
 import { StateIcon } from "../sections/marks";
 import { contactsNote, note, stackNotes } from "../sections/notes";
-import { bodyHeight, PageFrame, pageHeader, type Heading } from "../sections/page-frame";
-import { qrCode } from "../sections/qr-code";
+import {
+  bodyHeight,
+  continuedHeader,
+  PageFrame,
+  pageHeader,
+  type Heading,
+  type PageFrameProps,
+} from "../sections/page-frame";
 import { GREY, TYPE, type Sheet } from "../theme";
 import { groundName, stateWord } from "../words";
 import { fieldCardPages } from "./field-card";
@@ -18,7 +24,7 @@ import { pitchCardPages, type CardContext } from "./pitch-card";
 type Booklet = Extract<PaperDocument, { kind: "booklet" }>;
 
 /** The whole trip: its nights, then each camp's field card and pitch cards, then everybody's pack list. */
-export function bookletPages(booklet: Booklet, sheet: Sheet, preferences: Preferences): ReactElement[] {
+export function bookletPages(booklet: Booklet, sheet: Sheet, preferences: Preferences): ReactElement<PageFrameProps>[] {
   const { header, contacts } = booklet;
   return [
     ...coverPages(booklet, sheet, preferences),
@@ -30,14 +36,13 @@ export function bookletPages(booklet: Booklet, sheet: Sheet, preferences: Prefer
   ];
 }
 
-const QR_SIDE = 84;
 const GAP = 16;
 
-function coverPages(booklet: Booklet, sheet: Sheet, preferences: Preferences): ReactElement[] {
+function coverPages(booklet: Booklet, sheet: Sheet, preferences: Preferences): ReactElement<PageFrameProps>[] {
   const { header, trip } = booklet;
   const heading: Heading = { kicker: `Booklet · ${formatDayRange(trip.startDate, trip.endDate)}`, title: trip.name };
   const top = pageHeader(header, heading, sheet);
-  const nextTop = pageHeader(header, heading, sheet, true);
+  const nextTop = continuedHeader(header, heading, sheet);
   const blocks = [
     coverNotes(booklet, sheet),
     nightsHead(sheet.inner),
@@ -56,9 +61,9 @@ function coverPages(booklet: Booklet, sheet: Sheet, preferences: Preferences): R
   ));
 }
 
-function coverNotes({ header, trip, contacts, camps, packLists }: Booklet, sheet: Sheet): Block {
-  const text = sheet.inner - QR_SIDE - 2 * GAP;
-  const left = text * 0.58;
+function coverNotes({ trip, contacts, camps, packLists }: Booklet, sheet: Sheet): Block {
+  const text = sheet.inner - GAP;
+  const left = text * 0.66;
   const right = text - left;
   const shelters = new Set(camps.flatMap((camp) => camp.pitches.map((pitch) => pitch.shelterId))).size;
   const nights = camps.reduce((sum, camp) => sum + camp.camp.details.nights, 0);
@@ -77,7 +82,6 @@ function coverNotes({ header, trip, contacts, camps, packLists }: Booklet, sheet
           ]),
         },
         { width: right, block: contactsNote(contacts, right) },
-        { width: QR_SIDE, block: qrCode(header.address, QR_SIDE) },
       ],
       GAP,
     ),

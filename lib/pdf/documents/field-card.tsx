@@ -7,23 +7,30 @@ import { formatAltitude } from "@/lib/format/lengths";
 import { withUnit } from "@/lib/format/numbers";
 import { formatPosition } from "@/lib/format/positions";
 import { formatBeaufort, formatSpeed } from "@/lib/format/speeds";
+import { startSentence } from "@/lib/format/words";
 import { columns, fillPages, hairline, rule, spacer, stack, textBlock, type Block } from "../sections/block";
 import { factRow } from "../sections/facts";
 import { contactsNote, note, stackNotes } from "../sections/notes";
-import { bodyHeight, PageFrame, pageHeader, type Heading } from "../sections/page-frame";
-import { qrCode } from "../sections/qr-code";
+import {
+  bodyHeight,
+  continuedHeader,
+  PageFrame,
+  pageHeader,
+  type Heading,
+  type PageFrameProps,
+} from "../sections/page-frame";
 import { StateIcon } from "../sections/marks";
 import { stateLegend, tieOutTable } from "../sections/tie-out-table";
 import { weakestTable } from "../sections/weakest-table";
 import { GREY, TYPE } from "../theme";
 import {
   campHeadline,
-  capitalised,
   facingWords,
   groundName,
   groundRemarks,
   hazardNames,
   holdsToWords,
+  lowerFirst,
   nightWords,
 } from "../words";
 import { drawingOf, rowsOf, type CardContext } from "./pitch-card";
@@ -31,20 +38,21 @@ import { drawingOf, rowsOf, type CardContext } from "./pitch-card";
 type Keeping = Block & { readonly keepsWithNext?: boolean };
 
 /** A camp: what to know and all shelters on the first page, then every tie-out, shelter by shelter. */
-export function fieldCardPages(context: CardContext): ReactElement[] {
+export function fieldCardPages(context: CardContext): ReactElement<PageFrameProps>[] {
   const { header, camp, sheet } = context;
   const heading: Heading = {
     kicker: `${header.tripName} · ${nightWords(camp.nightNumbers, camp.camp)}`,
     title: camp.camp.details.name,
   };
   const top = pageHeader(header, heading, sheet);
-  const nextTop = pageHeader(header, heading, sheet, true);
+  const nextTop = continuedHeader(header, heading, sheet);
+  const first = [headline(context), factRow(campFacts(context), sheet.inner), campNotes(context)];
+  const weakest = weakestTable(camp, sheet.inner, context.preferences);
+  const room = bodyHeight(header, sheet, top) - heightOf(first);
   const blocks: Keeping[] = [
-    headline(context),
-    factRow(campFacts(context), sheet.inner),
-    campNotes(context),
-    ...planGrid(context),
-    ...weakestTable(camp, sheet.inner, context.preferences),
+    ...first,
+    ...planGrid(context, room, heightOf(weakest)),
+    ...weakest,
     ...camp.pitches.flatMap((pitch) => shelterSection(context, pitch)),
   ];
   return fillPages(blocks, (index) => bodyHeight(header, sheet, index === 0 ? top : nextTop)).map((page, index) => (
@@ -59,6 +67,8 @@ export function fieldCardPages(context: CardContext): ReactElement[] {
     </PageFrame>
   ));
 }
+
+const heightOf = (blocks: readonly Block[]) => blocks.reduce((sum, block) => sum + block.height, 0);
 
 function headline({ camp, sheet, preferences }: CardContext): Block {
   const width = sheet.inner - 22;
@@ -117,15 +127,14 @@ function groundWords(details: CardContext["camp"]["camp"]["details"]): string {
     ? groundRemarks(details.ground, details.slopeDeg) || "in its usual state"
     : "Choose the ground at the camp.";
   const second = groundName(details.secondGround);
-  return second === null ? main : `${main} · second patch: ${second.toLowerCase()}`;
+  return second === null ? main : `${main}\nSecond patch: ${second.toLowerCase()}`;
 }
 
-const QR_SIDE = 62;
 const GAP = 14;
 
-function campNotes({ header, camp, contacts, sheet, preferences }: CardContext): Block {
+function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
   const { details } = camp.camp;
-  const width = (sheet.inner - QR_SIDE - 3 * GAP) / 3;
+  const width = (sheet.inner - 2 * GAP) / 3;
   const position =
     details.latitude === null || details.longitude === null
       ? null
@@ -141,18 +150,17 @@ function campNotes({ header, camp, contacts, sheet, preferences }: CardContext):
           block: stackNotes([
             note("Place", [position ?? "position not said", altitude].filter(Boolean).join("\n"), width),
             details.water ? note("Water", details.water, width) : null,
+            details.notes ? note("Notes", details.notes, width) : null,
           ]),
         },
         {
           width,
           block: stackNotes([
-            hazards.length ? note("Mind", `${hazards.join(", ")}.`, width) : null,
-            camp.result.retension === null ? null : note("Check again", capitalised(camp.result.retension), width),
-            details.notes ? note("Notes", details.notes, width) : null,
+            hazards.length ? note("Mind", `${startSentence(hazards.map(lowerFirst).join(", "))}.`, width) : null,
+            camp.result.retension === null ? null : note("Check again", camp.result.retension, width),
           ]),
         },
         { width, block: contactsNote(contacts, width) },
-        { width: QR_SIDE, block: qrCode(header.address, QR_SIDE) },
       ],
       GAP,
     ),
@@ -161,14 +169,23 @@ function campNotes({ header, camp, contacts, sheet, preferences }: CardContext):
   ]);
 }
 
-/** All shelters at a glance, two to four side by side. */
-function planGrid(context: CardContext): Keeping[] {
+const PLAN_HEADING = 37;
+const LOWEST_PLAN = 118;
+const HIGHEST_PLAN = 250;
+const OTHER_PLAN = 170;
+
+/** All shelters at a glance, as large as lets the first page hold them, and the weakest tie-outs with them if it can. */
+function planGrid(context: CardContext, room: number, weakestHeight: number): Keeping[] {
   const { camp, sheet } = context;
   const count = camp.pitches.length;
   if (count === 0) return [];
   const across = count === 1 ? 1 : count === 2 || count === 4 ? 2 : 3;
   const width = (sheet.inner - GAP * (across - 1)) / across;
-  const height = across === 1 ? 230 : across === 2 ? 180 : 150;
+  const legend = stack([spacer(2), stateLegend()]);
+  const heights = [room - weakestHeight, room].map(
+    (space) => (space - legend.height) / Math.ceil(count / across) - PLAN_HEADING,
+  );
+  const height = Math.min(HIGHEST_PLAN, heights.find((one) => one >= LOWEST_PLAN) ?? OTHER_PLAN);
   const rows: Keeping[] = [];
   for (let i = 0; i < count; i += across) {
     rows.push(
@@ -183,7 +200,7 @@ function planGrid(context: CardContext): Keeping[] {
       ]),
     );
   }
-  return [...rows, stack([spacer(2), stateLegend()])];
+  return [...rows, legend];
 }
 
 const resultOf = (context: CardContext, pitch: PitchView): ShelterResult | undefined =>

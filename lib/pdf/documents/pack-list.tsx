@@ -6,20 +6,25 @@ import { formatMass } from "@/lib/format/masses";
 import { joinWords, plural } from "@/lib/format/words";
 import { columns, fillPages, hairline, spacer, stack, textBlock, type Block } from "../sections/block";
 import { factRow } from "../sections/facts";
-import { bodyHeight, PageFrame, pageHeader, type Heading } from "../sections/page-frame";
-import { qrCode } from "../sections/qr-code";
+import {
+  bodyHeight,
+  continuedHeader,
+  PageFrame,
+  pageHeader,
+  type Heading,
+  type PageFrameProps,
+} from "../sections/page-frame";
 import { GREY, INK, TYPE, type Sheet } from "../theme";
 
 const BOX = 11;
-const QR_SIDE = 62;
 
 /** One person's list: what they bring, what they carry for the group, where and with whom they sleep. */
-export function packListPages(header: PaperHeader, list: PackListView, sheet: Sheet): ReactElement[] {
+export function packListPages(header: PaperHeader, list: PackListView, sheet: Sheet): ReactElement<PageFrameProps>[] {
   const heading: Heading = { kicker: `${header.tripName} · pack list`, title: list.person.name };
   const top = pageHeader(header, heading, sheet);
-  const nextTop = pageHeader(header, heading, sheet, true);
+  const nextTop = continuedHeader(header, heading, sheet);
   const blocks: (Block & { keepsWithNext?: boolean })[] = [
-    packFacts(header, list, sheet.inner),
+    packFacts(list, sheet.inner),
     ...section(
       "Carry for the group",
       tickRows(list.group, sheet.inner, 1),
@@ -43,34 +48,24 @@ export function packListPages(header: PaperHeader, list: PackListView, sheet: Sh
   ));
 }
 
-function packFacts(header: PaperHeader, list: PackListView, width: number): Block {
-  const next = list.nights.find((night) => night.shelterName !== null);
-  const facts = factRow(
+function packFacts(list: PackListView, width: number): Block {
+  const first = list.nights.find((night) => night.shelterName !== null);
+  const ticked = list.own.filter((line) => line.isTicked).length;
+  return factRow(
     [
+      { label: "Carry for the group", value: formatMass(list.groupMassKg), remark: plural(list.group.length, "piece") },
       {
-        label: "You carry for the group",
-        value: formatMass(list.groupMassKg),
-        remark: plural(list.group.length, "piece"),
-      },
-      {
-        label: "You bring",
+        label: "Bring yourself",
         value: plural(list.own.length, "thing"),
-        remark: `${list.own.filter((line) => line.isTicked).length} ticked off`,
+        remark: ticked === 0 ? "nothing ticked off yet" : `${ticked} ticked off`,
       },
       {
-        label: "You sleep first in",
-        value: next?.shelterName ?? "not placed yet",
-        remark: next ? `${next.campName}, ${formatDay(next.day)}` : "ask your leader",
+        label: "First night in",
+        value: first?.shelterName ?? "not placed yet",
+        remark: first ? `${first.campName}, ${formatDay(first.day)}` : "ask your leader",
       },
     ],
-    width - QR_SIDE - 16,
-  );
-  return columns(
-    [
-      { width: width - QR_SIDE - 16, block: facts },
-      { width: QR_SIDE, block: stack([spacer(6), qrCode(header.address, QR_SIDE)]) },
-    ],
-    16,
+    width,
   );
 }
 
@@ -117,7 +112,9 @@ function tickLine(line: PackLine, width: number): Block {
           <TickBox isTicked={line.isTicked} />
         </View>
         <View style={{ width: textWidth }}>{text.node}</View>
-        <View style={{ width: massWidth }}>{textBlock(mass, massWidth, { size: TYPE.body, align: "right" }).node}</View>
+        <View style={{ width: massWidth }}>
+          {textBlock(mass, massWidth, { size: TYPE.strong, align: "right" }).node}
+        </View>
       </View>
     ),
   };

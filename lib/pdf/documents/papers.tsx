@@ -2,6 +2,7 @@ import { cloneElement, type ReactElement } from "react";
 import { Document } from "@react-pdf/renderer";
 import type { Preferences } from "@/lib/domain/preferences";
 import type { PaperDocument } from "@/lib/domain/views";
+import type { PageFrameProps } from "../sections/page-frame";
 import { printable } from "../glyphs";
 import type { Sheet } from "../theme";
 import { bookletPages } from "./booklet";
@@ -9,7 +10,7 @@ import { fieldCardPages } from "./field-card";
 import { packListPages } from "./pack-list";
 import { pitchCardPages } from "./pitch-card";
 
-function pagesOf(paper: PaperDocument, sheet: Sheet, preferences: Preferences): ReactElement[] {
+function pagesOf(paper: PaperDocument, sheet: Sheet, preferences: Preferences): ReactElement<PageFrameProps>[] {
   switch (paper.kind) {
     case "field-card":
       return fieldCardPages({ ...paper, sheet, preferences });
@@ -45,6 +46,7 @@ function titleOf(paper: PaperDocument): string {
 export function papersDocument(papers: readonly PaperDocument[], sheet: Sheet, preferences: Preferences) {
   const [first] = papers;
   const title = first ? printable(titleOf(first)) : "";
+  const pages = papers.flatMap((paper) => pagesOf(paper, sheet, preferences));
   return (
     <Document
       title={title}
@@ -55,9 +57,7 @@ export function papersDocument(papers: readonly PaperDocument[], sheet: Sheet, p
       language="en-GB"
       pageMode={papers.some((paper) => paper.kind === "booklet") ? "useOutlines" : "useNone"}
     >
-      {papers.flatMap((paper, index) =>
-        pagesOf(paper, sheet, preferences).map((page) => cloneElement(page, { key: `${index}-${page.key}` })),
-      )}
+      {pages.map((page, index) => cloneElement(page, { key: index, page: index + 1, pageCount: pages.length }))}
     </Document>
   );
 }

@@ -1,19 +1,24 @@
 import type { ReactElement } from "react";
-import { buildShelter } from "@/lib/calc/shelter-kinds";
 import type { ShelterResult } from "@/lib/calc/types";
 import type { Preferences } from "@/lib/domain/preferences";
 import type { Contact } from "@/lib/domain/trip/schema";
 import type { PaperCamp, PaperHeader, PitchView } from "@/lib/domain/views";
-import { columns, spacer, stack, type Block } from "../sections/block";
+import { columns, fillPages, spacer, stack, type Block } from "../sections/block";
 import { factRow } from "../sections/facts";
 import { contactsNote, note, numberedNote, stackNotes } from "../sections/notes";
-import { bodyHeight, PageFrame, pageHeader, type Heading } from "../sections/page-frame";
-import { qrCode } from "../sections/qr-code";
-import { shelterDrawing } from "../sections/shelter-drawing";
+import {
+  bodyHeight,
+  continuedHeader,
+  PageFrame,
+  pageHeader,
+  type Heading,
+  type PageFrameProps,
+} from "../sections/page-frame";
+import { findModel, shelterDrawing } from "../sections/shelter-drawing";
+import { anchorsUsed } from "../sections/anchors-used";
 import { stateLegend, tieOutTable, type TieOutRow } from "../sections/tie-out-table";
 import type { Sheet } from "../theme";
 import {
-  capitalised,
   facingWords,
   groundName,
   groundRemarks,
@@ -32,13 +37,12 @@ export interface CardContext {
   readonly preferences: Preferences;
 }
 
-/** The drawing is never smaller than this, points; the table goes on overleaf before that. */
-const SMALLEST_DRAWING = 228;
-const LARGEST_DRAWING = 400;
-const FEWEST_ROWS = 3;
+/** The drawing is never smaller than this, points; before that the table goes overleaf, whole. */
+const SMALLEST_DRAWING = 185;
+const LARGEST_DRAWING = 430;
 
 /** One shelter at one camp: one page, two where it has many tie-outs. */
-export function pitchCardPages(context: CardContext, pitch: PitchView): ReactElement[] {
+export function pitchCardPages(context: CardContext, pitch: PitchView): ReactElement<PageFrameProps>[] {
   const { header, camp, sheet } = context;
   const shelter = camp.result.shelters.find((one) => one.pitchId === pitch.id);
   const heading: Heading = {
@@ -49,13 +53,10 @@ export function pitchCardPages(context: CardContext, pitch: PitchView): ReactEle
   const room = bodyHeight(header, sheet, top);
   const facts = factRow(pitchFacts(context, pitch, shelter), sheet.inner);
   const notes = stack([spacer(8), notesOf(context, pitch)]);
-  const table = tieOutTable({
-    rows: shelter ? rowsOf(camp, pitch, shelter) : [],
-    tray: camp.tray,
-    width: sheet.inner,
-    preferences: context.preferences,
-    isTight: (shelter?.tieOuts.length ?? 0) > 9,
-  });
+  const rows = shelter ? rowsOf(camp, pitch, shelter) : [];
+  const layTable = (isTight: boolean) =>
+    tieOutTable({ rows, tray: camp.tray, width: sheet.inner, preferences: context.preferences, isTight });
+  const table = layTable(rows.length > 9);
   const legend = stateLegend();
   const draw = (height: number) => drawingOf(context, pitch, shelter, sheet.inner, Math.min(height, LARGEST_DRAWING));
   const rowsHeight = table.rows.reduce((sum, row) => sum + row.height, 0);
@@ -69,30 +70,22 @@ export function pitchCardPages(context: CardContext, pitch: PitchView): ReactEle
     ];
   }
 
-  const space = room - facts.height - table.head.height - legend.height - SMALLEST_DRAWING - 40;
-  const first = countThatFit(table.rows, space, table.rows.length - FEWEST_ROWS);
-  const firstHeight = table.rows.slice(0, first).reduce((sum, row) => sum + row.height, 0);
-  const drawing = draw(room - facts.height - table.head.height - firstHeight - legend.height);
-  const nextTop = pageHeader(header, heading, sheet, true);
+  const roomy = layTable(false);
+  const used = anchorsUsed(rows, sheet.inner);
+  const drawing = draw(room - facts.height - legend.height - used.height - notes.height);
+  const nextTop = continuedHeader(header, heading, sheet);
   return [
     <PageFrame key={`${pitch.id}-1`} sheet={sheet} header={header} top={top} bookmark={heading.title}>
-      {stack([facts, drawing, table.head, ...table.rows.slice(0, first), legend]).node}
+      {stack([facts, drawing, legend, used, notes]).node}
     </PageFrame>,
-    <PageFrame key={`${pitch.id}-2`} sheet={sheet} header={header} top={nextTop}>
-      {stack([spacer(6), table.head, ...table.rows.slice(first), notes]).node}
-    </PageFrame>,
+    ...fillPages([stack([spacer(6), roomy.head]), ...roomy.rows], () => bodyHeight(header, sheet, nextTop)).map(
+      (page, index) => (
+        <PageFrame key={`${pitch.id}-${index + 2}`} sheet={sheet} header={header} top={nextTop}>
+          {stack(page).node}
+        </PageFrame>
+      ),
+    ),
   ];
-}
-
-function countThatFit(rows: readonly Block[], space: number, most: number): number {
-  let count = 0;
-  let left = space;
-  for (const row of rows) {
-    left -= row.height;
-    if (left < 0 || count >= most) break;
-    count += 1;
-  }
-  return count;
 }
 
 export function pitchFacts({ camp, preferences }: CardContext, pitch: PitchView, shelter: ShelterResult | undefined) {
@@ -120,10 +113,10 @@ export function pitchFacts({ camp, preferences }: CardContext, pitch: PitchView,
 }
 
 export function rowsOf(camp: PaperCamp, pitch: PitchView, shelter: ShelterResult): TieOutRow[] {
-  const model = buildShelter(pitch.spec);
+  const model = findModel(pitch.spec);
   return tieOutsByNumber(shelter).map((result) => ({
     result,
-    tieOut: model.tieOuts.find((one) => one.id === result.tieOutId) ?? null,
+    tieOut: model?.tieOuts.find((one) => one.id === result.tieOutId) ?? null,
     anchor: camp.tray.find((one) => one.id === result.placement?.anchorId) ?? null,
     isWeakest: shelter.weakestTieOutId === result.tieOutId,
   }));
@@ -155,36 +148,36 @@ export function drawingOf(
   });
 }
 
-const QR_SIDE = 66;
-const COLUMN_GAP = 14;
+const COLUMN_GAP = 16;
 
-function notesOf({ header, contacts, camp, sheet }: CardContext, pitch: PitchView): Block {
-  const text = sheet.inner - QR_SIDE - 2 * COLUMN_GAP;
-  const left = text * 0.54;
-  const right = text - left;
+function notesOf({ contacts, camp, sheet }: CardContext, pitch: PitchView): Block {
+  const text = sheet.inner - (contacts.length > 0 ? 2 : 1) * COLUMN_GAP;
+  const [left, middle] = contacts.length > 0 ? [text * 0.4, text * 0.35] : [text * 0.55, text * 0.45];
   const names = camp.sleeperNames[pitch.id] ?? [];
   const fallbacks = camp.fallbacks[pitch.id] ?? [];
+  const title = "If the ground is softer or the wind stronger";
   return columns(
     [
       {
         width: left,
         block: fallbacks.length
-          ? numberedNote("If the ground is softer or the wind stronger", fallbacks, left)
+          ? numberedNote(title, fallbacks, left)
           : note(
-              "If the ground is softer or the wind stronger",
+              title,
               "No next-best anchor is on the list. Pitch lower, turn the shelter or move to firmer ground.",
               left,
             ),
       },
       {
-        width: right,
+        width: middle,
         block: stackNotes([
-          note("Sleep here", names.length ? names.join(", ") : "Nobody placed yet.", right),
-          camp.result.retension === null ? null : note("Check again", capitalised(camp.result.retension), right),
-          contactsNote(contacts, right),
+          note("Sleep here", names.length ? names.join(", ") : "Nobody placed yet.", middle),
+          camp.result.retension === null ? null : note("Check again", camp.result.retension, middle),
         ]),
       },
-      { width: QR_SIDE, block: qrCode(header.address, QR_SIDE) },
+      ...(contacts.length > 0
+        ? [{ width: text - left - middle, block: contactsNote(contacts, text - left - middle) }]
+        : []),
     ],
     COLUMN_GAP,
   );

@@ -15,18 +15,19 @@ export interface TextStyle {
   readonly weight?: FontWeight;
   readonly color?: string;
   readonly align?: "left" | "right" | "center";
+  readonly leading?: number;
 }
 
 /** Lines that were laid beforehand; nothing is wrapped again. */
 export function TextLines({ lines, style }: { lines: readonly string[]; style: TextStyle }) {
-  const { size, weight = 400, color = INK, align = "left" } = style;
+  const { size, weight = 400, color = INK, align = "left", leading = LEADING } = style;
   return (
     <Text
       style={{
         fontFamily: FONT_STACK,
         fontSize: size,
         fontWeight: weight,
-        lineHeight: LEADING,
+        lineHeight: leading,
         color,
         textAlign: align,
       }}
@@ -41,7 +42,10 @@ const SLACK = 0.985;
 
 export function textBlock(text: string, width: number, style: TextStyle): Block {
   const lines = layLines(text, width * SLACK, style.size, style.weight);
-  return { height: lines.length * style.size * LEADING, node: <TextLines lines={lines} style={style} /> };
+  return {
+    height: lines.length * style.size * (style.leading ?? LEADING),
+    node: <TextLines lines={lines} style={style} />,
+  };
 }
 
 /** The largest of the sizes at which a text takes at most so many lines; the last one if none does. */
@@ -66,7 +70,7 @@ export function stack(blocks: readonly Block[], gap = 0): Block {
     node: (
       <View>
         {blocks.map((block, index) => (
-          <View key={index} style={{ height: block.height, marginTop: index === 0 ? 0 : gap }}>
+          <View key={index} style={{ marginTop: index === 0 ? 0 : gap }}>
             {block.node}
           </View>
         ))}

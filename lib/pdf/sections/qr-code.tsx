@@ -21,15 +21,20 @@ export function qrPath(text: string): { readonly d: string; readonly size: numbe
   return { d, size };
 }
 
-export function qrCode(address: string, side: number): Block {
+/** `side` with its light margin; the code itself is flush with the edges of the block, the margin lies outside. */
+export function qrCode(address: string, side: number): { block: Block; side: number } {
   const { d, size } = qrPath(address);
-  const whole = size + 2 * QUIET;
+  const inset = (side * QUIET) / (size + 2 * QUIET);
+  const drawn = side - 2 * inset;
   return {
-    height: side,
-    node: (
-      <Svg width={side} height={side} viewBox={`${-QUIET} ${-QUIET} ${whole} ${whole}`}>
-        <Path d={d} fill={INK} stroke="none" />
-      </Svg>
-    ),
+    side: drawn,
+    block: {
+      height: drawn,
+      node: (
+        <Svg width={drawn} height={drawn} viewBox={`0 0 ${size} ${size}`}>
+          <Path d={d} fill={INK} stroke="none" />
+        </Svg>
+      ),
+    },
   };
 }

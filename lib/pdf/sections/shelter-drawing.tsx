@@ -1,6 +1,6 @@
 import { Circle, G, Line, Path, Polygon, Svg, Text } from "@react-pdf/renderer";
 import { buildShelter } from "@/lib/calc/shelter-kinds";
-import type { AnchorSpec, Verdict } from "@/lib/calc/types";
+import type { AnchorSpec, ShelterModel, ShelterSpec, Verdict } from "@/lib/calc/types";
 import { anchorMark } from "@/lib/domain/drawing/anchor-marks";
 import { composePlan, type ComposedPlan } from "@/lib/domain/drawing/compose-plan";
 import type { LabelSizes, PlacedTieOut } from "@/lib/domain/drawing/label-layout";
@@ -10,8 +10,8 @@ import { STATE_MARKS } from "@/lib/domain/drawing/state-marks";
 import type { PitchView } from "@/lib/domain/views";
 import { FONT_STACK, type FontWeight } from "../fonts";
 import { printable } from "../glyphs";
-import { GREY, INK, PALE } from "../theme";
-import type { Block } from "./block";
+import { GREY, HAIR, INK, PALE } from "../theme";
+import { spacer, type Block } from "./block";
 import { PlacedMark, turnOfMark } from "./marks";
 
 export interface DrawnTieOut {
@@ -47,7 +47,7 @@ const FULL: Sizes = {
   windArrow: 26,
   northRadius: 19,
   scaleBarMax: 90,
-  maxScale: 62,
+  maxScale: 80,
 };
 const SMALL: Sizes = {
   anchorRadius: 5,
@@ -56,14 +56,26 @@ const SMALL: Sizes = {
   gap: 1.2,
   numberSize: 9,
   windArrow: 15,
-  northRadius: 12,
+  northRadius: 15,
   scaleBarMax: 46,
   maxScale: 40,
 };
 
+/** Null where the dimensions do not go together; the gaps beside the drawing say so in words. */
+export function findModel(spec: ShelterSpec): ShelterModel | null {
+  try {
+    return buildShelter(spec);
+  } catch (error) {
+    if (error instanceof RangeError) return null;
+    throw error;
+  }
+}
+
 export function shelterDrawing(input: ShelterDrawingInput): Block {
   const sizes = input.detail === "full" ? FULL : SMALL;
-  const view = planView(buildShelter(input.pitch.spec), input.pitch.details.headingDeg);
+  const model = findModel(input.pitch.spec);
+  if (!model) return spacer(input.height);
+  const view = planView(model, input.pitch.details.headingDeg);
   const plan = composePlan(view, { ...sizes, sizes, width: input.width, height: input.height, wind: input.wind });
   return {
     height: input.height,
@@ -142,6 +154,7 @@ function Fabric({
         const [x, y] = place(foot);
         return <Circle key={index} cx={x} cy={y} r={isFull ? 3.1 : 2} fill={INK} />;
       })}
+      {isFull ? <Initials view={view} plan={plan} names={names} /> : null}
     </G>
   );
 }
@@ -161,6 +174,7 @@ export function initialsOf(name: string): string {
 }
 
 const INITIALS_SIZE = 9;
+const ROOM_FOR_INITIALS = 14;
 
 function Sleepers({
   view,
@@ -173,16 +187,11 @@ function Sleepers({
   isFull: boolean;
   names: readonly string[];
 }) {
-  return view.sleepers.map((sleeper, index) => {
+  const drawn = names.length > 0 ? view.sleepers.slice(0, names.length) : view.sleepers;
+  return drawn.map((sleeper, index) => {
     const name = names[index];
     const shape = sleeperShape(sleeper, plan.fit);
-    const isRoomy = isFull && sleeper.widthM * plan.fit.scale >= 15;
-    const chest = polar(
-      plan.fit.place(sleeper.centre),
-      sleeper.lengthM * plan.fit.scale * 0.12,
-      sleeper.bearingDeg + 180,
-    );
-    const stroke = name === undefined ? PALE : GREY;
+    const stroke = name === undefined ? HAIR : GREY;
     return (
       <G key={index}>
         <Path d={shape.body} fill="#ffffff" stroke={stroke} strokeWidth={isFull ? 0.9 : 0.6} />
@@ -194,11 +203,24 @@ function Sleepers({
           stroke={stroke}
           strokeWidth={isFull ? 0.9 : 0.6}
         />
-        {name !== undefined && isRoomy ? (
-          <Label at={chest} size={INITIALS_SIZE} weight={600}>
-            {initialsOf(name)}
-          </Label>
-        ) : null}
+      </G>
+    );
+  });
+}
+
+/** Over the ridge, on white, so that they can be read. */
+function Initials({ view, plan, names }: { view: PlanView; plan: ComposedPlan; names: readonly string[] }) {
+  return view.sleepers.map((sleeper, index) => {
+    const name = names[index];
+    if (name === undefined || sleeper.widthM * plan.fit.scale < ROOM_FOR_INITIALS) return null;
+    const toFeet = sleeper.lengthM * plan.fit.scale * 0.12;
+    const at = polar(plan.fit.place(sleeper.centre), toFeet, sleeper.bearingDeg + 180);
+    return (
+      <G key={index}>
+        <Circle cx={at[0]} cy={at[1]} r={INITIALS_SIZE * 0.72} fill="#ffffff" stroke="none" />
+        <Label at={at} size={INITIALS_SIZE} weight={600}>
+          {initialsOf(name)}
+        </Label>
       </G>
     );
   });

@@ -27,10 +27,12 @@ export interface TieOutTableInput {
   readonly isTight?: boolean;
 }
 
-const WIDTHS = { number: 24, mark: 22, drive: 62, knot: 104, line: 76, pull: 46, holds: 64 } as const;
+const WIDTHS = { number: 22, mark: 21, drive: 58, knot: 90, line: 62, pull: 40, holds: 58 } as const;
 const GAP = 6;
 const MARK = 15;
 const STATE = 10;
+/** Brings large figures onto the line of the words beside them. */
+const LIFT = 1.7;
 
 export interface TieOutTable {
   readonly head: Block;
@@ -43,13 +45,24 @@ function anchorWidth(width: number): number {
 }
 
 /** Cells of one line, each hung at a distance from the top of the row. */
-function Cells({ cells, height }: { cells: readonly { left: number; width: number; block: Block }[]; height: number }) {
+function Cells({
+  cells,
+  height,
+}: {
+  cells: readonly { left: number; width: number; block: Block; lift?: number }[];
+  height: number;
+}) {
   return (
     <View style={{ height }}>
       {cells.map((cell, index) => (
         <View
           key={index}
-          style={{ position: "absolute", left: cell.left, width: cell.width, top: (height - cell.block.height) / 2 }}
+          style={{
+            position: "absolute",
+            left: cell.left,
+            width: cell.width,
+            top: (height - cell.block.height) / 2 - (cell.lift ?? 0),
+          }}
         >
           {cell.block.node}
         </View>
@@ -142,7 +155,8 @@ function tableRow(row: TieOutRow, input: TieOutTableInput): Block {
     {
       left: at.number,
       width: WIDTHS.number,
-      block: textBlock(String(result.number), WIDTHS.number, { size: TYPE.number, weight: 800 }),
+      block: textBlock(String(result.number), WIDTHS.number, { size: TYPE.number, weight: 800, leading: 1.1 }),
+      lift: LIFT,
     },
     ...(anchor
       ? [{ left: at.mark, width: MARK, block: { height: MARK, node: <AnchorIcon spec={anchor.spec} size={MARK} /> } }]
@@ -155,7 +169,8 @@ function tableRow(row: TieOutRow, input: TieOutTableInput): Block {
     {
       left: at.holds,
       width: WIDTHS.holds,
-      block: textBlock(capacity, WIDTHS.holds, { size: TYPE.number, weight: 800, align: "right" }),
+      block: textBlock(capacity, WIDTHS.holds, { size: TYPE.number, weight: 800, leading: 1.1, align: "right" }),
+      lift: LIFT,
     },
     {
       left: at.holds + WIDTHS.holds - holdsWidth - STATE - 4,
@@ -163,7 +178,7 @@ function tableRow(row: TieOutRow, input: TieOutTableInput): Block {
       block: { height: STATE, node: <StateIcon verdict={result.verdict} size={STATE} /> },
     },
   ];
-  const mainHeight = Math.max(...cells.map((cell) => cell.block.height)) + (isTight ? 1.4 : 4);
+  const mainHeight = Math.max(...cells.map((cell) => cell.block.height)) + (isTight ? 2.6 : 6.5);
   const remarks = remarksOf(row, input);
   const remarkWidth = width - at.anchor - (result.verdict === "gives-way" ? 60 : 0);
   const remarkBlock = remarks === "" ? null : textBlock(remarks, remarkWidth, { size: TYPE.small });
