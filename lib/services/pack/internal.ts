@@ -1,0 +1,131 @@
+import { and, asc, eq } from "drizzle-orm";
+import { carry, packItem, packTick, person } from "@/db/schema";
+import type { PackLine, PackListView } from "@/lib/domain/views";
+import { AppError } from "@/lib/errors";
+import { formatAnchorSpec } from "@/lib/format/anchors";
+import { formatLength } from "@/lib/format/lengths";
+import type { KitRow } from "../kit/internal";
+import type { TripState } from "../plan/load-trip-state";
+import type { Reader } from "../trips/internal";
+
+export type CarryRow = typeof carry.$inferSelect;
+export type PackItemRow = typeof packItem.$inferSelect;
+
+export async function listCarryRows(reader: Reader, tripId: string): Promise<CarryRow[]> {
+  return reader.select().from(carry).where(eq(carry.tripId, tripId)).orderBy(asc(carry.id));
+}
+
+export async function listPackItemRows(reader: Reader, tripId: string): Promise<PackItemRow[]> {
+  return reader
+    .select()
+    .from(packItem)
+    .where(eq(packItem.tripId, tripId))
+    .orderBy(asc(packItem.position), asc(packItem.id));
+}
+
+/** Keys of ticked lines by person. */
+export async function listTicks(reader: Reader, tripId: string): Promise<ReadonlyMap<string, ReadonlySet<string>>> {
+  const rows = await reader
+    .select({ personId: packTick.personId, key: packTick.itemKey })
+    .from(packTick)
+    .where(eq(packTick.tripId, tripId));
+  const ticks = new Map<string, Set<string>>();
+  for (const row of rows) ticks.set(row.personId, (ticks.get(row.personId) ?? new Set()).add(row.key));
+  return ticks;
+}
+
+export async function loadPerson(reader: Reader, tripId: string, personId: string) {
+  const [row] = await reader
+    .select({ id: person.id, name: person.name })
+    .from(person)
+    .where(and(eq(person.id, personId), eq(person.tripId, tripId)))
+    .limit(1);
+  if (!row) throw new AppError("not-found", "There is no such person on this trip.");
+  return row;
+}
+
+function describeKit({ details }: KitRow): string {
+  if (details.type === "anchor") return formatAnchorSpec(details.spec);
+  if (details.type === "cord") return `${details.diameterMm} mm cord, ${formatLength(details.lengthM)} each`;
+  return `shock cord, ${formatLength(details.lengthM)} each`;
+}
+
+export interface PackSources {
+  readonly state: TripState;
+  readonly items: readonly PackItemRow[];
+  readonly carries: readonly CarryRow[];
+  readonly ticks: ReadonlyMap<string, ReadonlySet<string>>;
+}
+
+export async function loadPackSources(reader: Reader, state: TripState): Promise<PackSources> {
+  const tripId = state.trip.id;
+  return {
+    state,
+    items: await listPackItemRows(reader, tripId),
+    carries: await listCarryRows(reader, tripId),
+    ticks: await listTicks(reader, tripId),
+  };
+}
+
+function listGroupLines({ state, carries }: PackSources, personId: string): PackLine[] {
+  return carries
+    .filter((row) => row.personId === personId)
+    .flatMap((row): PackLine[] => {
+      const shelter = state.shelters.find((one) => one.id === row.shelterId);
+      if (shelter) {
+        const detail = `sleeps ${shelter.sleeps}`;
+        return [{ key: `shelter:${shelter.id}`, name: shelter.name, detail, massKg: shelter.massKg, isTicked: false }];
+      }
+      const item = state.kit.find((one) => one.id === row.kitItemId);
+      if (!item) return [];
+      const massKg = item.details.massKg * row.count;
+      const name = `${row.count} × ${item.details.name}`;
+      return [{ key: `kit:${item.id}`, name, detail: describeKit(item), massKg, isTicked: false }];
+    });
+}
+
+function listNights({ state }: PackSources, personId: string): PackListView["nights"] {
+  const names = new Map(state.people.map((one) => [one.id, one.name]));
+  return state.camps.flatMap(({ camp, pitches, sleepers }) => {
+    const own = sleepers.find((one) => one.personId === personId);
+    const pitch = pitches.find((one) => one.id === own?.pitchId);
+    const withNames = pitch
+      ? sleepers
+          .filter((one) => one.pitchId === pitch.id && one.personId !== personId)
+          .flatMap((one) => names.get(one.personId) ?? [])
+      : [];
+    return camp.days.map((day) => ({
+      campId: camp.id,
+      campName: camp.details.name,
+      day,
+      shelterName: pitch ? pitch.name : own ? "outside" : null,
+      pitchId: pitch?.id ?? null,
+      withNames,
+    }));
+  });
+}
+
+export function buildPackList(
+  sources: PackSources,
+  person: { readonly id: string; readonly name: string },
+): PackListView {
+  const ticked = sources.ticks.get(person.id);
+  const tick = (line: PackLine): PackLine => ({ ...line, isTicked: ticked?.has(line.key) ?? false });
+  const items = sources.items
+    .filter((row) => row.personId === null || row.personId === person.id)
+    .map((row) => ({
+      isGroupThing: row.isGroupThing,
+      line: tick({ key: `item:${row.id}`, name: row.name, detail: "", massKg: row.massKg, isTicked: false }),
+    }));
+  const group = [
+    ...listGroupLines(sources, person.id).map(tick),
+    ...items.filter((item) => item.isGroupThing).map((item) => item.line),
+  ];
+  return {
+    person: { id: person.id, name: person.name },
+    own: items.filter((item) => !item.isGroupThing).map((item) => item.line),
+    group,
+    groupMassKg: group.reduce((sum, line) => sum + (line.massKg ?? 0), 0),
+    nights: listNights(sources, person.id),
+  };
+}
