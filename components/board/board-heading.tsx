@@ -1,0 +1,46 @@
+"use client";
+
+import { GROUNDS } from "@/lib/calc/tables/grounds";
+import { formatWindRange } from "@/lib/format/angles";
+import { formatAltitude } from "@/lib/format/lengths";
+import { formatSpeed } from "@/lib/format/speeds";
+import { useBoard } from "./board-context";
+import { SaveLine } from "./save-line";
+
+/** Where and when, and what the plan is made for. */
+export function BoardHeading() {
+  const { view, board, preferences } = useBoard();
+  const { details, days } = view.camp;
+  const { designGustMs } = board.result;
+  const ground = GROUNDS.find((one) => one.kind === details.ground?.kind)?.name.toLowerCase();
+  const wetness = details.ground && details.ground.wetness !== "usual" ? `, ${details.ground.wetness}` : "";
+  const facts = [
+    days[0] && formatDay(days[0]),
+    details.altitudeM !== null && formatAltitude(details.altitudeM, preferences.lengthUnit),
+    ground && `${ground}${wetness}`,
+    designGustMs !== null &&
+      `gust ${formatSpeed(designGustMs, preferences.speedUnit)} from ${formatWindRange(details.windFromDeg, details.windToDeg)}`,
+    details.strongWindHours !== null && `${details.strongWindHours}\u2009h of it`,
+  ].filter(Boolean);
+  return (
+    <header className="flex flex-wrap items-start justify-between gap-x-4 gap-y-1">
+      <div className="min-w-0">
+        <h1 className="text-24 font-extrabold">{details.name}</h1>
+        <p className="text-13 text-pencil">{facts.join(" · ")}</p>
+      </div>
+      <SaveLine />
+    </header>
+  );
+}
+
+/** "Sun 14 June", of a calendar day; the library that the server uses for days is too heavy to send along. */
+function formatDay(day: string): string {
+  const parts = new Intl.DateTimeFormat("en-GB", {
+    weekday: "short",
+    day: "numeric",
+    month: "long",
+    timeZone: "UTC",
+  }).formatToParts(new Date(`${day}T00:00:00Z`));
+  const part = (type: string) => parts.find((one) => one.type === type)?.value ?? "";
+  return `${part("weekday")} ${part("day")} ${part("month")}`;
+}

@@ -1,0 +1,146 @@
+"use client";
+
+import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
+import { useCallback, useMemo, useState } from "react";
+import type { Preferences } from "@/lib/domain/preferences";
+import type { CampPlanView } from "@/lib/domain/views";
+import { Cautions } from "@/components/ui/layout";
+import { BoardContext, type BoardContextValue } from "./board-context";
+import { BoardDrag } from "./board-drag";
+import { BoardHeading } from "./board-heading";
+import { BoardNotice } from "./board-notice";
+import { BoardToolbar } from "./board-toolbar";
+import { ConflictDialog } from "./conflict-dialog";
+import { placeFromTray } from "./drag-change";
+import { KitTray } from "./kit-tray";
+import { PhoneSheet } from "./phone-sheet";
+import { isSameSpot, type Spot } from "./plan-change";
+import { PlanDrawing } from "./plan-drawing";
+import { RankedList } from "./ranked-list";
+import { ShelterTabs } from "./shelter-tabs";
+import { TieOutDetail } from "./tie-out-detail";
+import { useIsWide } from "./use-is-wide";
+import { useStakingBoard } from "./use-staking-board";
+import { VerdictPanel } from "./verdict-panel";
+
+export interface StakingBoardProps {
+  readonly view: CampPlanView;
+  readonly preferences: Preferences;
+  /** Whose unsaved changes are kept on this device. */
+  readonly userId: string;
+}
+
+/** The staking plan of a camp. Needs at least one pitched shelter. */
+export function StakingBoard(props: StakingBoardProps) {
+  const [client] = useState(() => new QueryClient());
+  return (
+    <QueryClientProvider client={client}>
+      <Board {...props} />
+    </QueryClientProvider>
+  );
+}
+
+function Board({ view, preferences, userId }: StakingBoardProps) {
+  const board = useStakingBoard(view, userId);
+  const isWide = useIsWide();
+  const [chosenPitchId, setChosenPitchId] = useState<string | null>(board.result.weakest?.pitchId ?? null);
+  const [chosen, setChosen] = useState<Spot | null>(board.result.weakest);
+  const [armedAnchorId, setArmedAnchorId] = useState<string | null>(null);
+  const [isDragging, setIsDragging] = useState(false);
+  const [isWindUp, setIsWindUp] = useState(false);
+  const anchors = useMemo(() => new Map(view.tray.map((anchor) => [anchor.id, anchor])), [view.tray]);
+
+  const pitch = board.pitches.find((one) => one.id === chosenPitchId) ?? board.pitches[0];
+  const shelter = board.result.shelters.find((one) => one.pitchId === pitch?.id);
+  const selected = chosen?.pitchId === pitch?.id ? chosen : null;
+  const selectedResult = shelter?.tieOuts.find((one) => isSameSpot(one, selected)) ?? null;
+  const model = pitch ? board.models.get(pitch.id) : null;
+
+  const { prepared, state, apply } = board;
+  const putAnchor = useCallback(
+    (anchorId: string, spot: Spot) => {
+      const found = prepared.shelters.find((one) => one.pitch.pitchId === spot.pitchId);
+      const number = found?.tieOuts.find((one) => one.tieOut.id === spot.tieOutId)?.tieOut.number;
+      const placement = placeFromTray(prepared, state.placements, anchorId, spot);
+      const name = prepared.anchors.get(anchorId)?.name ?? "The anchor";
+      apply({ type: "place", placement }, `${name} is at tie-out ${number ?? ""} now.`);
+    },
+    [prepared, state.placements, apply],
+  );
+  const touchSpot = useCallback(
+    (spot: Spot) => {
+      if (armedAnchorId) {
+        putAnchor(armedAnchorId, spot);
+        setArmedAnchorId(null);
+      }
+      setChosen(spot);
+    },
+    [armedAnchorId, putAnchor],
+  );
+  const selectPitch = useCallback(
+    (pitchId: string) => {
+      setChosenPitchId(pitchId);
+      const tieOutId = board.result.shelters.find((one) => one.pitchId === pitchId)?.weakestTieOutId;
+      setChosen(tieOutId ? { pitchId, tieOutId } : null);
+    },
+    [board.result.shelters],
+  );
+
+  if (!pitch || !shelter) return null;
+  const value: BoardContextValue = {
+    view,
+    preferences,
+    board,
+    pitch,
+    shelter,
+    anchors,
+    selected,
+    selectedResult,
+    armedAnchorId,
+    arm: setArmedAnchorId,
+    touchSpot,
+    putAnchor,
+    selectPitch,
+    isDragging,
+  };
+  const detail = selectedResult && <TieOutDetail result={selectedResult} />;
+  return (
+    <BoardContext value={value}>
+      <BoardDrag
+        board={board}
+        shelter={shelter}
+        anchors={anchors}
+        onDragging={setIsDragging}
+        onDropped={(_piece, target) => target.kind === "spot" && setChosen(target.spot)}
+      >
+        <div className="grid grid-cols-[minmax(0,1fr)] lg:grid-cols-[minmax(0,1fr)_25rem] lg:grid-rows-[auto_1fr]">
+          <div className="px-4 pt-5 sm:px-7">
+            <BoardHeading />
+          </div>
+          <div className="px-4 pt-3 pb-4 sm:px-7 lg:border-l lg:border-hair lg:bg-sheet lg:px-5 lg:pt-6">
+            <VerdictPanel />
+          </div>
+          <div className="flex min-w-0 flex-col gap-4 px-4 pb-8 sm:px-7">
+            <ShelterTabs />
+            <div className="order-1 lg:order-none">
+              <BoardToolbar isWindUp={isWindUp} onWindUp={setIsWindUp} />
+            </div>
+            <BoardNotice />
+            {model && <PlanDrawing key={pitch.id} model={model} isWindUp={isWindUp} />}
+            <div className="order-2 lg:order-none">
+              <KitTray />
+            </div>
+          </div>
+          <div className={`min-w-0 lg:border-l lg:border-hair lg:bg-sheet ${isWide ? "" : "pb-[50dvh]"}`}>
+            <RankedList detail={isWide ? detail : null} />
+            <div className="px-5 py-6">
+              <Cautions />
+            </div>
+          </div>
+        </div>
+        {!isWide && selectedResult && <PhoneSheet result={selectedResult}>{detail}</PhoneSheet>}
+      </BoardDrag>
+      <ConflictDialog />
+    </BoardContext>
+  );
+}
