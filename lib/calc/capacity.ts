@@ -7,7 +7,7 @@ import { LINE_SCATTER, lineStrengthN } from "./line";
 import { looseningFactor, type Installation } from "./loosening";
 import { helixUpliftN, SCREW_DISTURBANCE } from "./screw";
 import { snowPlateTensionN } from "./snow";
-import { drivenDetail, type DrivenDetail, groundLeanFactor } from "./stake-limits";
+import { type DrivableGround, drivenDetail, type DrivenDetail, groundLeanFactors } from "./stake-limits";
 import { SURFACE_WEIGHT_SCATTER, surfaceWeightTensionN } from "./surface-weight";
 import type { AnchorSpec, Capacity, CapacityMode, Gap, GroundState, Rigging } from "./types";
 
@@ -76,6 +76,8 @@ const FALLBACK_DEPTH_M = 0.3;
 const FULL_SPACING_SHARE = 0.5;
 const THIN_WALL_M = 0.0015;
 const SCREW_LEAN_DEG = 0;
+/** Above this share of its uplift a screw is said to pull out rather than tip (wording only). */
+const SCREW_UPLIFT_SHARE = 0.9;
 
 /**
  * What one anchor holds at one line angle: every way it can give, the smallest of them, and its dependable value.
@@ -277,6 +279,12 @@ function evaluateOne(input: CapacityInput, anchor: AnchorSpec, ground: GroundNum
   }
 }
 
+/** Slope factor on a buried body: the smaller of the two parts, so that neither is overstated. */
+function slopeFactorOf(ground: DrivableGround): number {
+  const { weight, cohesion } = groundLeanFactors(ground, 0);
+  return Math.min(weight, cohesion);
+}
+
 type SpecOf<Class extends AnchorSpec["class"]> = Extract<AnchorSpec, { readonly class: Class }>;
 
 function evaluateStake(input: CapacityInput, anchor: SpecOf<"stake">, ground: GroundNumbers): Ok | Unusable {
@@ -313,7 +321,9 @@ function evaluateStake(input: CapacityInput, anchor: SpecOf<"stake">, ground: Gr
   return { status: "ok", limits, detail: { kind: "stake", driven }, loosening, depthM: driven.embeddedM };
 }
 
-function stakeLimits(driven: DrivenDetail, scatter: number): Limit[] {
+/** However well the ground is known, a stake in it is known no better than its own bending. */
+function stakeLimits(driven: DrivenDetail, groundScatter: number): Limit[] {
+  const scatter = Math.max(groundScatter, driven.bendingScatter);
   const groundMode: CapacityMode = driven.isDrawnOut ? "pulls-out" : "tips-over";
   const limits: Limit[] = [{ mode: groundMode, medianN: driven.groundTensionN, scatter }];
   if (driven.bendingTensionN !== null) {
@@ -368,7 +378,11 @@ function evaluateScrew(input: CapacityInput, anchor: SpecOf<"screw-in">, ground:
   const tension = (normalN: number): number => obliqueTensionN(input.lineAngleDeg, normalN, shaft, form);
   const groundN = tension(driven.normalN);
   const limits: Limit[] = [
-    { mode: groundN > 0.9 * upliftN ? "pulls-out" : "tips-over", medianN: groundN, scatter: ground.scatter },
+    {
+      mode: groundN > SCREW_UPLIFT_SHARE * upliftN ? "pulls-out" : "tips-over",
+      medianN: groundN,
+      scatter: Math.max(ground.scatter, driven.bendingScatter),
+    },
   ];
   if (driven.bendingNormalN !== null) {
     limits.push({ mode: "bends", medianN: tension(driven.bendingNormalN), scatter: driven.bendingScatter });
@@ -382,7 +396,7 @@ function evaluateDeadman(input: CapacityInput, anchor: SpecOf<"deadman">, ground
     return unusable("Stones stop the digging before the depth is reached.", ["surface weight", "shallower deadman"]);
   }
   const loosening = looseningOf(input, "backfilled");
-  const slopeFactor = groundLeanFactor(ground, anchor.depthM, 0);
+  const slopeFactor = slopeFactorOf(ground);
   const deadman = deadmanResistance({
     widthM: anchor.widthM,
     heightM: anchor.heightM,
@@ -438,7 +452,7 @@ function evaluateSnowPlate(input: CapacityInput, anchor: SpecOf<"snow-plate">, g
     return unusable("A snow plate holds in snow only.", ["stake", "deadman", "surface weight"]);
   }
   const loosening = looseningOf(input, "backfilled");
-  const bearingPa = ground.bearingPa * ground.strengthFactor * loosening * groundLeanFactor(ground, 1, 0);
+  const bearingPa = ground.bearingPa * ground.strengthFactor * loosening * slopeFactorOf(ground);
   const medianN = snowPlateTensionN(anchor.widthM, anchor.lengthM, bearingPa, input.lineAngleDeg);
   return {
     status: "ok",

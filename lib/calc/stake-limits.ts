@@ -1,6 +1,6 @@
 import { obliqueTensionN, shaftResistance, type ShaftResistance } from "./axial";
 import type { GroundNumbers } from "./ground";
-import { leanFactor, undrainedLeanFactor } from "./lean";
+import { type LeanFactors, leanFactors } from "./lean";
 import { bendingStrength, sectionProperties, type SectionProperties } from "./section";
 import {
   brinchHansenCoefficients,
@@ -33,7 +33,7 @@ export interface DrivenDetail {
   readonly embeddedM: number;
   readonly resistingM: number;
   readonly eccentricityM: number;
-  readonly leanFactor: number;
+  readonly leanFactors: LeanFactors;
   readonly pile: PileResistance;
   readonly shaft: ShaftResistance;
   readonly rockNormalN: number;
@@ -83,20 +83,18 @@ function cohesionOf(ground: DrivableGround): number {
   }
 }
 
-/** Lean and slope factor of this ground on what it resists across the stake. */
-export function groundLeanFactor(ground: DrivableGround, resistingM: number, leanDeg: number): number {
+/**
+ * Lean and slope factors of this ground on what it resists across the stake. A head leaning towards the pull would gain by
+ * the wedge; driving loosens that side, so a gain is not counted (judgement).
+ */
+export function groundLeanFactors(ground: DrivableGround, leanDeg: number): LeanFactors {
   // Snow is crushed, not pushed out as a wedge: leaning back costs nothing; a slope does.
-  if (ground.kind === "snow") return undrainedLeanFactor(0, ground.slopeDeg);
-  const isFrictional = ground.kind === "frictional";
-  const frictionAngleDeg = isFrictional ? ground.frictionAngleDeg : 0;
-  return leanFactor({
-    frictionAngleDeg,
-    unitWeightNm3: ground.unitWeightNm3,
-    cohesionPa: isFrictional ? ground.cohesionPa : 0,
-    lengthM: resistingM,
-    leanDeg,
-    slopeDeg: isFrictional ? Math.min(ground.slopeDeg, frictionAngleDeg - SLOPE_CLEARANCE_DEG) : ground.slopeDeg,
-  });
+  const isSnow = ground.kind === "snow";
+  const frictionAngleDeg = ground.kind === "frictional" ? ground.frictionAngleDeg : 0;
+  const slopeDeg =
+    ground.kind === "frictional" ? Math.min(ground.slopeDeg, frictionAngleDeg - SLOPE_CLEARANCE_DEG) : ground.slopeDeg;
+  const { weight, cohesion } = leanFactors(frictionAngleDeg, isSnow ? 0 : leanDeg, slopeDeg);
+  return { weight: Math.min(1, weight), cohesion: Math.min(1, cohesion) };
 }
 
 /**
@@ -114,16 +112,15 @@ export function drivenDetail(input: DrivenInput): DrivenDetail | null {
   const resistingM = embeddedM - looseM;
   if (resistingM < LEAST_RESISTING_LENGTH_M) return null;
   const eccentricityM = input.lengthM - resistingM;
-  const psi = groundLeanFactor(ground, resistingM, leanDeg);
+  const psi = groundLeanFactors(ground, leanDeg);
   const { ultimateNm, firstYieldNm, scatter: materialScatter } = bendingStrength(properties, input.material);
   const pile = pileResistance({
     coefficients: coefficientsOf(ground),
     widthM: properties.widthM,
     lengthM: resistingM,
     eccentricityM,
-    unitWeightNm3: ground.kind === "frictional" ? ground.unitWeightNm3 : 0,
-    cohesionPa: cohesionOf(ground),
-    pressureFactor: psi * input.strengthFactor,
+    unitWeightNm3: ground.kind === "frictional" ? ground.unitWeightNm3 * psi.weight * input.strengthFactor : 0,
+    cohesionPa: cohesionOf(ground) * psi.cohesion * input.strengthFactor,
     bendingNm: ultimateNm,
   });
   const bare = shaftResistance({
@@ -145,7 +142,8 @@ export function drivenDetail(input: DrivenInput): DrivenDetail | null {
   const angleDeg = input.lineAngleDeg - leanDeg;
   const form = ground.kind === "frictional" ? "linear-square" : "quadratic";
   const groundTensionN = obliqueTensionN(angleDeg, normalN, shaft, form);
-  const bendingNormalN = pile.bendingN;
+  // The rock takes its share at the surface, so it does not bend the stake.
+  const bendingNormalN = pile.bendingN === null ? null : pile.bendingN + rockNormalN;
   const bendingTensionN = bendingNormalN === null ? null : obliqueTensionN(angleDeg, bendingNormalN, shaft, form);
   const governingNormalN = bendingNormalN ?? normalN;
   const tensionN = bendingTensionN ?? groundTensionN;
@@ -158,7 +156,7 @@ export function drivenDetail(input: DrivenInput): DrivenDetail | null {
     embeddedM,
     resistingM,
     eccentricityM,
-    leanFactor: psi,
+    leanFactors: psi,
     pile,
     shaft,
     rockNormalN,

@@ -85,11 +85,10 @@ export interface PileInput {
   readonly lengthM: number;
   /** Distance along the stake from that ground's surface up to where the line pulls, m, ≥ 0. */
   readonly eccentricityM: number;
+  /** γ and c that count, lean, slope, pull tests and loosening included, ≥ 0, not both 0. */
   readonly unitWeightNm3: number;
   readonly cohesionPa: number;
-  /** Multiplies the pressure of the ground everywhere, > 0. */
-  readonly pressureFactor: number;
-  /** Bending strength of the stake, N·m; Infinity for a body that can't bend. */
+  /** Bending strength of the stake, N·m, > 0. */
   readonly bendingNm: number;
 }
 
@@ -167,8 +166,8 @@ interface PressureTo {
 
 function pressureOf(input: PileInput): (depthM: number) => PressureTo {
   const { kq0, kqDeep, alphaQ, kc0, kcDeep, alphaC } = input.coefficients;
-  const weight = input.unitWeightNm3 * input.widthM * input.pressureFactor;
-  const cohesion = input.cohesionPa * input.widthM * input.pressureFactor;
+  const weight = input.unitWeightNm3 * input.widthM;
+  const cohesion = input.cohesionPa * input.widthM;
   const aq = alphaQ / input.widthM;
   const ac = alphaC / input.widthM;
   const dq = kqDeep - kq0;
