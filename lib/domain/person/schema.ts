@@ -19,3 +19,7 @@ export const personUpdateInput = z.object({
   version: z.number().int().min(1),
 });
 export const personRefInput = z.object({ tripId: idSchema, personId: idSchema });
+export const personDeleteInput = personRefInput.extend({ confirmed: z.boolean().default(false) });
+
+/** The secret part of an invitation link: 256 random bits. */
+export const invitationTokenSchema = z.string().regex(/^[A-Za-z0-9_-]{43}$/, "This is not a link of an invitation.");

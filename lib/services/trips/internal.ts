@@ -38,7 +38,7 @@ export function toTripView(row: TripRow, role: Role, nights: number): TripView {
 interface Change {
   readonly tripId: string;
   readonly action: "create" | "update" | "delete" | "copy" | "reorder";
-  readonly entity: "trip" | "camp" | "shelter" | "pitch" | "sleepers" | "kit" | "plan" | "pack";
+  readonly entity: "trip" | "camp" | "shelter" | "pitch" | "sleepers" | "kit" | "plan" | "pack" | "person" | "post";
   readonly entityId: string;
   /** For people: "Otter Flat: ground and wind". */
   readonly summary: string;
