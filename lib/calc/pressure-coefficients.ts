@@ -294,6 +294,7 @@ export function panelCoefficients(
   const source = { x: Math.sin(relativeWindDeg * RADIANS), y: Math.cos(relativeWindDeg * RADIANS) };
   const box = measureBox(model, faces, source);
   const internal = internalCoefficient(model, relativeWindDeg, box, loadCase);
+  const halfWidthM = Math.max(...model.drawing.outline.map((point) => point.x));
   return faces.map((face, index) => {
     const zone = model.panels[index]?.zone ?? "";
     const flat = Math.hypot(face.normal.x, face.normal.y);
@@ -309,7 +310,7 @@ export function panelCoefficients(
       return { zone, net: external - internal, external, internal, source: VAULT_SOURCE };
     }
     if (model.kind === "tunnel" && zone === "vault") {
-      const external = vaultCoefficient(face, source, box, loadCase);
+      const external = vaultCoefficient(face, halfWidthM, source, box, loadCase);
       return { zone, net: external - internal, external, internal, source: VAULT_SOURCE };
     }
     const external = faceCoefficient(face.slopeDeg, cosine, box, loadCase);
@@ -358,11 +359,20 @@ function alongArc(downwind: number, points: { windward: number; crown: number; l
     : points.crown + (points.lee - points.crown) * (quarter - 1);
 }
 
-/** Vault with its axis along y: quarter, half, quarter of the arc across the wind; like a steep side along it. */
-function vaultCoefficient(face: Face, source: { x: number; y: number }, box: WindBox, loadCase: LoadCase): number {
-  const size = Math.hypot(face.normal.x, face.normal.z);
-  const upwind = (face.normal.x * Math.sign(source.x)) / size;
-  const across = upwind > Math.SQRT1_2 ? VAULT.windward : upwind < -Math.SQRT1_2 ? VAULT.lee : VAULT.crown;
+/**
+ * Vault with its axis along y. Across the wind: a quarter, a half and a quarter of the arc, by the angle at which its
+ * point would stand on a round vault. Along the wind: like the side of a 45° roof (judgement).
+ */
+function vaultCoefficient(
+  face: Face,
+  halfWidthM: number,
+  source: { x: number; y: number },
+  box: WindBox,
+  loadCase: LoadCase,
+): number {
+  const upwind = (face.middle.x * Math.sign(source.x)) / halfWidthM;
+  const rise = face.middle.z / box.heightM;
+  const across = upwind > rise ? VAULT.windward : -upwind > rise ? VAULT.lee : VAULT.crown;
   const along = faceCoefficient(45, 0, box, loadCase);
   return source.x * source.x * across + source.y * source.y * along;
 }

@@ -2,6 +2,7 @@ import type { Vec3 } from "../types";
 import { mix, vec } from "../vectors";
 import { defineFamily, dimension, HEM_HEIGHT_M, HEM_LOOP_M, placesSideBySide, rectangle } from "./family";
 
+const COLUMNS = 4;
 const ROWS = 4;
 /** Bending stiffness EI of an aluminium tube of 11 mm by 0.9 mm: E 70 GPa × 370 mm⁴ = 26 N·m² (from its geometry). */
 const HOOP_BENDING_NM2 = 26;
@@ -45,7 +46,7 @@ export const DOME = defineFamily({
       ["rear", rearRight, rearLeft, { x: 0, y: -1 }],
       ["left", rearLeft, frontLeft, { x: -1, y: 0 }],
     ] as const) {
-      mesh.surface(zone, 4, ROWS, (u, v) => fall(mix(from, to, u), v));
+      mesh.surface(zone, COLUMNS, ROWS, (u, v) => fall(mix(from, to, u), v));
       mesh.tieOut({
         id: `hem-${zone}`,
         name: `Hem, ${zone} middle`,
@@ -54,6 +55,14 @@ export const DOME = defineFamily({
         towards,
         typicalLengthM: HEM_LOOP_M,
       });
+    }
+    const columns = COLUMNS * mesh.refinement;
+    for (let column = 1; column < columns; column += 1) {
+      const u = column / columns;
+      const across = [mix(frontRight, rearRight, u), mix(frontLeft, rearLeft, u)] as const;
+      const along = [mix(frontLeft, frontRight, u), mix(rearLeft, rearRight, u)] as const;
+      mesh.floorStrip(mesh.node(across[0]), mesh.node(across[1]), d.depthM / columns);
+      mesh.floorStrip(mesh.node(along[0]), mesh.node(along[1]), d.widthM / columns);
     }
     const rows = ROWS * mesh.refinement;
     const leg = (corner: Vec3) => Array.from({ length: rows + 1 }, (_, row) => mesh.node(fall(corner, row / rows)));

@@ -68,7 +68,7 @@ export class ShelterMesh {
   private readonly hoops: ShelterModel["hoops"][number][] = [];
   private readonly requests: TieOutRequest[] = [];
   private readonly feet: Vec3[] = [];
-  private readonly straps: { a: number; b: number }[] = [];
+  private readonly straps: { a: number; b: number; stiffnessN: number }[] = [];
 
   constructor(
     private readonly materials: MeshMaterials,
@@ -168,7 +168,12 @@ export class ShelterMesh {
     const last = nodes[nodes.length - 1];
     if (first === undefined || last === undefined) return;
     this.feet.push(this.positionOf(first), this.positionOf(last));
-    this.straps.push({ a: first, b: last });
+    this.straps.push({ a: first, b: last, stiffnessN: 2 * RIDGE_STIFFNESS_N });
+  }
+
+  /** A strip of sewn-in floor, this wide, between two nodes of the hem: it ties them together and takes no wind. */
+  floorStrip(a: number, b: number, widthM: number): void {
+    this.straps.push({ a, b, stiffnessN: this.materials.fabricStiffnessNPerM * widthM });
   }
 
   tieOut(request: TieOutRequest): void {
@@ -232,9 +237,9 @@ export class ShelterMesh {
         tieOutId: null,
       });
     }
-    for (const { a, b } of this.straps) {
+    for (const { a, b, stiffnessN } of this.straps) {
       const restLengthM = distance(this.positionOf(a), this.positionOf(b));
-      links.push({ a, b, restLengthM, stiffnessN: RIDGE_STIFFNESS_N * 2, role: "edge", tieOutId: null });
+      links.push({ a, b, restLengthM, stiffnessN, role: "fabric", tieOutId: null });
     }
     const tieOuts = this.finishTieOuts(links);
     const hoopLines = this.hoops.flatMap((hoop) =>

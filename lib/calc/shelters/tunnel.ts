@@ -2,6 +2,7 @@ import { mix, vec } from "../vectors";
 import { defineFamily, dimension, HEM_HEIGHT_M, HEM_LOOP_M, placesSideBySide } from "./family";
 
 const SEGMENTS = 8;
+const ROWS = 4;
 /** Bending stiffness EI of an aluminium tube of 11 mm by 0.9 mm: E 70 GPa × 370 mm⁴ = 26 N·m² (from its geometry). */
 const HOOP_BENDING_NM2 = 26;
 
@@ -34,14 +35,23 @@ export const TUNNEL = defineFamily({
     // Half an ellipse, its feet a hem's height above the ground; u runs from the right foot to the left one.
     const arch = (u: number, atY: number) =>
       vec(x * Math.cos(Math.PI * u), atY, HEM_HEIGHT_M + (d.heightM - HEM_HEIGHT_M) * Math.sin(Math.PI * u));
-    mesh.surface("vault", SEGMENTS, 4, (u, v) => arch(u, y * (1 - 2 * v)));
+    const endHem = (u: number, sign: number) =>
+      vec(x * Math.cos(Math.PI * u), sign * (y + d.endTaperM * Math.sin(Math.PI * u)), HEM_HEIGHT_M);
+    mesh.surface("vault", SEGMENTS, ROWS, (u, v) => arch(u, y * (1 - 2 * v)));
+    const [rows, columns] = [ROWS * mesh.refinement, SEGMENTS * mesh.refinement];
+    for (let row = 1; row < rows; row += 1) {
+      const atY = y * (1 - (2 * row) / rows);
+      mesh.floorStrip(mesh.node(arch(0, atY)), mesh.node(arch(1, atY)), d.hoopSpacingM / rows);
+    }
+    for (let column = 1; column < columns; column += 1) {
+      const ends = [1, -1].map((sign) => mesh.node(endHem(column / columns, sign)));
+      mesh.floorStrip(ends[0] ?? 0, ends[1] ?? 0, d.widthM / columns);
+    }
     for (const [end, sign] of [
       ["front", 1],
       ["rear", -1],
     ] as const) {
-      const endHem = (u: number) =>
-        vec(x * Math.cos(Math.PI * u), sign * (y + d.endTaperM * Math.sin(Math.PI * u)), HEM_HEIGHT_M);
-      mesh.surface(end, SEGMENTS, 2, (u, v) => mix(arch(u, sign * y), endHem(u), v));
+      mesh.surface(end, SEGMENTS, 2, (u, v) => mix(arch(u, sign * y), endHem(u, sign), v));
       const count = SEGMENTS * mesh.refinement;
       const nodes = Array.from({ length: count + 1 }, (_, index) => mesh.node(arch(index / count, sign * y)));
       mesh.hoop(`hoop-${end}`, `Hoop, ${end}`, nodes, HOOP_BENDING_NM2);
@@ -49,7 +59,7 @@ export const TUNNEL = defineFamily({
         id: `hem-${end}`,
         name: `Hem, ${end} middle`,
         kind: "hem",
-        node: mesh.node(endHem(0.5)),
+        node: mesh.node(endHem(0.5, sign)),
         towards: { x: 0, y: sign },
         typicalLengthM: HEM_LOOP_M,
       });
@@ -57,7 +67,7 @@ export const TUNNEL = defineFamily({
         ["right", 0.25],
         ["left", 0.75],
       ] as const) {
-        const point = endHem(u);
+        const point = endHem(u, sign);
         mesh.tieOut({
           id: `hem-${end}-${side}`,
           name: `Hem, ${end} ${side}`,
