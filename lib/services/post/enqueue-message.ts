@@ -27,6 +27,8 @@ export interface NewMessage {
   readonly replyTo?: MailAddress;
   readonly mail: RenderedMail;
   readonly files?: readonly MailFile[];
+  /** When what it says was true; now, if not given. */
+  readonly createdAt?: Date;
 }
 
 const nameSchema = lineText("a name", 200);
@@ -46,7 +48,7 @@ export async function enqueueMessage(tx: Transaction, message: NewMessage): Prom
   const to = checkAddress(message.to);
   const replyTo = message.replyTo ? checkAddress(message.replyTo) : null;
   const id = newId();
-  const createdAt = new Date();
+  const createdAt = message.createdAt ?? new Date();
   await tx.insert(outboxMessage).values({
     id,
     tripId: message.tripId ?? null,
@@ -61,7 +63,7 @@ export async function enqueueMessage(tx: Transaction, message: NewMessage): Prom
     text: message.mail.text,
     html: message.mail.html,
     messageId: `<${id}@${env.mailFrom.split("@")[1] ?? "localhost"}>`,
-    nextAttemptAt: createdAt,
+    nextAttemptAt: new Date(),
     createdAt,
   });
   for (const [position, file] of (message.files ?? []).entries()) {

@@ -1,0 +1,136 @@
+import { and, eq, inArray } from "drizzle-orm";
+import type { z } from "zod";
+import { getDb, withTransaction } from "@/db/client";
+import { outboxMessage, person } from "@/db/schema";
+import { requirePermission } from "@/lib/auth/permission";
+import type { Paper, PaperSize } from "@/lib/domain/paper/schema";
+import { sendInput } from "@/lib/domain/post/schema";
+import type { PaperDocument } from "@/lib/domain/views";
+import { renderPapersMail } from "@/lib/email/templates/trip-mails";
+import { env } from "@/lib/env";
+import { AppError } from "@/lib/errors";
+import type { Context } from "@/lib/services/context/context";
+import { consumeQuota } from "../quota/consume-quota";
+import { loadTripRow, recordChange, type Reader } from "../trips/internal";
+import { parseInput } from "../trips/parse-input";
+import { composeBundles, loadTripPlaces, type PaperBundle } from "./compose-papers";
+import { enqueueMessage, type MailFile } from "./enqueue-message";
+
+/** Where the papers come from; tests put their own here. */
+export interface PaperSource {
+  getDocument(given: { ctx: Context; input: { tripId: string; paper: Paper } }): Promise<PaperDocument>;
+  render(documents: readonly PaperDocument[], options: { size: PaperSize }): Promise<Uint8Array>;
+}
+
+async function loadPaperSource(): Promise<PaperSource> {
+  const [{ getPaperDocument }, { renderPaper }] = await Promise.all([
+    import("@/lib/services/papers/get-paper-document"),
+    import("@/lib/pdf/render"),
+  ]);
+  return { getDocument: getPaperDocument, render: renderPaper };
+}
+
+async function countSent(reader: Reader, tripId: string, requestId: string): Promise<number> {
+  const rows = await reader
+    .select({ tripId: outboxMessage.tripId })
+    .from(outboxMessage)
+    .where(eq(outboxMessage.requestId, requestId));
+  if (rows.some((row) => row.tripId !== tripId)) throw new AppError("conflict", "That was sent for another trip.");
+  return rows.length;
+}
+
+async function loadRecipients(reader: Reader, tripId: string, personIds: readonly string[]) {
+  const rows = await reader
+    .select({ id: person.id, name: person.name, email: person.email })
+    .from(person)
+    .where(and(eq(person.tripId, tripId), inArray(person.id, personIds)));
+  if (rows.length !== personIds.length) {
+    throw new AppError("not-found", "Somebody you chose is not on this trip any more. Nothing was sent.");
+  }
+  return personIds.flatMap((id) => rows.filter((row) => row.id === id));
+}
+
+/**
+ * Mails papers to people: rendered first, then written to the outbox all together. The same request again has no
+ * second effect. Returns how many messages there are.
+ */
+export async function sendPapers({
+  ctx,
+  input,
+  source,
+}: {
+  ctx: Context;
+  input: z.input<typeof sendInput>;
+  source?: PaperSource;
+}): Promise<{ messageCount: number }> {
+  const { tripId, requestId, personIds, pieces, subject, message, paperSize } = parseInput(sendInput, input);
+  await requirePermission(ctx, tripId, "post.send");
+  const already = await countSent(getDb(), tripId, requestId);
+  if (already > 0) return { messageCount: already };
+  await consumeQuota("mail", ctx.actor.userId, personIds.length);
+
+  const createdAt = new Date();
+  const recipients = await loadRecipients(getDb(), tripId, personIds);
+  const places = await loadTripPlaces(tripId);
+  const { getDocument, render } = source ?? (await loadPaperSource());
+  const rendered = new Map<string, MailFile>();
+  async function renderOnce(bundle: PaperBundle): Promise<MailFile> {
+    const known = rendered.get(bundle.key);
+    if (known) return known;
+    const documents: PaperDocument[] = [];
+    for (const paper of bundle.papers) documents.push(await getDocument({ ctx, input: { tripId, paper } }));
+    const content = await render(documents, { size: paperSize });
+    const file = { fileName: bundle.fileName, contentType: "application/pdf", content };
+    rendered.set(bundle.key, file);
+    return file;
+  }
+  const filesOf = new Map<string, MailFile[]>();
+  for (const one of recipients) {
+    const files: MailFile[] = [];
+    for (const bundle of composeBundles(one, pieces, places)) files.push(await renderOnce(bundle));
+    if (files.length === 0) {
+      throw new AppError("bad-input", `There is nothing to send to ${one.name} yet: no camps or no place to sleep.`, {
+        fieldErrors: { pieces: ["Choose a piece that everybody you chose has."] },
+      });
+    }
+    filesOf.set(one.id, files);
+  }
+
+  return withTransaction(async (tx) => {
+    await requirePermission(ctx, tripId, "post.send", tx);
+    const sentMeanwhile = await countSent(tx, tripId, requestId);
+    if (sentMeanwhile > 0) return { messageCount: sentMeanwhile };
+    const trip = await loadTripRow(tx, tripId);
+    for (const one of await loadRecipients(tx, tripId, personIds)) {
+      const files = filesOf.get(one.id) ?? [];
+      await enqueueMessage(tx, {
+        kind: "papers",
+        requestId,
+        tripId,
+        personId: one.id,
+        createdAt,
+        to: { name: one.name, address: one.email },
+        replyTo: { name: ctx.actor.name, address: ctx.actor.email },
+        mail: renderPapersMail({
+          name: one.name,
+          leaderName: ctx.actor.name,
+          tripName: trip.name,
+          subject,
+          message,
+          fileNames: files.map((file) => file.fileName),
+          url: `${env.appUrl}/trips/${tripId}`,
+        }),
+        files,
+      });
+    }
+    await recordChange(tx, ctx, {
+      tripId,
+      action: "create",
+      entity: "post",
+      entityId: requestId,
+      summary: `Sent to ${recipients.length}: ${subject}`,
+      isPrinted: false,
+    });
+    return { messageCount: recipients.length };
+  });
+}
