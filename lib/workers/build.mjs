@@ -3,7 +3,7 @@
  * Packages stay outside the bundle (they are loaded from node_modules), so fonts and wasm beside them are found.
  */
 import { readdirSync } from "node:fs";
-import { basename, join } from "node:path";
+import { basename, join, resolve } from "node:path";
 import { fileURLToPath } from "node:url";
 import { build } from "esbuild";
 
@@ -17,7 +17,7 @@ await build({
     in: join(folder, file),
     out: basename(file).replace(/\.worker\.tsx?$/, ""),
   })),
-  outdir: join(root, process.env.WORKERS_OUT ?? ".next/workers"),
+  outdir: resolve(root, process.env.WORKERS_OUT ?? ".next/workers"),
   outExtension: { ".js": ".mjs" },
   bundle: true,
   platform: "node",

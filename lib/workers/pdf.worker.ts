@@ -1,7 +1,4 @@
-import { renderPaper, type PaperOptions } from "@/lib/pdf/render";
-import type { PaperDocument } from "@/lib/domain/views";
+import { renderPdf } from "./pdf-task";
 import { serveWorker } from "./serve-worker";
 
-serveWorker(({ papers, options }: { papers: readonly PaperDocument[]; options: PaperOptions }) =>
-  renderPaper(papers, options),
-);
+serveWorker(renderPdf);
