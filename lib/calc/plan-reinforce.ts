@@ -1,7 +1,7 @@
 import { marginOf } from "./camp";
 import type { PreparedCamp, PreparedShelter, PreparedTieOut } from "./prepare-camp";
 import { isDriven, rigAtBestLean, strengthOf, type Rigged } from "./rig-anchor";
-import { article, twoDigits } from "./wording";
+import { inSentence, twoDigits } from "./wording";
 import type { AnchorSpec, Placement, TrayAnchor } from "./types";
 
 /** One tie-out that the proposal is free to fill. */
@@ -58,7 +58,10 @@ export function tandemSpacingM(front: AnchorSpec, second: AnchorSpec): number {
   return Math.max(0.1, Math.ceil(Math.max(lengthOf(front), lengthOf(second)) * 10) / 20);
 }
 
-/** Two driven anchors in line, the longer in front, at the better lean of the single ones; null when it can't be. */
+/**
+ * Two driven anchors in line, each at the best lean of the front one: the order that holds more, among equals the longer in
+ * front. Null when it can't be.
+ */
 export function rigInLine(
   prepared: PreparedCamp,
   shelter: PreparedShelter,
@@ -69,15 +72,18 @@ export function rigInLine(
   const first = prepared.anchors.get(present.anchorId);
   if (!first || !isDriven(first.spec) || !isDriven(second.spec) || present.tandem) return null;
   const lengthOf = (anchor: TrayAnchor) => (anchor.spec.class === "stake" ? anchor.spec.lengthM : 0);
-  const [front, rear] = lengthOf(second) > lengthOf(first) ? [second, first] : [first, second];
-  const base = rigAtBestLean(prepared, shelter, tieOut, front, present);
-  if (!base) return null;
-  const placement: Placement = {
-    ...base.placement,
-    tandem: { anchorId: rear.id, spacingM: tandemSpacingM(front.spec, rear.spec) },
-  };
-  const strength = strengthOf(prepared, shelter, tieOut, placement);
-  return strength && strength.dependableN > 0 ? { placement, strength } : null;
+  const longerFirst = lengthOf(second) > lengthOf(first) ? [second, first] : [first, second];
+  const spacingM = tandemSpacingM(first.spec, second.spec);
+  let best: Rigged | null = null;
+  for (const [front, rear] of [longerFirst, [...longerFirst].reverse()]) {
+    const base = front && rigAtBestLean(prepared, shelter, tieOut, front, present);
+    if (!base || !rear) continue;
+    const placement: Placement = { ...base.placement, tandem: { anchorId: rear.id, spacingM } };
+    const strength = strengthOf(prepared, shelter, tieOut, placement);
+    if (!strength || strength.dependableN <= (best?.strength.dependableN ?? 0)) continue;
+    best = { placement, strength };
+  }
+  return best;
 }
 
 /**
@@ -108,7 +114,7 @@ export function doubleUp(
     left.set(best.second.id, (left.get(best.second.id) ?? 0) - 1);
     next[index] = best.rigged;
     const gain = describeGain(row, one, best.rigged);
-    steps.push({ text: `Doubled ${nameRow(row)} with ${article(best.second.name)} in line: ${gain}.` });
+    steps.push({ text: `Doubled ${nameRow(row)} (${inSentence(best.second.name)}, in line): ${gain}.` });
   }
   return next;
 }

@@ -6,6 +6,3 @@ export const twoDigits = (value: number): string => String(Number(value.toPrecis
 /** A name inside a sentence: "the wide sand stake" from "Wide sand stake"; short forms like "V section" keep theirs. */
 export const inSentence = (name: string): string =>
   /^[A-Z][a-z]/.test(name) ? `${name.charAt(0).toLowerCase()}${name.slice(1)}` : name;
-
-/** The name with "a" or "an". */
-export const article = (name: string): string => `${/^[aeiou]/i.test(name) ? "an" : "a"} ${inSentence(name)}`;

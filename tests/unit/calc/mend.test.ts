@@ -117,7 +117,7 @@ describe("what would mend a tie-out, without working out the shelter anew", () =
     expect(spared?.margin ?? 0).toBeGreaterThanOrEqual(1);
   });
 
-  it("says how many are left and puts the longer of two stakes in front", () => {
+  it("says how many are left and puts the stronger of two stakes in front", () => {
     expect(mends.find((mend) => mend.title === "Swap with the anchor wide")?.detail).toBe("one left in the tray");
     const tandem = mends.find((mend) => mend.kind === "tandem");
     expect(tandem?.placements[0]).toMatchObject({ anchorId: "wide", tandem: { anchorId: "hook" } });
