@@ -44,7 +44,8 @@ export type Detail =
 
 interface Ok {
   readonly status: "ok";
-  readonly limits: readonly Limit[];
+  /** Fresh for each evaluation; the line's limit is added to it. */
+  readonly limits: Limit[];
   readonly detail: Detail;
   readonly loosening: number;
   /** Length or depth in the ground by which a second anchor's distance is judged, m. */
@@ -197,7 +198,7 @@ function evaluate(input: CapacityInput): Evaluated | Unusable | Unknown {
   const ground = groundNumbers(input.ground);
   const front = evaluateOne(input, input.anchor, ground);
   if (front.status !== "ok") return front;
-  const limits: Limit[] = [...front.limits];
+  const { limits, detail, loosening, depthM } = front;
   let tandem: Evaluated["tandem"] = null;
   if (input.rigging.tandem !== null) {
     const rear = evaluateOne(
@@ -206,7 +207,7 @@ function evaluate(input: CapacityInput): Evaluated | Unusable | Unknown {
       ground,
     );
     if (rear.status !== "ok") return rear;
-    const share = Math.min(1, input.rigging.tandem.spacingM / (FULL_SPACING_SHARE * front.depthM));
+    const share = Math.min(1, input.rigging.tandem.spacingM / (FULL_SPACING_SHARE * depthM));
     const rearN = smallest(rear.limits);
     tandem = { share, rearN };
     limits.forEach((limit, i) => {
@@ -221,7 +222,8 @@ function evaluate(input: CapacityInput): Evaluated | Unusable | Unknown {
     medianN: lineStrengthN(line.material, line.diameterMm, knot),
     scatter: LINE_SCATTER,
   });
-  return { ...front, limits, tandem, ...governing(limits) };
+  const { medianN, scatter, dependableN, mode } = governing(limits);
+  return { status: "ok", limits, detail, loosening, depthM, tandem, medianN, scatter, dependableN, mode };
 }
 
 function smallest(limits: readonly Limit[]): number {

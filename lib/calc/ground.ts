@@ -62,34 +62,62 @@ export function groundNumbers(state: GroundState): GroundNumbers {
   requireInRange("ground.learned.scatter", scatter, 0, 2);
 
   const isSubmerged = state.wetness === "saturated" && row.model.kind === "frictional";
-  const common: GroundCommon = {
-    unitWeightNm3: isSubmerged ? row.saturatedUnitWeightNm3 - WATER_UNIT_WEIGHT_NM3 : row.unitWeightNm3,
-    scatter,
-    looseTopM,
-    stopDepthM,
-    slopeDeg: state.slopeDeg,
-    surfaceFriction: row.surfaceFriction * SURFACE_WETNESS[state.wetness],
-    strengthFactor,
-  };
+  const unitWeightNm3 = isSubmerged ? row.saturatedUnitWeightNm3 - WATER_UNIT_WEIGHT_NM3 : row.unitWeightNm3;
+  const surfaceFriction = row.surfaceFriction * SURFACE_WETNESS[state.wetness];
+  const { slopeDeg } = state;
+  // Written out rather than spread from a common part: this runs many thousand times for one plan.
   switch (row.model.kind) {
     case "undrained":
-      return { ...common, kind: "undrained", shearStrengthPa: row.model.shearStrengthPa * wetness };
+      return {
+        kind: "undrained",
+        shearStrengthPa: row.model.shearStrengthPa * wetness,
+        unitWeightNm3,
+        scatter,
+        looseTopM,
+        stopDepthM,
+        slopeDeg,
+        surfaceFriction,
+        strengthFactor,
+      };
     case "frictional":
       return {
-        ...common,
         kind: "frictional",
         frictionAngleDeg: row.model.frictionAngleDeg,
         cohesionPa: row.model.cohesionPa * wetness,
+        unitWeightNm3,
+        scatter,
+        looseTopM,
+        stopDepthM,
+        slopeDeg,
+        surfaceFriction,
+        strengthFactor,
       };
     case "snow":
       return {
-        ...common,
         kind: "snow",
         bearingPa: row.model.bearingPa * wetness,
         shaftAdhesionPa: row.model.shaftAdhesionPa * wetness,
+        unitWeightNm3,
+        scatter,
+        looseTopM,
+        stopDepthM,
+        slopeDeg,
+        surfaceFriction,
+        strengthFactor,
       };
     case "undriveable":
-      return { ...common, kind: "undriveable", reason: row.model.reason, instead: row.model.instead };
+      return {
+        kind: "undriveable",
+        reason: row.model.reason,
+        instead: row.model.instead,
+        unitWeightNm3,
+        scatter,
+        looseTopM,
+        stopDepthM,
+        slopeDeg,
+        surfaceFriction,
+        strengthFactor,
+      };
   }
 }
 
