@@ -80,6 +80,9 @@ export const pitchDeleteInput = z.object({
   confirmed: z.boolean().default(false),
 });
 
+/** A shelter of a camp pitched as one would like it, not saved. */
+export const analysePitchBody = z.object({ pitchId: idSchema, details: pitchDetailsSchema });
+
 /** Who sleeps where at a camp: the whole intent in one save; null = sleeps outside any shelter. */
 export const sleepersSaveInput = z.object({
   tripId: idSchema,

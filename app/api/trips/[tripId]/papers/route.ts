@@ -1,0 +1,34 @@
+import { z } from "zod";
+import { paperSchema, PAPER_SIZES } from "@/lib/domain/paper/schema";
+import { tripRefInput } from "@/lib/domain/trip/schema";
+import { contentDisposition } from "@/lib/http/content-disposition";
+import { route } from "@/lib/http/route";
+import { renderPaperFile } from "@/lib/services/papers/render-paper-file";
+
+const paperQuery = z
+  .object({
+    paper: z.string(),
+    campId: z.string().optional(),
+    pitchId: z.string().optional(),
+    personId: z.string().optional(),
+    size: z.enum(PAPER_SIZES, { error: "Choose A4 or LETTER." }).optional(),
+  })
+  .transform(({ paper, size, ...ids }) => ({ size, paper: { ...ids, kind: paper } }))
+  .pipe(z.object({ size: z.enum(PAPER_SIZES).optional(), paper: paperSchema }));
+
+/** ?paper=field-card|pitch-card|pack-list|booklet with campId, pitchId, personId, and size=A4|LETTER. */
+export const GET = route({
+  params: tripRefInput,
+  query: paperQuery,
+  handler: async ({ ctx, params, query }) => {
+    const { fileName, content } = await renderPaperFile({ ctx, input: { ...params, ...query } });
+    return new Response(new Uint8Array(content), {
+      headers: {
+        "Content-Type": "application/pdf",
+        "Content-Disposition": contentDisposition("inline", fileName),
+        "Content-Length": String(content.byteLength),
+        "X-Content-Type-Options": "nosniff",
+      },
+    });
+  },
+});
