@@ -1,5 +1,18 @@
 import type { NextConfig } from "next";
 
+/** On every answer, also files and errors; what depends on the request is set in proxy.ts. */
+const headers = [
+  { key: "X-Content-Type-Options", value: "nosniff" },
+  { key: "X-Frame-Options", value: "DENY" },
+  { key: "Referrer-Policy", value: "same-origin" },
+  { key: "Cross-Origin-Opener-Policy", value: "same-origin" },
+  { key: "Cross-Origin-Resource-Policy", value: "same-origin" },
+  {
+    key: "Permissions-Policy",
+    value: "camera=(), microphone=(), payment=(), usb=(), geolocation=(self), browsing-topics=()",
+  },
+];
+
 const config: NextConfig = {
   ...(process.env.NEXT_DIST_DIR ? { distDir: process.env.NEXT_DIST_DIR } : {}),
   poweredByHeader: false,
@@ -17,6 +30,7 @@ const config: NextConfig = {
     "highs",
     "@zxcvbn-ts/language-common",
   ],
+  headers: async () => [{ source: "/:path*", headers }],
   images: { unoptimized: true, remotePatterns: [] },
   experimental: { serverActions: { bodySizeLimit: "1mb" } },
 };

@@ -61,14 +61,21 @@ export async function withTransaction<Result>(work: (tx: Transaction) => Promise
   }
 }
 
-/** Writes the log back into the database file and closes it; the next use opens it again. */
+/** Writes the log back into the database file; requests in flight may go on. */
+export async function checkpointDb(): Promise<void> {
+  const opened = store.leesteadDatabase;
+  if (!opened || toFilePath(opened.url) === null) return;
+  await opened.db.$client.execute("PRAGMA wal_checkpoint(TRUNCATE)");
+}
+
+/** For scripts and tests: writes the log back and closes; the next use opens the database again. */
 export async function closeDb(): Promise<void> {
   const opened = store.leesteadDatabase;
   if (!opened) return;
-  store.leesteadDatabase = undefined;
   try {
-    if (toFilePath(opened.url) !== null) await opened.db.$client.execute("PRAGMA wal_checkpoint(TRUNCATE)");
+    await checkpointDb();
   } finally {
+    store.leesteadDatabase = undefined;
     opened.db.$client.close();
   }
 }

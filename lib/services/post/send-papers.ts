@@ -22,12 +22,17 @@ export interface PaperSource {
   render(documents: readonly PaperDocument[], options: { size: PaperSize }): Promise<Uint8Array>;
 }
 
-async function loadPaperSource(): Promise<PaperSource> {
-  const [{ getPaperDocument }, { renderPaper }] = await Promise.all([
+async function loadPaperSource(ctx: Context): Promise<PaperSource> {
+  const [{ getPaperDocument }, { renderPdfInWorker }, { getPreferences }] = await Promise.all([
     import("@/lib/services/papers/get-paper-document"),
-    import("@/lib/pdf/render"),
+    import("@/lib/workers/render-pdf-in-worker"),
+    import("@/lib/services/preferences/get-preferences"),
   ]);
-  return { getDocument: getPaperDocument, render: renderPaper };
+  const preferences = await getPreferences({ ctx });
+  return {
+    getDocument: getPaperDocument,
+    render: (papers, { size }) => renderPdfInWorker({ papers, options: { size, preferences } }),
+  };
 }
 
 async function countSent(reader: Reader, tripId: string, requestId: string): Promise<number> {
@@ -72,7 +77,7 @@ export async function sendPapers({
   const createdAt = new Date();
   const recipients = await loadRecipients(getDb(), tripId, personIds);
   const places = await loadTripPlaces(tripId);
-  const { getDocument, render } = source ?? (await loadPaperSource());
+  const { getDocument, render } = source ?? (await loadPaperSource(ctx));
   const rendered = new Map<string, MailFile>();
   async function renderOnce(bundle: PaperBundle): Promise<MailFile> {
     const known = rendered.get(bundle.key);

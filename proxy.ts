@@ -1,0 +1,72 @@
+import { NextResponse, type NextRequest } from "next/server";
+import { newId } from "@/lib/domain/ids";
+import { env } from "@/lib/env";
+
+/** Headers for pages and routes. Never the lock: each service checks for itself who may do what. */
+
+function makeNonce(): string {
+  return btoa(String.fromCharCode(...crypto.getRandomValues(new Uint8Array(16))));
+}
+
+function contentSecurityPolicy(nonce: string): string {
+  const evaluation = env.isProduction ? "" : " 'unsafe-eval'";
+  return [
+    "default-src 'self'",
+    `script-src 'nonce-${nonce}' 'strict-dynamic'${evaluation}`,
+    `style-src 'self' 'nonce-${nonce}'`,
+    // Positions of dragged pieces and bars of charts are style attributes.
+    "style-src-attr 'unsafe-inline'",
+    "img-src 'self' data: blob:",
+    "font-src 'self'",
+    "connect-src 'self'",
+    "worker-src 'self' blob:",
+    "manifest-src 'self'",
+    "object-src 'none'",
+    "base-uri 'none'",
+    "form-action 'self'",
+    "frame-ancestors 'none'",
+  ].join("; ");
+}
+
+/** Data, not pages: nothing in it may run or be framed. */
+const API_POLICY =
+  "default-src 'none'; style-src 'unsafe-inline'; base-uri 'none'; form-action 'none'; frame-ancestors 'none'";
+
+/** A form of another site, whatever the browser or a proxy header says about it. */
+function isForeignChange(request: NextRequest): boolean {
+  if (request.method === "GET" || request.method === "HEAD" || request.method === "OPTIONS") return false;
+  const origin = request.headers.get("origin");
+  return origin !== null && origin !== env.appUrl;
+}
+
+export function proxy(request: NextRequest): NextResponse {
+  const requestId = newId();
+  const isApi = request.nextUrl.pathname.startsWith("/api/");
+  const nonce = makeNonce();
+  const policy = isApi ? API_POLICY : contentSecurityPolicy(nonce);
+  const headers = new Headers(request.headers);
+  headers.set("x-request-id", requestId);
+  headers.set("x-leestead-path", `${request.nextUrl.pathname}${request.nextUrl.search}`);
+  headers.set("x-nonce", nonce);
+  headers.set("Content-Security-Policy", policy);
+  // Nothing in front of this server is trusted to rename it.
+  headers.delete("x-forwarded-host");
+
+  const response = isForeignChange(request)
+    ? new NextResponse(`This request came from another address. Open ${env.appUrl} and try again.`, {
+        status: 403,
+        headers: { "Content-Type": "text/plain; charset=utf-8" },
+      })
+    : NextResponse.next({ request: { headers } });
+  response.headers.set("Content-Security-Policy", policy);
+  response.headers.set("x-request-id", requestId);
+  response.headers.set("Cache-Control", "private, no-store");
+  if (env.appUrl.startsWith("https://")) {
+    response.headers.set("Strict-Transport-Security", "max-age=31536000; includeSubDomains");
+  }
+  return response;
+}
+
+export const config = {
+  matcher: ["/((?!_next/static|_next/image|healthz|readyz).*)"],
+};
