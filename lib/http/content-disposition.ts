@@ -9,15 +9,17 @@ function encodeExtended(text: string): string {
 /** Content-Disposition by RFC 6266: a plain name for old programs, the true one in UTF-8 beside it. */
 export function contentDisposition(kind: "inline" | "attachment", fileName: string): string {
   // Lone surrogates can't be encoded; slashes and control characters have no place in a file name.
-  const clean = fileName
-    .toWellFormed()
-    .replace(/[\p{Cc}\\/:*?"<>|]/gu, " ")
-    .replace(/\s+/g, " ")
-    .trim()
-    .slice(0, 150);
+  const clean = [
+    ...fileName
+      .replace(/[\p{Cc}\p{Surrogate}\\/:*?"<>|]/gu, " ")
+      .replace(/\s+/g, " ")
+      .trim(),
+  ]
+    .slice(0, 150)
+    .join("");
   const plain = clean
     .normalize("NFKD")
     .replace(/\p{M}/gu, "")
     .replace(/[^\x20-\x7E]/g, "_");
-  return `${kind}; filename="${plain}"; filename*=UTF-8''${encodeExtended(clean.toWellFormed())}`;
+  return `${kind}; filename="${plain}"; filename*=UTF-8''${encodeExtended(clean)}`;
 }

@@ -37,5 +37,5 @@ export async function analysePitchAs({
     { pitchId, name: shelter.name, spec, headingDeg, patch, analysis: null },
   );
   if ("gaps" in request) return { analysis: null, gaps: request.gaps };
-  return { analysis: await getAnalysis(request), gaps: [] };
+  return { analysis: await getAnalysis(request, { isKept: false }), gaps: [] };
 }

@@ -45,7 +45,7 @@ async function saveAnalysis(key: string, analysis: ShelterAnalysis): Promise<voi
   });
 }
 
-async function findOrCompute(key: string, request: AnalysisRequest): Promise<ShelterAnalysis> {
+async function findOrCompute(key: string, request: AnalysisRequest, isKept: boolean): Promise<ShelterAnalysis> {
   const [row] = await getDb()
     .select({ analysis: analysisCache.analysis })
     .from(analysisCache)
@@ -54,22 +54,23 @@ async function findOrCompute(key: string, request: AnalysisRequest): Promise<She
   if (row) return row.analysis;
   const analysis = await runInWorker("analysis", request, computeAnalysis);
   // A result that can't be kept is still a result.
-  await saveAnalysis(key, analysis).catch(() => undefined);
+  if (isKept) await saveAnalysis(key, analysis).catch(() => undefined);
   return analysis;
 }
 
 /**
  * Pull in the lines of a shelter in a wind: from memory, from the table, or worked out now. The same for everybody, so
- * it asks no permission; who asks twice at once waits for one answer.
+ * it asks no permission; who asks twice at once waits for one answer. What is only tried out (`isKept` false) stays out
+ * of the table.
  */
-export async function getAnalysis(request: AnalysisRequest): Promise<ShelterAnalysis> {
+export async function getAnalysis(request: AnalysisRequest, { isKept } = { isKept: true }): Promise<ShelterAnalysis> {
   const { known, running } = getStore();
   const key = analysisKey(request.spec, request.relativeWindDirectionsDeg, request.pressurePa);
   const found = known.get(key);
   if (found) return found;
   const busy = running.get(key);
   if (busy) return busy;
-  const work = findOrCompute(key, request)
+  const work = findOrCompute(key, request, isKept)
     .then((analysis) => {
       known.set(key, analysis);
       return analysis;

@@ -5,23 +5,21 @@ import { contentDisposition } from "@/lib/http/content-disposition";
 import { route } from "@/lib/http/route";
 import { renderPaperFile } from "@/lib/services/papers/render-paper-file";
 
-const paperQuery = z
-  .object({
-    paper: z.string(),
-    campId: z.string().optional(),
-    pitchId: z.string().optional(),
-    personId: z.string().optional(),
-    size: z.enum(PAPER_SIZES, { error: "Choose A4 or LETTER." }).optional(),
-  })
-  .transform(({ paper, size, ...ids }) => ({ size, paper: { ...ids, kind: paper } }))
-  .pipe(z.object({ size: z.enum(PAPER_SIZES).optional(), paper: paperSchema }));
+const paperQuery = z.object({
+  paper: z.string({ error: "Say which paper: field-card, pitch-card, pack-list or booklet." }),
+  campId: z.string().optional(),
+  pitchId: z.string().optional(),
+  personId: z.string().optional(),
+  size: z.enum(PAPER_SIZES, { error: "Choose A4 or LETTER." }).optional(),
+});
 
 /** ?paper=field-card|pitch-card|pack-list|booklet with campId, pitchId, personId, and size=A4|LETTER. */
 export const GET = route({
   params: tripRefInput,
   query: paperQuery,
-  handler: async ({ ctx, params, query }) => {
-    const { fileName, content } = await renderPaperFile({ ctx, input: { ...params, ...query } });
+  handler: async ({ ctx, params, query: { paper: kind, size, ...ids } }) => {
+    const paper = paperSchema.parse({ kind, ...ids });
+    const { fileName, content } = await renderPaperFile({ ctx, input: { ...params, paper, size } });
     return new Response(new Uint8Array(content), {
       headers: {
         "Content-Type": "application/pdf",
