@@ -23,12 +23,12 @@ export function BoardHeading() {
     details.strongWindHours !== null && `${details.strongWindHours}\u2009h of it`,
   ].filter(Boolean);
   return (
-    <header className="flex flex-wrap items-start justify-between gap-x-4 gap-y-1">
-      <div className="min-w-0">
+    <header>
+      <div className="flex flex-wrap items-baseline justify-between gap-x-4">
         <h1 className="text-24 font-extrabold">{details.name}</h1>
-        <p className="text-13 text-pencil">{facts.join(" · ")}</p>
+        <SaveLine />
       </div>
-      <SaveLine />
+      <p className="text-13 text-pencil">{facts.join(" · ")}</p>
     </header>
   );
 }

@@ -67,7 +67,7 @@ const TrayPiece = memo(function TrayPiece({ anchor, left, isArmed, putAt, onArm,
   const look = isArmed ? "border-ink outline-1 outline-ink" : "border-hair";
   return (
     <li
-      className={`flex min-w-0 items-stretch rounded-sheet border bg-sheet ${look} ${left === 0 ? "opacity-70" : ""}`}
+      className={`flex min-w-0 items-stretch rounded-sheet border bg-sheet ${look} ${left === 0 ? "border-dashed" : ""}`}
     >
       <button
         type="button"

@@ -8,8 +8,15 @@ import { formatForce } from "@/lib/format/forces";
 import { formatMargin } from "@/lib/format/numbers";
 import { useBoard } from "./board-context";
 
+interface PhoneSheetProps {
+  readonly result: TieOutResult;
+  readonly isOpen: boolean;
+  readonly onToggle: (isOpen: boolean) => void;
+  readonly children: ReactNode;
+}
+
 /** On a phone the selected tie-out is explained on a sheet that stays at the bottom and folds away. */
-export function PhoneSheet({ result, children }: { readonly result: TieOutResult; readonly children: ReactNode }) {
+export function PhoneSheet({ result, isOpen, onToggle, children }: PhoneSheetProps) {
   const { preferences, anchors, board } = useBoard();
   const isWaiting = board.waiting.has(result.pitchId);
   const anchor = result.placement ? anchors.get(result.placement.anchorId) : null;
@@ -21,7 +28,8 @@ export function PhoneSheet({ result, children }: { readonly result: TieOutResult
       : null;
   return (
     <details
-      open
+      open={isOpen}
+      onToggle={(event) => onToggle(event.currentTarget.open)}
       aria-label={`Tie-out ${result.number}`}
       className="fixed inset-x-0 bottom-0 z-30 rounded-t-sheet border-t border-hair bg-sheet shadow-float"
     >

@@ -1,42 +1,11 @@
 "use client";
 
-import { useState } from "react";
 import { Button } from "@/components/ui/button";
-import type { PlanProposal } from "@/lib/calc/plan";
-import { useBoard } from "./board-context";
-import { changeBetween } from "./plan-change";
+import type { Proposal } from "./use-proposal";
 
-/** Asks the machine for the best plan, and says what it did. */
-export function useProposal() {
-  const { board } = useBoard();
-  const [options, setOptions] = useState({ allowFound: true, allowDoubling: true });
-  const [isRunning, setIsRunning] = useState(false);
-  const [answer, setAnswer] = useState<PlanProposal | null>(null);
-  const run = async () => {
-    setIsRunning(true);
-    try {
-      const proposal = await board.calc.run("propose", { camp: board.campInput, options });
-      const change = changeBetween(board.state.placements, proposal.placements);
-      if (change)
-        board.apply({ type: "replace", placements: [...proposal.placements] }, "The proposal is on the board.");
-      setAnswer(proposal);
-    } catch {
-      board.dispatch({
-        type: "say",
-        tone: "refused",
-        text: "The proposal could not be worked out. Your plan is as it was.",
-      });
-    } finally {
-      setIsRunning(false);
-    }
-  };
-  return { options, setOptions, isRunning, run, answer, close: () => setAnswer(null) };
-}
-
-export type Proposal = ReturnType<typeof useProposal>;
-
-export function ProposalPanel({ proposal }: { readonly proposal: Proposal }) {
-  const { answer, options, setOptions, close } = proposal;
+/** What the proposal did, and what it may do. */
+export function ProposalPanel({ proposal, onClose }: { readonly proposal: Proposal; readonly onClose: () => void }) {
+  const { answer, options, setOptions } = proposal;
   return (
     <div className="flex flex-col gap-2 rounded-sheet border border-hair bg-sheet p-4">
       {answer && (
@@ -75,11 +44,9 @@ export function ProposalPanel({ proposal }: { readonly proposal: Proposal }) {
           />
           Double up where it is weak
         </label>
-        {answer && (
-          <Button look="quiet" onClick={close}>
-            Close
-          </Button>
-        )}
+        <Button look="quiet" onClick={onClose}>
+          Close
+        </Button>
       </div>
     </div>
   );

@@ -10,12 +10,14 @@ import { formatLean } from "@/lib/format/angles";
 import { lengthFromUnit } from "@/lib/format/lengths";
 import { useBoard } from "./board-context";
 import { CommitNumber } from "./commit-number";
+import { useIsWide } from "./use-is-wide";
 
 const CONTROL = "min-h-11 w-full min-w-0 rounded-field border border-pencil bg-sheet px-2 text-15";
 
 /** How one anchor is rigged: lean, depth, second in line, rock, shock cord, knot, and the line itself. */
 export function RiggingForm({ placement, anchor }: { readonly placement: Placement; readonly anchor: TrayAnchor }) {
   const { view, board, preferences } = useBoard();
+  const isWide = useIsWide();
   const put = (change: Partial<Placement>) => board.apply({ type: "place", placement: { ...placement, ...change } });
   const canLean = isDriven(anchor.spec);
   const { left } = board.result;
@@ -26,7 +28,7 @@ export function RiggingForm({ placement, anchor }: { readonly placement: Placeme
   const tieOut = board.models.get(placement.pitchId)?.tieOuts.find((one) => one.id === placement.tieOutId);
   const perMetre = 1 / lengthFromUnit(1, preferences.lengthUnit);
   return (
-    <details className="group" open>
+    <details open={isWide}>
       <summary className="min-h-11 content-center text-15 font-semibold">Rigging</summary>
       <div className="grid grid-cols-[repeat(auto-fill,minmax(min(100%,9rem),1fr))] gap-x-4 gap-y-3">
         {canLean && <LeanField placement={placement} onCommit={(leanDeg) => put({ leanDeg })} />}

@@ -9,17 +9,20 @@ import { BoardContext, type BoardContextValue } from "./board-context";
 import { BoardDrag } from "./board-drag";
 import { BoardHeading } from "./board-heading";
 import { BoardNotice } from "./board-notice";
-import { BoardToolbar } from "./board-toolbar";
+import { BoardToolbar, type OpenPanel } from "./board-toolbar";
 import { ConflictDialog } from "./conflict-dialog";
 import { placeFromTray } from "./drag-change";
 import { KitTray } from "./kit-tray";
 import { PhoneSheet } from "./phone-sheet";
 import { isSameSpot, type Spot } from "./plan-change";
+import { PitchPanel } from "./pitch-panel";
 import { PlanDrawing } from "./plan-drawing";
+import { ProposalPanel } from "./proposal-panel";
 import { RankedList } from "./ranked-list";
 import { ShelterTabs } from "./shelter-tabs";
 import { TieOutDetail } from "./tie-out-detail";
 import { useIsWide } from "./use-is-wide";
+import { useProposal } from "./use-proposal";
 import { useStakingBoard } from "./use-staking-board";
 import { VerdictPanel } from "./verdict-panel";
 
@@ -48,6 +51,9 @@ function Board({ view, preferences, userId }: StakingBoardProps) {
   const [armedAnchorId, setArmedAnchorId] = useState<string | null>(null);
   const [isDragging, setIsDragging] = useState(false);
   const [isWindUp, setIsWindUp] = useState(false);
+  const [openPanel, setOpenPanel] = useState<OpenPanel>(null);
+  const [isSheetOpen, setIsSheetOpen] = useState(false);
+  const proposal = useProposal(board);
   const anchors = useMemo(() => new Map(view.tray.map((anchor) => [anchor.id, anchor])), [view.tray]);
 
   const pitch = board.pitches.find((one) => one.id === chosenPitchId) ?? board.pitches[0];
@@ -74,6 +80,7 @@ function Board({ view, preferences, userId }: StakingBoardProps) {
         setArmedAnchorId(null);
       }
       setChosen(spot);
+      setIsSheetOpen(true);
     },
     [armedAnchorId, putAnchor],
   );
@@ -113,32 +120,53 @@ function Board({ view, preferences, userId }: StakingBoardProps) {
         onDragging={setIsDragging}
         onDropped={(_piece, target) => target.kind === "spot" && setChosen(target.spot)}
       >
-        <div className="grid grid-cols-[minmax(0,1fr)] lg:grid-cols-[minmax(0,1fr)_25rem] lg:grid-rows-[auto_1fr]">
-          <div className="px-4 pt-5 sm:px-7">
-            <BoardHeading />
-          </div>
-          <div className="px-4 pt-3 pb-4 sm:px-7 lg:border-l lg:border-hair lg:bg-sheet lg:px-5 lg:pt-6">
-            <VerdictPanel />
-          </div>
-          <div className="flex min-w-0 flex-col gap-4 px-4 pb-8 sm:px-7">
-            <ShelterTabs />
-            <div className="order-1 lg:order-none">
-              <BoardToolbar isWindUp={isWindUp} onWindUp={setIsWindUp} />
+        <div className="flex flex-col lg:grid lg:grid-cols-[minmax(0,1fr)_25rem]">
+          <div className="contents min-w-0 lg:flex lg:flex-col lg:gap-3 lg:px-7 lg:pt-6 lg:pb-8">
+            <div className="contents gap-x-6 gap-y-3 lg:flex lg:flex-wrap lg:items-start lg:justify-between">
+              <div className="order-1 px-4 pt-5 sm:px-7 lg:min-w-60 lg:flex-1 lg:p-0">
+                <BoardHeading />
+              </div>
+              <div className="order-4 px-4 pt-4 sm:px-7 lg:p-0">
+                <BoardToolbar
+                  isWindUp={isWindUp}
+                  onWindUp={setIsWindUp}
+                  open={openPanel}
+                  onOpen={setOpenPanel}
+                  proposal={proposal}
+                />
+              </div>
             </div>
-            <BoardNotice />
-            {model && <PlanDrawing key={pitch.id} model={model} isWindUp={isWindUp} />}
-            <div className="order-2 lg:order-none">
+            <div className="order-5 px-4 sm:px-7 lg:p-0">
+              {openPanel === "pitch" && <PitchPanel />}
+              {openPanel === "proposal" && <ProposalPanel proposal={proposal} onClose={() => setOpenPanel(null)} />}
+            </div>
+            <div className="order-3 flex min-w-0 flex-col gap-3 px-4 sm:px-7 lg:p-0">
+              <ShelterTabs />
+              <BoardNotice />
+              {model && <PlanDrawing key={pitch.id} model={model} isWindUp={isWindUp} />}
+            </div>
+            <div className="order-6 px-4 py-4 sm:px-7 lg:p-0">
               <KitTray />
             </div>
           </div>
-          <div className={`min-w-0 lg:border-l lg:border-hair lg:bg-sheet ${isWide ? "" : "pb-[50dvh]"}`}>
-            <RankedList detail={isWide ? detail : null} />
-            <div className="px-5 py-6">
-              <Cautions />
+          <div className="contents min-w-0 lg:block lg:border-l lg:border-hair lg:bg-sheet">
+            <div className="order-2 px-4 pt-3 pb-3 sm:px-7 lg:px-5 lg:pt-6 lg:pb-4">
+              <VerdictPanel />
+            </div>
+            <div className={`order-7 ${isWide ? "" : "pb-[46dvh]"}`}>
+              <RankedList detail={isWide ? detail : null} />
+              <div className="flex flex-col gap-4 px-5 py-6">
+                {board.result.retension && <p className="text-15">{board.result.retension}</p>}
+                <Cautions />
+              </div>
             </div>
           </div>
         </div>
-        {!isWide && selectedResult && <PhoneSheet result={selectedResult}>{detail}</PhoneSheet>}
+        {!isWide && selectedResult && (
+          <PhoneSheet result={selectedResult} isOpen={isSheetOpen} onToggle={setIsSheetOpen}>
+            {detail}
+          </PhoneSheet>
+        )}
       </BoardDrag>
       <ConflictDialog />
     </BoardContext>

@@ -2,6 +2,7 @@
 
 import Link from "next/link";
 import { Button } from "@/components/ui/button";
+import { isDriven } from "@/lib/calc/rig-anchor";
 import type { TieOutResult } from "@/lib/calc/types";
 import { formatAngle, formatLean } from "@/lib/format/angles";
 import { formatForce } from "@/lib/format/forces";
@@ -23,9 +24,9 @@ export function TieOutDetail({ result }: { readonly result: TieOutResult }) {
       <div className="text-15">
         {anchor && placement ? (
           <p>
-            {anchor.name}, {formatLean(placement.leanDeg)}
-            {capacity?.status === "ok" && !isWaiting && `: ${capacity.sentence}`}
-            {capacity?.status === "unusable" && `: ${capacity.reason}`}
+            {isDriven(anchor.spec) ? `${anchor.name}, ${formatLean(placement.leanDeg)}. ` : `${anchor.name}. `}
+            {capacity?.status === "ok" && !isWaiting && capacity.sentence}
+            {capacity?.status === "unusable" && capacity.reason}
           </p>
         ) : (
           <p>No anchor yet. Drag one here, or take one from the tray.</p>

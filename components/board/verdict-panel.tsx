@@ -26,8 +26,7 @@ export function VerdictPanel() {
         {result.designGustMs !== null && `Planned gust ${formatSpeed(result.designGustMs, preferences.speedUnit)}. `}
         {!isWaiting && weakest?.margin != null && (
           <>
-            Weakest: tie-out {weakest.number}
-            {weakest.capacity?.status === "ok" && `, ${weakest.capacity.sentence}`}.{" "}
+            Weakest: tie-out {weakest.number}. {weakest.capacity?.status === "ok" && `${weakest.capacity.sentence} `}
             <Link
               href={`/trips/${view.trip.id}/camps/${view.camp.id}/working/${pitch.id}/${weakest.tieOutId}`}
               className="font-semibold text-spruce"
@@ -47,7 +46,6 @@ export function VerdictPanel() {
           The whole camp holds to {gustWords(result.holdsToGustMs, preferences.speedUnit)}.
         </p>
       )}
-      {result.retension && <p className="mt-1 text-13 text-pencil">{result.retension}</p>}
       <GapList />
     </section>
   );
