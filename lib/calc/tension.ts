@@ -1,3 +1,4 @@
+import { itemAt } from "./indexed";
 import { panelCoefficients } from "./pressure-coefficients";
 import { compileNet, relaxNet, type Net, type NetState } from "./relaxation";
 import { LINE_PRETENSION_N } from "./shelters/mesh";
@@ -62,9 +63,9 @@ export function compileShelter(model: ShelterModel): ShelterNet {
   const tieOutLinks = model.tieOuts.map((tieOut) => model.links.findIndex((link) => link.tieOutId === tieOut.id));
   if (tieOutLinks.includes(-1)) throw new RangeError("A tie-out has no line.");
   const inCloth = new Set(model.panels.flatMap((panel) => panel.nodes));
-  const highest = Math.max(...[...inCloth].map((node) => model.nodes[node]?.position.z ?? 0));
+  const highest = Math.max(...[...inCloth].map((node) => itemAt(model.nodes, node).position.z));
   const heads = new Set(model.poles.map((pole) => pole.head));
-  const tops = [...inCloth].filter((node) => heads.has(node) || (model.nodes[node]?.position.z ?? 0) > 0.9 * highest);
+  const tops = [...inCloth].filter((node) => heads.has(node) || itemAt(model.nodes, node).position.z > 0.9 * highest);
   return { model, net: compileNet(model), tieOutLinks, tops };
 }
 
@@ -95,7 +96,7 @@ export function solveShelterNet(
 ): ShelterEquilibrium {
   if (panelPressurePa.some((pressure) => !Number.isFinite(pressure))) throw new RangeError("Pressure must be finite.");
   const { model, net, tieOutLinks, tops } = shelter;
-  const removedLink = options.withoutTieOut === undefined ? -1 : (tieOutLinks[options.withoutTieOut] ?? -1);
+  const removedLink = options.withoutTieOut === undefined ? -1 : itemAt(tieOutLinks, options.withoutTieOut);
   const state = relaxNet(
     net,
     { panelPressurePa, nodeForceN: null },
@@ -112,17 +113,17 @@ export function solveShelterNet(
 
 function readEquilibrium({ model, net, tieOutLinks, tops }: ShelterNet, state: NetState): ShelterEquilibrium {
   const x = state.positions;
-  const at = (node: number, axis: number) => x[3 * node + axis] ?? 0;
-  const drawn = (node: number, axis: number) => net.drawn[3 * node + axis] ?? 0;
+  const at = (node: number, axis: number) => itemAt(x, 3 * node + axis);
+  const drawn = (node: number, axis: number) => itemAt(net.drawn, 3 * node + axis);
   const apart = (a: number, b: number) => Math.hypot(at(a, 0) - at(b, 0), at(a, 1) - at(b, 1), at(a, 2) - at(b, 2));
   const tieOuts = model.tieOuts.map((tieOut, index) => {
-    const link = tieOutLinks[index] ?? 0;
-    const ends = model.links[link] ?? { a: 0, b: 0 };
+    const link = itemAt(tieOutLinks, index);
+    const ends = itemAt(model.links, link);
     const rise = Math.abs(at(ends.a, 2) - at(ends.b, 2));
     const sine = Math.min(1, rise / Math.max(1e-9, apart(ends.a, ends.b)));
     return {
       tieOutId: tieOut.id,
-      pullN: state.linkTensionN[link] ?? 0,
+      pullN: itemAt(state.linkTensionN, link),
       lineAngleDeg: (Math.asin(sine) * 180) / Math.PI,
     };
   });
@@ -157,7 +158,7 @@ function readEquilibrium({ model, net, tieOutLinks, tops }: ShelterNet, state: N
 function readPoles(model: ShelterModel, state: NetState): { poleId: string; compressionN: number }[] {
   const straight = model.poles.map((pole, index) => ({
     poleId: pole.id,
-    compressionN: state.poleCompressionN[index] ?? 0,
+    compressionN: itemAt(state.poleCompressionN, index),
   }));
   let offset = 0;
   const bent = model.hoops.map((hoop) => {

@@ -49,7 +49,7 @@ export const BELL = defineFamily({
         kind: "guy",
         node: mesh.node(eave),
         towards,
-        typicalAngleDeg: 26,
+        typical: { angleDeg: 26 },
       });
       mesh.tieOut({
         id: `peg-${hour}`,
@@ -57,7 +57,7 @@ export const BELL = defineFamily({
         kind: "hem",
         node: mesh.node(at(side, HEM_HEIGHT_M)),
         towards,
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
     }
     return {

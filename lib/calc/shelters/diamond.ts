@@ -4,15 +4,20 @@ import { defineFamily, dimension, HEM_HEIGHT_M, HEM_LOOP_M } from "./family";
 
 const CELLS = 6;
 
-/** Folds the flat square along its diagonal: p along the ridge from its middle towards the front, q across, m. */
-function foldMap(sideM: number, frontHeightM: number): ((p: number, q: number) => Vec3) | null {
+/** Sine of the angle by which each half is folded down from the ridge so that its corner meets the ground. */
+function foldSine(sideM: number, frontHeightM: number): number {
   const diagonal = sideM * Math.SQRT2;
-  const sinRise = (frontHeightM - HEM_HEIGHT_M) / diagonal;
+  const rise = frontHeightM - HEM_HEIGHT_M;
+  return rise / Math.sqrt(diagonal * diagonal - rise * rise);
+}
+
+/** Folds the flat square along its diagonal: p along the ridge from its middle towards the front, q across, m. */
+function foldMap(sideM: number, frontHeightM: number): (p: number, q: number) => Vec3 {
+  const sinFold = foldSine(sideM, frontHeightM);
+  const cosFold = Math.sqrt(1 - sinFold * sinFold);
+  const sinRise = (frontHeightM - HEM_HEIGHT_M) / (sideM * Math.SQRT2);
   const cosRise = Math.sqrt(1 - sinRise * sinRise);
   const middle = vec(0, 0, (frontHeightM + HEM_HEIGHT_M) / 2);
-  const sinFold = (2 * (middle.z - HEM_HEIGHT_M)) / (diagonal * cosRise);
-  if (!(sinFold < 0.9)) return null;
-  const cosFold = Math.sqrt(1 - sinFold * sinFold);
   const ridge = vec(0, cosRise, sinRise);
   const down = vec(0, sinRise, -cosRise);
   return (p, q) => add(add(middle, scale(ridge, p)), add(vec(q * cosFold, 0, 0), scale(down, Math.abs(q) * sinFold)));
@@ -36,7 +41,7 @@ export const DIAMOND = defineFamily({
   lineDiameterMm: 3,
   heightM: (d) => d.frontHeightM,
   check: (d) =>
-    foldMap(d.sideM, d.frontHeightM) === null || d.frontHeightM > 0.75 * d.sideM
+    d.frontHeightM > 0.75 * d.sideM
       ? [
           {
             field: "dimensions.frontHeightM",
@@ -46,7 +51,6 @@ export const DIAMOND = defineFamily({
       : [],
   build: (d, mesh) => {
     const fold = foldMap(d.sideM, d.frontHeightM);
-    if (!fold) return { outline: [], sleepingPlaces: [] };
     const half = (d.sideM * Math.SQRT2) / 2;
     const at = (u: number, v: number) => fold((u + v - 1) * half, (u - v) * half);
     const cells = CELLS * mesh.refinement;
@@ -71,7 +75,7 @@ export const DIAMOND = defineFamily({
       kind: "ridge-end",
       node: head,
       towards: { x: 0, y: 1 },
-      typicalAngleDeg: 40,
+      typical: { angleDeg: 40 },
     });
     mesh.tieOut({
       id: "ridge-rear",
@@ -79,7 +83,7 @@ export const DIAMOND = defineFamily({
       kind: "ridge-end",
       node: mesh.node(rear),
       towards: { x: 0, y: -1 },
-      typicalLengthM: HEM_LOOP_M,
+      typical: { lengthM: HEM_LOOP_M },
     });
     const outline: Vec3[] = [front];
     for (const [side, direction, corner, edge] of [
@@ -92,7 +96,7 @@ export const DIAMOND = defineFamily({
         kind: "corner",
         node: mesh.node(corner),
         towards: { x: direction, y: 0.15 },
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
       mesh.tieOut({
         id: `hem-rear-${side}`,
@@ -100,7 +104,7 @@ export const DIAMOND = defineFamily({
         kind: "hem",
         node: mesh.node(edge),
         towards: { x: direction, y: -1 },
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
     }
     outline.push(at(1, 0), rear, at(0, 1));

@@ -33,7 +33,6 @@ export const DOME = defineFamily({
     const x = d.widthM / 2;
     const y = d.depthM / 2;
     const [frontRight, rearRight, rearLeft, frontLeft] = rectangle(x, y, HEM_HEIGHT_M);
-    if (!frontRight || !rearRight || !rearLeft || !frontLeft) return { outline: [], sleepingPlaces: [] };
     // A quarter of an ellipse from the top (v = 0) to the hem (v = 1).
     const fall = (hem: Vec3, v: number) => {
       const angle = (Math.PI / 2) * v;
@@ -53,7 +52,7 @@ export const DOME = defineFamily({
         kind: "hem",
         node: mesh.node(mix(from, to, 0.5)),
         towards,
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
     }
     const columns = COLUMNS * mesh.refinement;
@@ -86,7 +85,7 @@ export const DOME = defineFamily({
         kind: "corner",
         node: mesh.node(corner),
         towards,
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
       mesh.tieOut({
         id: `guy-${id}`,
@@ -94,7 +93,7 @@ export const DOME = defineFamily({
         kind: "guy",
         node: mesh.node(fall(corner, 0.5)),
         towards,
-        typicalAngleDeg: 38,
+        typical: { angleDeg: 38 },
       });
     }
     return {

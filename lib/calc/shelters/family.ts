@@ -88,7 +88,7 @@ export function placesLikeSpokes(radiusM: number, atLeast: number): ShelterModel
 }
 
 /** Points of a rectangle on the ground, clockwise from front right. */
-export const rectangle = (halfX: number, halfY: number, z: number): readonly Vec3[] => [
+export const rectangle = (halfX: number, halfY: number, z: number): readonly [Vec3, Vec3, Vec3, Vec3] => [
   vec(halfX, halfY, z),
   vec(halfX, -halfY, z),
   vec(-halfX, -halfY, z),

@@ -52,7 +52,7 @@ export const FLYING_TARP = defineFamily({
           kind: "corner",
           node: head,
           towards: { x: direction, y: sign },
-          typicalAngleDeg: 42,
+          typical: { angleDeg: 42 },
         });
       }
     }
@@ -67,7 +67,7 @@ export const FLYING_TARP = defineFamily({
         kind: "hem",
         node,
         towards: { x: direction, y: 0 },
-        typicalAngleDeg: 45,
+        typical: { angleDeg: 45 },
       });
     }
     return {

@@ -29,7 +29,6 @@ export const HALF_PYRAMID = defineFamily({
     const apex = vec(0, y, d.heightM);
     const corners = rectangle(x, y, HEM_HEIGHT_M);
     const [frontRight, rearRight, rearLeft, frontLeft] = corners;
-    if (!frontRight || !rearRight || !rearLeft || !frontLeft) return { outline: [], sleepingPlaces: [] };
     for (const [zone, from, to, columns] of [
       ["right", frontRight, rearRight, 4],
       ["rear", rearRight, rearLeft, 4],
@@ -45,7 +44,7 @@ export const HALF_PYRAMID = defineFamily({
       kind: "guy",
       node: head,
       towards: { x: 0, y: 1 },
-      typicalAngleDeg: 42,
+      typical: { angleDeg: 42 },
     });
     for (const [id, name, kind, point, towards] of [
       ["corner-front-right", "Corner, front right", "corner", frontRight, { x: 1, y: 0.6 }],
@@ -56,7 +55,7 @@ export const HALF_PYRAMID = defineFamily({
       ["hem-left", "Hem, left middle", "hem", mix(rearLeft, frontLeft, 0.5), { x: -1, y: 0 }],
       ["corner-front-left", "Corner, front left", "corner", frontLeft, { x: -1, y: 0.6 }],
     ] as const) {
-      mesh.tieOut({ id, name, kind, node: mesh.node(point), towards, typicalLengthM: HEM_LOOP_M });
+      mesh.tieOut({ id, name, kind, node: mesh.node(point), towards, typical: { lengthM: HEM_LOOP_M } });
     }
     return { outline: corners, sleepingPlaces: placesSideBySide({ x: 0, y: -0.05 * y }, 2 * y - 0.3, 90, 3) };
   },

@@ -1,3 +1,4 @@
+import { itemAt } from "../indexed";
 import type { ShelterModel, TieOut, TieOutKind, Vec3 } from "../types";
 import { add, bearingDeg, cross, distance, dot, lengthOf, scale, subtract, vec } from "../vectors";
 
@@ -31,9 +32,8 @@ export interface TieOutRequest {
   readonly node: number;
   /** Plan direction in which the line runs out; need not be a unit vector. */
   readonly towards: { readonly x: number; readonly y: number };
-  /** Typical line angle above the ground, degrees, unless a typical length is given. */
-  readonly typicalAngleDeg?: number;
-  readonly typicalLengthM?: number;
+  /** Typical line: by its angle above the ground, degrees, or by its length, m. */
+  readonly typical: { readonly angleDeg: number } | { readonly lengthM: number };
 }
 
 interface LinkDraft {
@@ -87,9 +87,7 @@ export class ShelterMesh {
   }
 
   positionOf(node: number): Vec3 {
-    const found = this.nodes[node];
-    if (!found) throw new RangeError(`No node ${node}.`);
-    return found.position;
+    return itemAt(this.nodes, node).position;
   }
 
   /** A surface given by a function of u, v in 0…1, cut into `across` × `along` quads (times the refinement). */
@@ -102,7 +100,7 @@ export class ShelterMesh {
     }
     for (let row = 0; row < rows; row += 1) {
       for (let column = 0; column < columns; column += 1) {
-        const corner = (dr: number, dc: number) => grid[row + dr]?.[column + dc] ?? 0;
+        const corner = (dr: number, dc: number) => itemAt(itemAt(grid, row + dr), column + dc);
         this.panel(zone, [corner(0, 0), corner(0, 1), corner(1, 1), corner(1, 0)]);
       }
     }
@@ -164,9 +162,7 @@ export class ShelterMesh {
   /** A bent pole through nodes of the fabric; its feet stand on the ground and a floor strap keeps them together. */
   hoop(id: string, name: string, nodes: readonly number[], bendingStiffnessNm2: number): void {
     this.hoops.push({ id, name, nodes, stiffnessN: HOOP_STIFFNESS_N, bendingStiffnessNm2 });
-    const first = nodes[0];
-    const last = nodes[nodes.length - 1];
-    if (first === undefined || last === undefined) return;
+    const [first, last] = [itemAt(nodes, 0), itemAt(nodes, nodes.length - 1)];
     this.feet.push(this.positionOf(first), this.positionOf(last));
     this.straps.push({ a: first, b: last, stiffnessN: 2 * RIDGE_STIFFNESS_N });
   }
@@ -181,8 +177,11 @@ export class ShelterMesh {
   }
 
   private lineLength(request: TieOutRequest, heightM: number): number {
-    const typical = request.typicalLengthM ?? heightM / Math.sin(((request.typicalAngleDeg ?? 45) * Math.PI) / 180);
-    const rounded = request.typicalLengthM ?? Math.ceil(typical * 20) / 20;
+    const { typical } = request;
+    const rounded =
+      "lengthM" in typical
+        ? typical.lengthM
+        : Math.ceil((heightM / Math.sin((typical.angleDeg * Math.PI) / 180)) * 20) / 20;
     const wanted = this.materials.lineLengthsM[request.id];
     if (wanted === undefined) return rounded;
     const shortest = Math.max(0.04, heightM * 1.02);
@@ -245,7 +244,7 @@ export class ShelterMesh {
     const hoopLines = this.hoops.flatMap((hoop) =>
       hoop.nodes
         .slice(1)
-        .map((node, index): [Vec3, Vec3] => [this.positionOf(hoop.nodes[index] ?? node), this.positionOf(node)]),
+        .map((node, index): [Vec3, Vec3] => [this.positionOf(itemAt(hoop.nodes, index)), this.positionOf(node)]),
     );
     return {
       kind,

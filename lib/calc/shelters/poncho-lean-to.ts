@@ -47,7 +47,7 @@ export const PONCHO_LEAN_TO = defineFamily({
         kind: "guy",
         node: head,
         towards: { x: direction * 0.6, y: 1 },
-        typicalAngleDeg: 42,
+        typical: { angleDeg: 42 },
       });
       mesh.tieOut({
         id: `hem-rear-${side}`,
@@ -55,7 +55,7 @@ export const PONCHO_LEAN_TO = defineFamily({
         kind: "corner",
         node: mesh.node(vec(direction * x, -y, HEM_HEIGHT_M)),
         towards: { x: direction * 0.6, y: -1 },
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
     }
     mesh.tieOut({
@@ -64,7 +64,7 @@ export const PONCHO_LEAN_TO = defineFamily({
       kind: "hem",
       node: mesh.node(vec(0, -y, HEM_HEIGHT_M)),
       towards: { x: 0, y: -1 },
-      typicalLengthM: HEM_LOOP_M,
+      typical: { lengthM: HEM_LOOP_M },
     });
     return {
       outline: [front[1], rear[1], rear[0], front[0]],

@@ -28,7 +28,6 @@ export const PYRAMID = defineFamily({
     const y = d.depthM / 2;
     const apex = vec(0, 0, d.heightM);
     const [frontRight, rearRight, rearLeft, frontLeft] = rectangle(x, y, HEM_HEIGHT_M);
-    if (!frontRight || !rearRight || !rearLeft || !frontLeft) return { outline: [], sleepingPlaces: [] };
     const head = mesh.node(apex);
     mesh.pole("pole", "Middle pole", head, vec(0, 0, 0));
     for (const [zone, from, to, towards] of [
@@ -45,7 +44,7 @@ export const PYRAMID = defineFamily({
         kind: "hem",
         node: mesh.node(middle),
         towards,
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
       mesh.tieOut({
         id: `pull-out-${zone}`,
@@ -53,7 +52,7 @@ export const PYRAMID = defineFamily({
         kind: "side-pull-out",
         node: mesh.node(mix(apex, middle, 0.5)),
         towards,
-        typicalAngleDeg: 38,
+        typical: { angleDeg: 38 },
       });
     }
     for (const [place, point, towards] of [
@@ -68,7 +67,7 @@ export const PYRAMID = defineFamily({
         kind: "corner",
         node: mesh.node(point),
         towards,
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
     }
     const places = placesSideBySide({ x: 0, y: 0 }, 2 * x - 0.2, 0, 4);

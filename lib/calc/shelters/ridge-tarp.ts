@@ -59,7 +59,7 @@ export const RIDGE_TARP = defineFamily({
         kind: "ridge-end",
         node: head,
         towards: { x: 0, y: sign },
-        typicalAngleDeg: 40,
+        typical: { angleDeg: 40 },
       });
       for (const [side, direction] of [
         ["right", 1],
@@ -71,7 +71,7 @@ export const RIDGE_TARP = defineFamily({
           kind: "corner",
           node: mesh.node(vec(direction * x, sign * y, d.hemHeightM)),
           towards: { x: direction, y: sign * 0.7 },
-          typicalAngleDeg: 32,
+          typical: { angleDeg: 32 },
         });
       }
     }
@@ -85,7 +85,7 @@ export const RIDGE_TARP = defineFamily({
         kind: "hem",
         node: mesh.node(vec(direction * x, 0, d.hemHeightM)),
         towards: { x: direction, y: 0 },
-        typicalAngleDeg: 32,
+        typical: { angleDeg: 32 },
       });
     }
     return {

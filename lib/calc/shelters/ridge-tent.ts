@@ -39,7 +39,7 @@ export const RIDGE_TENT = defineFamily({
         kind: "side-pull-out",
         node: mesh.node(mix(ridge(0.5), hem(0.5), 0.5)),
         towards: { x: direction, y: 0 },
-        typicalAngleDeg: 38,
+        typical: { angleDeg: 38 },
       });
       for (const [place, share] of [
         ["front", 1 / 3],
@@ -51,7 +51,7 @@ export const RIDGE_TENT = defineFamily({
           kind: "hem",
           node: mesh.node(hem(share)),
           towards: { x: direction, y: 0 },
-          typicalLengthM: HEM_LOOP_M,
+          typical: { lengthM: HEM_LOOP_M },
         });
       }
     }
@@ -70,7 +70,7 @@ export const RIDGE_TENT = defineFamily({
         kind: "ridge-end",
         node: head,
         towards: { x: 0, y: sign },
-        typicalAngleDeg: 40,
+        typical: { angleDeg: 40 },
       });
       mesh.tieOut({
         id: `hem-${end}`,
@@ -78,7 +78,7 @@ export const RIDGE_TENT = defineFamily({
         kind: "hem",
         node: mesh.node(base(0.5)),
         towards: { x: 0, y: sign },
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
       for (const [side, direction] of [
         ["right", 1],
@@ -90,7 +90,7 @@ export const RIDGE_TENT = defineFamily({
           kind: "corner",
           node: mesh.node(vec(direction * x, sign * y, HEM_HEIGHT_M)),
           towards: { x: direction, y: sign },
-          typicalLengthM: HEM_LOOP_M,
+          typical: { lengthM: HEM_LOOP_M },
         });
       }
     }

@@ -44,8 +44,8 @@ export const TUNNEL = defineFamily({
       mesh.floorStrip(mesh.node(arch(0, atY)), mesh.node(arch(1, atY)), d.hoopSpacingM / rows);
     }
     for (let column = 1; column < columns; column += 1) {
-      const ends = [1, -1].map((sign) => mesh.node(endHem(column / columns, sign)));
-      mesh.floorStrip(ends[0] ?? 0, ends[1] ?? 0, d.widthM / columns);
+      const u = column / columns;
+      mesh.floorStrip(mesh.node(endHem(u, 1)), mesh.node(endHem(u, -1)), d.widthM / columns);
     }
     for (const [end, sign] of [
       ["front", 1],
@@ -61,7 +61,7 @@ export const TUNNEL = defineFamily({
         kind: "hem",
         node: mesh.node(endHem(0.5, sign)),
         towards: { x: 0, y: sign },
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
       for (const [side, u] of [
         ["right", 0.25],
@@ -74,7 +74,7 @@ export const TUNNEL = defineFamily({
           kind: "hem",
           node: mesh.node(point),
           towards: { x: point.x, y: point.y - sign * y },
-          typicalLengthM: HEM_LOOP_M,
+          typical: { lengthM: HEM_LOOP_M },
         });
       }
       for (const [side, direction, foot, guy] of [
@@ -87,7 +87,7 @@ export const TUNNEL = defineFamily({
           kind: "corner",
           node: mesh.node(foot),
           towards: { x: direction, y: 0 },
-          typicalLengthM: HEM_LOOP_M,
+          typical: { lengthM: HEM_LOOP_M },
         });
         mesh.tieOut({
           id: `guy-${end}-${side}`,
@@ -95,7 +95,7 @@ export const TUNNEL = defineFamily({
           kind: "guy",
           node: mesh.node(guy),
           towards: { x: direction, y: sign * 0.5 },
-          typicalAngleDeg: 38,
+          typical: { angleDeg: 38 },
         });
       }
     }
@@ -109,7 +109,7 @@ export const TUNNEL = defineFamily({
         kind: "hem",
         node: mesh.node(arch(u, 0)),
         towards: { x: side === "right" ? 1 : -1, y: 0 },
-        typicalLengthM: HEM_LOOP_M,
+        typical: { lengthM: HEM_LOOP_M },
       });
     }
     const rim = Array.from({ length: 13 }, (_, index) => (Math.PI * index) / 12);
