@@ -42,6 +42,11 @@ export async function findPlanRow(reader: Reader, tripId: string, campId: string
   return row ?? null;
 }
 
+/** The order in which plans are read and answered. */
+export function sortPlacements(placements: readonly Placement[]): Placement[] {
+  return [...placements].sort((a, b) => (spotKey(a) < spotKey(b) ? -1 : 1));
+}
+
 interface PlanScope {
   readonly tripId: string;
   readonly campId: string;

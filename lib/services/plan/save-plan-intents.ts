@@ -12,7 +12,7 @@ import { listTieOutIds } from "../pitches/internal";
 import { parseInput } from "../trips/parse-input";
 import { recordChange } from "../trips/internal";
 import { describePlanChange } from "./describe-plan-change";
-import { savePlanRow, writeIntent, writePlacements } from "./internal";
+import { savePlanRow, sortPlacements, writeIntent, writePlacements } from "./internal";
 import { findCampState, loadTripState, type CampState } from "./load-trip-state";
 
 const savePlanIntentsInput = planIntentsBody.extend({ tripId: idSchema, campId: idSchema });
@@ -135,7 +135,7 @@ export async function savePlanIntents({
     const isMine = version !== startVersion || !camp.plan;
     return {
       planVersion: version,
-      placements,
+      placements: sortPlacements(placements),
       savedAt: (isMine || !camp.plan ? savedAt : camp.plan.updatedAt).toISOString(),
       savedByName: isMine || !camp.plan ? ctx.actor.name : camp.plan.updatedByName,
       outcomes,
