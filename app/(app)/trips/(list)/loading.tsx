@@ -1,0 +1,5 @@
+import { PageSkeleton } from "@/components/trip/page-body";
+
+export default function Loading() {
+  return <PageSkeleton rows={3} />;
+}

@@ -1,0 +1,68 @@
+import Link from "next/link";
+import { LinkButton } from "@/components/ui/button";
+import { EmptyState, PageHeading } from "@/components/ui/layout";
+import { requireContext } from "@/lib/auth/session";
+import { ROLE_NAMES } from "@/lib/domain/permissions/permissions";
+import type { TripListItem } from "@/lib/domain/views";
+import { formatDayRange } from "@/lib/format/days";
+import { plural } from "@/lib/format/words";
+import { listTrips } from "@/lib/services/trips/list-trips";
+
+export const metadata = { title: "Trips" };
+
+export default async function TripsPage() {
+  const ctx = await requireContext();
+  const trips = await listTrips({ ctx });
+  return (
+    <>
+      <PageHeading title="Trips" lead={trips.length > 0 ? "The ones you lead and the ones you join." : undefined}>
+        {trips.length > 0 && (
+          <LinkButton href="/trips/new" look="primary">
+            New trip
+          </LinkButton>
+        )}
+      </PageHeading>
+      {trips.length === 0 ? (
+        <EmptyState title="No trips yet">
+          <p>
+            A trip holds its camps, the shelters pitched at them, the kit, and who comes along. Start with a name and
+            the day of the first night. If somebody leads you, open the link in their mail.
+          </p>
+          <LinkButton href="/trips/new" look="primary">
+            Start a trip
+          </LinkButton>
+        </EmptyState>
+      ) : (
+        <ul className="border-b border-hair">
+          {trips.map((trip) => (
+            <TripRow key={trip.id} trip={trip} />
+          ))}
+        </ul>
+      )}
+    </>
+  );
+}
+
+function TripRow({ trip }: { readonly trip: TripListItem }) {
+  return (
+    <li className="border-t border-hair">
+      <Link
+        href={`/trips/${trip.id}`}
+        className="group grid gap-x-6 gap-y-1 py-4 sm:grid-cols-[10rem_minmax(0,1fr)_8rem] sm:items-baseline"
+      >
+        <span className="text-15 text-pencil">{formatDayRange(trip.startDate, trip.endDate)}</span>
+        <span className="min-w-0">
+          <span className="block text-18 font-bold group-hover:text-spruce group-hover:underline">{trip.name}</span>
+          <span className="block text-15 text-pencil">
+            {[
+              plural(trip.nights, "night"),
+              plural(trip.campCount, "camp"),
+              plural(trip.peopleCount, "person", "people"),
+            ].join(" · ")}
+          </span>
+        </span>
+        <span className="text-15 sm:text-right">{ROLE_NAMES[trip.role]}</span>
+      </Link>
+    </li>
+  );
+}

@@ -1,0 +1,110 @@
+import { Suspense } from "react";
+import { PaperList } from "@/components/papers/paper-list";
+import { SendForm } from "@/components/papers/send-form";
+import { WhoHasWhat } from "@/components/papers/who-has-what";
+import { PageBody, PageSkeleton } from "@/components/trip/page-body";
+import { LinkButton } from "@/components/ui/button";
+import { Cautions, PageHeading, Section } from "@/components/ui/layout";
+import { newId } from "@/lib/domain/new-id";
+import { isAllowed, ROLE_NAMES } from "@/lib/domain/permissions/permissions";
+import { PIECES } from "@/lib/domain/post/schema";
+import type { Preferences } from "@/lib/domain/preferences";
+import type { TripView } from "@/lib/domain/views";
+import { renderPapersMail } from "@/lib/email/templates/trip-mails";
+import { formatDayShort } from "@/lib/format/days";
+import type { Context } from "@/lib/services/context/context";
+import { listCampSummaries } from "@/lib/services/camps/list-camp-summaries";
+import { listPeople } from "@/lib/services/people/list-people";
+import { listMessages } from "@/lib/services/post/list-messages";
+import { getSleepingPlan } from "@/lib/services/sleepers/get-sleeping-plan";
+import { loadTrip } from "../_lib/load-trip";
+import { sendPapersAction } from "./actions";
+
+export const metadata = { title: "Cards" };
+
+export default async function PapersPage({ params }: { readonly params: Promise<{ tripId: string }> }) {
+  const { ctx, trip, preferences } = await loadTrip(params, "paper.all");
+  return (
+    <PageBody>
+      <Suspense fallback={<PageSkeleton />}>
+        <Papers ctx={ctx} trip={trip} preferences={preferences} />
+      </Suspense>
+    </PageBody>
+  );
+}
+
+async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView; preferences: Preferences }) {
+  const input = { tripId: trip.id };
+  const maySend = isAllowed(trip.role, "post.send");
+  const [camps, people, messages] = await Promise.all([
+    listCampSummaries({ ctx, input }),
+    listPeople({ ctx, input }),
+    isAllowed(trip.role, "post.read") ? listMessages({ ctx, input }) : [],
+  ]);
+  const sleeping = await Promise.all(
+    camps.map((camp) => getSleepingPlan({ ctx, input: { tripId: trip.id, campId: camp.id } })),
+  );
+  return (
+    <>
+      <PageHeading
+        title={`Cards and lists, version ${trip.paperVersion}`}
+        lead="Every change that is printed makes a new version. Look at a piece before you send it."
+      >
+        {maySend && <LinkButton href="#send">Preview and send</LinkButton>}
+      </PageHeading>
+      <Section title="Look and print">
+        <PaperList
+          tripId={trip.id}
+          initialSize={preferences.paperSize}
+          camps={camps.map((camp, index) => ({
+            id: camp.id,
+            name: camp.name,
+            days: camp.days.map(formatDayShort).join(", "),
+            pitches: (sleeping[index]?.pitches ?? []).map(({ id, name }) => ({ id, name })),
+          }))}
+          people={people.map(({ id, name }) => ({ id, name }))}
+        />
+      </Section>
+      {maySend && (
+        <div id="send" className="scroll-mt-4">
+          <Section title="Preview and send">
+            <SendForm
+              action={sendPapersAction}
+              tripId={trip.id}
+              initialSubject={`${trip.name}: your cards, version ${trip.paperVersion}`}
+              people={people.map(({ id, name, email, role }) => ({ id, name, email, role: ROLE_NAMES[role] }))}
+              pieces={PIECES}
+              paperSize={preferences.paperSize}
+              requestId={newId()}
+              previews={{ withMessage: previewMail(ctx, trip, true), without: previewMail(ctx, trip, false) }}
+            />
+          </Section>
+          <Section
+            title="Who has what"
+            actions={
+              <LinkButton href={`/trips/${trip.id}/post`} look="quiet">
+                All messages
+              </LinkButton>
+            }
+          >
+            <WhoHasWhat people={people} messages={messages} timeZone={trip.timeZone} />
+          </Section>
+        </div>
+      )}
+      <Cautions />
+    </>
+  );
+}
+
+/** The mail as it will go out, with marks where name, message and files come in. */
+function previewMail(ctx: Context, trip: TripView, hasMessage: boolean): string {
+  return renderPapersMail({
+    name: "{name}",
+    leaderName: ctx.actor.name,
+    tripName: trip.name,
+    subject: "",
+    message: hasMessage ? "{message}" : "",
+    fileNames: ["{files}"],
+    url: `…/trips/${trip.id}`,
+  }).text;
+}
