@@ -54,6 +54,8 @@ function compareMoves(a: number, b: number, c: number, d: number): number {
   }
 }
 
+const NO_COSTS: readonly number[] = [];
+
 /**
  * A cost in the ordered group ℤ^levels × ℤ^costs, kept sparse: how many rows more (or fewer) stand at which level,
  * worst level first, then the tie-break costs.
@@ -124,19 +126,41 @@ class Label {
   }
 
   isLessThan(other: Label): boolean {
-    const shared = Math.min(this.length, other.length);
-    for (let i = 0; i < shared; i++) {
-      const mine = at(this.levels, i);
-      const theirs = at(other.levels, i);
-      if (mine < theirs) return at(this.counts, i) < 0;
-      if (theirs < mine) return at(other.counts, i) > 0;
-      const difference = at(this.counts, i) - at(other.counts, i);
-      if (difference !== 0) return difference < 0;
+    return this.isLessWith(-1, -1, NO_COSTS, NO_COSTS, 0, other);
+  }
+
+  /**
+   * Whether this label, with one row more at level `gained` and one fewer at `lost`, with the costs `added` instead of
+   * `dropped` and `changes` more rows changed, is less than `other`. Levels of −1 stand for none.
+   */
+  isLessWith(
+    gained: number,
+    lost: number,
+    added: readonly number[],
+    dropped: readonly number[],
+    changes: number,
+    other: Label,
+  ): boolean {
+    let mine = 0;
+    let theirs = 0;
+    let from = -1;
+    for (;;) {
+      let level = Infinity;
+      if (mine < this.length) level = at(this.levels, mine);
+      if (theirs < other.length && at(other.levels, theirs) < level) level = at(other.levels, theirs);
+      if (gained > from && gained < level) level = gained;
+      if (lost > from && lost < level) level = lost;
+      if (level === Infinity) break;
+      let net = (gained === level ? 1 : 0) - (lost === level ? 1 : 0);
+      if (mine < this.length && at(this.levels, mine) === level) net += at(this.counts, mine++);
+      if (theirs < other.length && at(other.levels, theirs) === level) net -= at(other.counts, theirs++);
+      if (net !== 0) return net < 0;
+      from = level;
     }
-    if (this.length > shared) return at(this.counts, shared) < 0;
-    if (other.length > shared) return at(other.counts, shared) > 0;
-    for (let i = 0; i < this.costs.length; i++) {
-      const difference = at(this.costs, i) - at(other.costs, i);
+    const last = this.costs.length - 1;
+    for (let i = 0; i <= last; i++) {
+      const moved = i === last ? changes : at(added, i) - at(dropped, i);
+      const difference = at(this.costs, i) + moved - at(other.costs, i);
       if (difference !== 0) return difference < 0;
     }
     return false;
@@ -214,7 +238,6 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
   };
 
   const labels = Array.from({ length: kindsAndEmpty }, () => new Label(2 * kindsAndEmpty + 4, costCount));
-  const trial = new Label(2 * kindsAndEmpty + 4, costCount);
   const previous = new Int32Array(kindsAndEmpty);
 
   for (let row = 0; row < rows; row++) {
@@ -240,14 +263,16 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
           const moved = at(mover, from * kindsAndEmpty + to);
           const target = labels[to];
           if (moved < 0 || !target) continue;
-          trial.copyFrom(label);
-          trial.add(at(rank, moved * kindsAndEmpty + to), 1);
-          trial.add(at(rank, moved * kindsAndEmpty + from), -1);
-          trial.addCosts(costOf(to), 1);
-          trial.addCosts(costOf(from), -1);
-          trial.addChanges(changeOf(moved, to) - changeOf(moved, from));
-          if (target.isSet && !trial.isLessThan(target)) continue;
-          target.copyFrom(trial);
+          const gained = at(rank, moved * kindsAndEmpty + to);
+          const lost = at(rank, moved * kindsAndEmpty + from);
+          const changes = changeOf(moved, to) - changeOf(moved, from);
+          if (target.isSet && !label.isLessWith(gained, lost, costOf(to), costOf(from), changes, target)) continue;
+          target.copyFrom(label);
+          target.add(gained, 1);
+          target.add(lost, -1);
+          target.addCosts(costOf(to), 1);
+          target.addCosts(costOf(from), -1);
+          target.addChanges(changes);
           previous[to] = from;
           next.add(to);
         }

@@ -1,12 +1,18 @@
-import { bestLean } from "./capacity";
+import { capacityNumbers } from "./capacity";
 import type { PreparedCamp, PreparedShelter, PreparedTieOut } from "./prepare-camp";
-import { riggingOf, setAnchor, strengthKey, type Strength } from "./tie-out-strength";
-import type { AnchorSpec, Placement, TrayAnchor } from "./types";
+import { setAnchor, strengthKey, type Strength } from "./tie-out-strength";
+import type { AnchorSpec, GroundState, Placement, Rigging, TrayAnchor } from "./types";
 
 /** Knot of a placement that nobody has rigged yet: holds and can be tightened (judgement). */
 const USUAL_KNOT = "taut-line-hitch";
 /** Leans are looked for at line angles this far apart, degrees: the best lean changes little in between. */
-const LEAN_ANGLE_STEP_DEG = 5;
+const LINE_ANGLE_STEP_DEG = 5;
+/** Leans that are tried first, degrees, and how far to either side of the best of them: what an eye can set. */
+const COARSE_LEANS_DEG: readonly number[] = [0, 10, 20, 30, 40, -10];
+const LEAN_STEP_DEG = 5;
+const LEAST_LEAN_DEG = -10;
+/** A line that never breaks, so that the lean is that of the stake in the ground. */
+const STRONG_LINE: Rigging["line"] = { material: "uhmwpe", diameterMm: 20 };
 
 /** Anchors that are driven at a lean. */
 export const isDriven = (spec: AnchorSpec): boolean => spec.class === "stake";
@@ -71,40 +77,60 @@ export function rigAtBestLean(
         rockKg: isDriven(anchor.spec) ? habit.rockKg : 0,
       }
     : plain;
-  const leans = new Set([0]);
+  const leans: number[] = [];
   if (isDriven(anchor.spec)) {
-    leans.add(recallBestLean(prepared, shelter, tieOut.lineAngleDeg, base));
-    if (habit?.anchorId === anchor.id) leans.add(habit.leanDeg);
-  }
+    leans.push(recallBestLean(prepared, shelter.ground, shelter.pitch.patch, tieOut.lineAngleDeg, anchor, base.rockKg));
+    if (habit?.anchorId === anchor.id) leans.push(habit.leanDeg);
+  } else leans.push(0);
   let best: Rigged | null = null;
   for (const leanDeg of leans) {
     const placement = { ...base, leanDeg };
     const strength = strengthOf(prepared, shelter, tieOut, placement);
     if (!strength || strength.dependableN <= 0) continue;
-    // Upright is the least work, so a lean has to be really better.
     if (!best || strength.dependableN > best.strength.dependableN * (1 + 1e-9)) best = { placement, strength };
   }
-  return best;
+  if (!best || best.placement.leanDeg === 0 || !isLeanIdle(best.strength)) return best;
+  // Line or head give first: upright is less work and holds the same.
+  const placement = { ...base, leanDeg: 0 };
+  const strength = strengthOf(prepared, shelter, tieOut, placement);
+  return strength && strength.dependableN >= best.strength.dependableN ? { placement, strength } : best;
 }
 
+const isLeanIdle = ({ mode }: Strength): boolean => mode === "line-breaks" || mode === "head-gives" || mode === "rated";
+
+/** The best lean of a stake in a ground, −10…45° in steps of 5°; among equals the nearest to upright. */
 function recallBestLean(
   prepared: PreparedCamp,
-  shelter: PreparedShelter,
+  ground: GroundState,
+  patch: string,
   lineAngleDeg: number,
-  base: Placement,
+  anchor: TrayAnchor,
+  rockKg: number,
 ): number {
-  const angleDeg = Math.round(lineAngleDeg / LEAN_ANGLE_STEP_DEG) * LEAN_ANGLE_STEP_DEG;
-  const { line } = shelter.pitch.spec;
-  const key = `${strengthKey(base)}|${shelter.pitch.patch}|${angleDeg}|${line.material}|${line.diameterMm}`;
+  const angleDeg = Math.min(90, Math.round(lineAngleDeg / LINE_ANGLE_STEP_DEG) * LINE_ANGLE_STEP_DEG);
+  const key = `${anchor.id}|${patch}|${angleDeg}|${rockKg}`;
   const known = prepared.leans.get(key);
   if (known !== undefined) return known;
-  const anchor = prepared.anchors.get(base.anchorId)?.spec;
-  const rigging = riggingOf(base, prepared.anchors, line);
-  const found =
-    anchor && rigging && shelter.ground
-      ? bestLean({ anchor, ground: shelter.ground, lineAngleDeg: angleDeg, rigging })
-      : null;
-  const leanDeg = found?.leanDeg ?? 0;
-  prepared.leans.set(key, leanDeg);
-  return leanDeg;
+  const rigging = {
+    depthOutM: 0,
+    tandem: null,
+    rockKg,
+    shockCord: false,
+    line: STRONG_LINE,
+    knot: USUAL_KNOT,
+  } as const;
+  const holdsAt = (leanDeg: number): number =>
+    capacityNumbers({ anchor: anchor.spec, ground, lineAngleDeg: angleDeg, rigging: { ...rigging, leanDeg } })
+      ?.dependableN ?? 0;
+  let best = { leanDeg: 0, holdsN: -1 };
+  const consider = (leanDeg: number) => {
+    const holdsN = holdsAt(leanDeg);
+    if (holdsN > best.holdsN * (1 + 1e-6)) best = { leanDeg, holdsN };
+  };
+  COARSE_LEANS_DEG.forEach(consider);
+  const centre = best.leanDeg;
+  if (centre > LEAST_LEAN_DEG) consider(centre - LEAN_STEP_DEG);
+  consider(centre + LEAN_STEP_DEG);
+  prepared.leans.set(key, best.leanDeg);
+  return best.leanDeg;
 }

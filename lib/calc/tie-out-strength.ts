@@ -1,5 +1,5 @@
 import { anchorCapacity, capacityNumbers } from "./capacity";
-import type { Capacity, GroundState, Placement, Rigging, ShelterSpec, TrayAnchor } from "./types";
+import type { Capacity, CapacityMode, GroundState, Placement, Rigging, ShelterSpec, TrayAnchor } from "./types";
 
 /** Anchors of the tray by id. */
 export type AnchorsById = ReadonlyMap<string, TrayAnchor>;
@@ -10,6 +10,8 @@ export interface Strength {
   /** σ of the logarithm. */
   readonly scatter: number;
   readonly dependableN: number;
+  /** What gives first; null where it can't be used. */
+  readonly mode: CapacityMode | null;
 }
 
 /** Names one tie-out of one pitched shelter. */
@@ -45,7 +47,7 @@ export interface SetAnchor {
   readonly strengthAt: (lineAngleDeg: number, pullCycles?: number) => Strength | null;
 }
 
-const NOTHING: Strength = { medianN: 0, scatter: 0, dependableN: 0 };
+const NOTHING: Strength = { medianN: 0, scatter: 0, dependableN: 0, mode: null };
 
 /** Ties a placement to its anchor, ground and rigging; null when an anchor it names is not in the tray. */
 export function setAnchor(

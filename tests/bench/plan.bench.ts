@@ -64,18 +64,26 @@ function largeCamp(): CampInput {
   };
 }
 
-/** Median time of `runs` calls, ms, each on what `prepare` gives. */
-function medianMs<T>(runs: number, prepare: () => T, call: (input: T) => unknown): number {
+interface Timing {
+  readonly medianMs: number;
+  /** On a busy machine the better measure of the work itself. */
+  readonly fastestMs: number;
+}
+
+/** Times `runs` calls, each on what `prepare` gives. */
+function time<T>(runs: number, prepare: () => T, call: (input: T) => unknown): Timing {
   const times = Array.from({ length: runs }, () => {
     const input = prepare();
     const start = performance.now();
     call(input);
     return performance.now() - start;
   });
-  return times.sort((a, b) => a - b)[Math.floor(runs / 2)] ?? NaN;
+  times.sort((a, b) => a - b);
+  return { medianMs: times[Math.floor(runs / 2)] ?? NaN, fastestMs: times[0] ?? NaN };
 }
 
-const inMs = (time: number): string => `${time.toFixed(time < 10 ? 2 : 0)} ms`;
+const inMs = (ms: number): string => `${ms.toFixed(ms < 10 ? 2 : 0)} ms`;
+const both = ({ medianMs, fastestMs }: Timing): string => `${inMs(medianMs)} (fastest ${inMs(fastestMs)})`;
 
 /** The allocation that the proposal solves, margins in steps of `step` so that HiGHS has a countable number of levels. */
 function allocationOf(camp: CampInput, step: number): GroupedProblem {
@@ -149,8 +157,8 @@ const bench: Bench = async (report) => {
   report({ name: "best plan, first call of the process", value: inMs(performance.now() - first) });
   report({
     name: "best plan, nothing remembered (median of 15)",
-    value: inMs(
-      medianMs(
+    value: both(
+      time(
         15,
         () => camp,
         (input) => proposePlan(input, OPTIONS),
@@ -161,17 +169,17 @@ const bench: Bench = async (report) => {
   proposePreparedPlan(prepared, OPTIONS);
   report({
     name: "best plan, camp prepared (median of 15)",
-    value: inMs(
-      medianMs(
+    value: both(
+      time(
         15,
         () => prepared,
         (input) => proposePreparedPlan(input, OPTIONS),
       ),
     ),
   });
-  report({ name: "prepare camp (median of 9)", value: inMs(medianMs(9, () => camp, prepareCamp)) });
+  report({ name: "prepare camp (median of 9)", value: both(time(9, () => camp, prepareCamp)) });
   const placed = { ...camp, placements: plan.placements };
-  report({ name: "whole camp evaluated (median of 9)", value: inMs(medianMs(9, () => placed, evaluateCamp)) });
+  report({ name: "whole camp evaluated (median of 9)", value: both(time(9, () => placed, evaluateCamp)) });
 
   evaluatePlacements(prepared, plan.placements);
   let lean = 0;
@@ -184,7 +192,7 @@ const bench: Bench = async (report) => {
   };
   report({
     name: "margins after one move (median of 101)",
-    value: inMs(medianMs(101, moveOne, (placements) => evaluatePlacements(prepared, placements))),
+    value: both(time(101, moveOne, (placements) => evaluatePlacements(prepared, placements))),
     target: "≤ 4 ms",
   });
   const [weakest] = prepared.shelters;
@@ -193,8 +201,8 @@ const bench: Bench = async (report) => {
     const spot = { pitchId: weakest.pitch.pitchId, tieOutId: tieOut.tieOut.id };
     report({
       name: "quick mends of one tie-out (median of 5)",
-      value: inMs(
-        medianMs(
+      value: both(
+        time(
           5,
           () => placed,
           (input) => quickMends(input, spot),
@@ -204,15 +212,15 @@ const bench: Bench = async (report) => {
   }
 
   const allocation = allocationOf(camp, 0.01);
-  const ourMs = medianMs(15, () => allocation, assignLexicographic);
-  report({ name: "allocation alone, margins in steps of 0.01 (median of 15)", value: inMs(ourMs) });
+  const our = time(15, () => allocation, assignLexicographic);
+  report({ name: "allocation alone, margins in steps of 0.01 (median of 15)", value: both(our) });
   const theirs = await solveByHighs(allocation);
   const ours = assignLexicographic(allocation)
     .map((kind, row) => (kind === null ? allocation.emptyValues[row] : allocation.values[row]?.[kind]) ?? NaN)
     .sort((a, b) => a - b);
   const isSame = ours.every((value, index) => value === theirs.values[index]);
   report({ name: `same allocation by HiGHS, ${theirs.programs} integer programs`, value: inMs(theirs.timeMs) });
-  report({ name: "HiGHS ÷ ours", value: `${(theirs.timeMs / ourMs).toFixed(0)} ×`, target: "> 1" });
+  report({ name: "HiGHS ÷ ours", value: `${(theirs.timeMs / our.medianMs).toFixed(0)} ×`, target: "> 1" });
   report({ name: "same margins in every tie-out", value: isSame ? "yes" : "NO", target: "yes" });
 };
 
