@@ -1,7 +1,8 @@
-import { existsSync } from "node:fs";
+import { existsSync, readFileSync } from "node:fs";
 import { createRequire } from "node:module";
 import path from "node:path";
 import { Font } from "@react-pdf/renderer";
+import { markPostscriptName, unpackWoff } from "./woff";
 
 /** Each file of the family holds one subset of letters; a text takes each letter from the first that has it. */
 const SUBSETS = ["latin", "latin-ext", "cyrillic", "cyrillic-ext", "vietnamese"] as const;
@@ -25,17 +26,23 @@ function findFontFolder(): string {
   throw new Error("The fonts of the papers are missing: run npm install.");
 }
 
+function readFont(file: string, mark: string): string {
+  const font = unpackWoff(readFileSync(file));
+  markPostscriptName(font, mark);
+  return `data:font/ttf;base64,${font.toString("base64")}`;
+}
+
 let isRegistered = false;
 
 /** woff, not woff2: with woff2 the text is there but cannot be seen. */
 export function registerFonts(): void {
   if (isRegistered) return;
   const folder = findFontFolder();
-  for (const subset of SUBSETS) {
+  for (const [index, subset] of SUBSETS.entries()) {
     Font.register({
       family: `Nunito Sans ${subset}`,
       fonts: WEIGHTS.map((fontWeight) => ({
-        src: path.join(folder, `nunito-sans-${subset}-${fontWeight}-normal.woff`),
+        src: readFont(path.join(folder, `nunito-sans-${subset}-${fontWeight}-normal.woff`), "NOPQR".charAt(index)),
         fontWeight,
       })),
     });

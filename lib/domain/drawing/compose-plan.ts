@@ -27,7 +27,7 @@ export interface ComposedPlan {
 }
 
 const SMALLEST_SCALE = 2;
-const STEPS = 14;
+const STEPS = 9;
 
 /** The largest scale at which the shelter, its labels and the wind fit into the box, with free corners for north and scale. */
 export function composePlan(view: PlanView, options: ComposeOptions): ComposedPlan {

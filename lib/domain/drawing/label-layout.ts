@@ -67,13 +67,14 @@ function bestPlace(
   const toNumber = sizes.stateRadius + sizes.gap + sizes.numberRadius;
   let best = { state: anchor, number: anchor, cost: Infinity };
   for (const turn of TURNS_DEG) {
+    if (Math.abs(turn) / 60 >= best.cost) continue;
     const state = polar(anchor, toState, outwardDeg + turn);
+    const stateCost = overlap(state, sizes.stateRadius, discs, segments, sizes.gap);
     for (const twist of TWISTS_DEG) {
+      const known = stateCost + (Math.abs(turn) + Math.abs(twist) * 0.6) / 60;
+      if (known >= best.cost) continue;
       const number = polar(state, toNumber, outwardDeg + turn + twist);
-      const cost =
-        overlap(state, sizes.stateRadius, discs, segments, sizes.gap) +
-        overlap(number, sizes.numberRadius, discs, segments, sizes.gap) +
-        (Math.abs(turn) + Math.abs(twist) * 0.6) / 60;
+      const cost = known + overlap(number, sizes.numberRadius, discs, segments, sizes.gap);
       if (cost < best.cost) best = { state, number, cost };
     }
   }

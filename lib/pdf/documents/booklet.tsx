@@ -89,7 +89,7 @@ function coverNotes({ trip, contacts, camps, packLists }: Booklet, sheet: Sheet)
   ]);
 }
 
-const WIDTHS = { night: 88, ground: 118, gust: 62, holdsTo: 66, state: 68 } as const;
+const WIDTHS = { night: 66, ground: 106, gust: 54, holdsTo: 60, state: 64 } as const;
 const CELL_GAP = 8;
 
 function nightLine(cells: readonly (readonly [number, Block])[], pad: number): Block {

@@ -16,7 +16,7 @@ import {
 } from "../sections/page-frame";
 import { findModel, shelterDrawing } from "../sections/shelter-drawing";
 import { anchorsUsed } from "../sections/anchors-used";
-import { stateLegend, tieOutTable, type TieOutRow } from "../sections/tie-out-table";
+import { stateLegend, tieOutTable, type TieOutRow, type TieOutTable } from "../sections/tie-out-table";
 import type { Sheet } from "../theme";
 import {
   facingWords,
@@ -56,35 +56,37 @@ export function pitchCardPages(context: CardContext, pitch: PitchView): ReactEle
   const rows = shelter ? rowsOf(camp, pitch, shelter) : [];
   const layTable = (isTight: boolean) =>
     tieOutTable({ rows, tray: camp.tray, width: sheet.inner, preferences: context.preferences, isTight });
-  const table = layTable(rows.length > 9);
+  const roomy = layTable(false);
+  const tight = layTable(true);
   const legend = stateLegend();
   const draw = (height: number) => drawingOf(context, pitch, shelter, sheet.inner, Math.min(height, LARGEST_DRAWING));
-  const rowsHeight = table.rows.reduce((sum, row) => sum + row.height, 0);
-  const leftOnOnePage = room - facts.height - table.head.height - rowsHeight - legend.height - notes.height;
-
-  if (leftOnOnePage >= SMALLEST_DRAWING) {
+  for (const table of [roomy, tight]) {
+    const rowsHeight = table.rows.reduce((sum, row) => sum + row.height, 0);
+    const left = room - facts.height - table.head.height - rowsHeight - legend.height - notes.height;
+    if (left < SMALLEST_DRAWING) continue;
     return [
       <PageFrame key={pitch.id} sheet={sheet} header={header} top={top} bookmark={heading.title}>
-        {stack([facts, draw(leftOnOnePage), table.head, ...table.rows, legend, notes]).node}
+        {stack([facts, draw(left), table.head, ...table.rows, legend, notes]).node}
       </PageFrame>,
     ];
   }
 
-  const roomy = layTable(false);
   const used = anchorsUsed(rows, sheet.inner);
   const drawing = draw(room - facts.height - legend.height - used.height - notes.height);
   const nextTop = continuedHeader(header, heading, sheet);
+  const layOverleaf = (table: TieOutTable) =>
+    fillPages([stack([spacer(6), table.head]), ...table.rows], () => bodyHeight(header, sheet, nextTop));
+  const [roomyPages, tightPages] = [layOverleaf(roomy), layOverleaf(tight)];
+  const overleaf = tightPages.length < roomyPages.length ? tightPages : roomyPages;
   return [
     <PageFrame key={`${pitch.id}-1`} sheet={sheet} header={header} top={top} bookmark={heading.title}>
       {stack([facts, drawing, legend, used, notes]).node}
     </PageFrame>,
-    ...fillPages([stack([spacer(6), roomy.head]), ...roomy.rows], () => bodyHeight(header, sheet, nextTop)).map(
-      (page, index) => (
-        <PageFrame key={`${pitch.id}-${index + 2}`} sheet={sheet} header={header} top={nextTop}>
-          {stack(page).node}
-        </PageFrame>
-      ),
-    ),
+    ...overleaf.map((page, index) => (
+      <PageFrame key={`${pitch.id}-${index + 2}`} sheet={sheet} header={header} top={nextTop}>
+        {stack(page).node}
+      </PageFrame>
+    )),
   ];
 }
 
@@ -152,10 +154,10 @@ const COLUMN_GAP = 16;
 
 function notesOf({ contacts, camp, sheet }: CardContext, pitch: PitchView): Block {
   const text = sheet.inner - (contacts.length > 0 ? 2 : 1) * COLUMN_GAP;
-  const [left, middle] = contacts.length > 0 ? [text * 0.4, text * 0.35] : [text * 0.55, text * 0.45];
+  const [left, middle] = contacts.length > 0 ? [text * 0.38, text * 0.38] : [text * 0.55, text * 0.45];
   const names = camp.sleeperNames[pitch.id] ?? [];
   const fallbacks = camp.fallbacks[pitch.id] ?? [];
-  const title = "If the ground is softer or the wind stronger";
+  const title = "Softer ground or stronger wind";
   return columns(
     [
       {
