@@ -46,7 +46,7 @@ export function ContactFields({
               onChanged();
             }}
           >
-            Remove<span className="sr-only">{` contact ${index + 1}`}</span>
+            Remove <span className="sr-only">{`contact ${index + 1}`}</span>
           </Button>
         </fieldset>
       ))}

@@ -31,8 +31,7 @@ export function DeleteButton({
   return (
     <>
       <Button look={look} onClick={() => setIsOpen(true)}>
-        {label}
-        <span className="sr-only"> {name}</span>
+        {label} <span className="sr-only">{name}</span>
       </Button>
       <Dialog isOpen={isOpen} onClose={() => setIsOpen(false)} title={`${label} ${name}?`}>
         <div className="mb-5 text-15">{children}</div>

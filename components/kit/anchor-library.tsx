@@ -76,7 +76,7 @@ function AddForm({
           className="min-h-11 w-14 rounded-field border border-pencil bg-sheet px-2 text-center"
         />
         <SubmitButton look="outline">
-          Add<span className="sr-only"> {anchor.details.name}</span>
+          Add <span className="sr-only">{anchor.details.name}</span>
         </SubmitButton>
       </div>
     </ActionForm>

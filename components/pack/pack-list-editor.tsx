@@ -128,7 +128,7 @@ function PackRow({
           for the group<span className="sr-only">, {place}</span>
         </label>
         <Button look="quiet" onClick={onRemove}>
-          Remove<span className="sr-only"> {row.name || place}</span>
+          Remove <span className="sr-only">{row.name || place}</span>
         </Button>
       </div>
       <FieldError errors={errors} />

@@ -79,7 +79,7 @@ export function MessageList({
                 <input type="hidden" name="tripId" value={tripId} />
                 <input type="hidden" name="messageId" value={message.id} />
                 <SubmitButton look="quiet">
-                  Try again<span className="sr-only"> to send to {message.toName}</span>
+                  Try again <span className="sr-only">to send to {message.toName}</span>
                 </SubmitButton>
               </ActionForm>
             )}

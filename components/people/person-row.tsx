@@ -53,14 +53,13 @@ export function PersonRow({ tripId, person, roleName, roles, actions }: PersonRo
                 <input type="hidden" name="tripId" value={tripId} />
                 <input type="hidden" name="personId" value={person.id} />
                 <SubmitButton look="quiet">
-                  {person.state === "none" ? "Invite" : "Send a new link"}
-                  <span className="sr-only"> to {person.name}</span>
+                  {person.state === "none" ? "Invite" : "Send a new link"}{" "}
+                  <span className="sr-only">to {person.name}</span>
                 </SubmitButton>
               </ActionForm>
             )}
             <Button look="quiet" aria-expanded={isEditing} onClick={() => setIsEditing(!isEditing)}>
-              {isEditing ? "Close" : "Change"}
-              <span className="sr-only"> {person.name}</span>
+              {isEditing ? "Close" : "Change"} <span className="sr-only">{person.name}</span>
             </Button>
             {!person.isSelf && (
               <DeleteButton

@@ -46,8 +46,7 @@ export function PitchList({ tripId, campId, pitches, free, actions, ...shared }:
                 </div>
                 <div className="flex flex-wrap gap-1">
                   <Button look="quiet" aria-expanded={isOpen} onClick={() => setOpenId(isOpen ? null : pitch.id)}>
-                    {isOpen ? "Close" : "Change"}
-                    <span className="sr-only"> {pitch.name}</span>
+                    {isOpen ? "Close" : "Change"} <span className="sr-only">{pitch.name}</span>
                   </Button>
                   <DeleteButton
                     name={pitch.name}

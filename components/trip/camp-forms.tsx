@@ -35,7 +35,7 @@ export function CopyCampForm({
   return (
     <>
       <Button look="quiet" onClick={() => setIsOpen(true)}>
-        Copy<span className="sr-only"> {name}</span>
+        Copy <span className="sr-only">{name}</span>
       </Button>
       <Dialog isOpen={isOpen} onClose={() => setIsOpen(false)} title={`Copy ${name}`}>
         <p className="mb-4 text-15">Ground, wind, shelters and staking plan are copied to a new camp at the end.</p>

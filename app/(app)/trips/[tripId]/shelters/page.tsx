@@ -66,7 +66,7 @@ export default async function SheltersPage({ params }: { readonly params: Promis
                 {can("shelter.edit") && (
                   <>
                     <OneButtonForm action={copyShelterAction} values={ids}>
-                      Copy<span className="sr-only"> {name}</span>
+                      Copy{" "}<span className="sr-only">{name}</span>
                     </OneButtonForm>
                     <DeleteButton name={name} action={deleteShelterAction} values={ids}>
                       The shelter leaves the trip. Your own gear stays as it is.
