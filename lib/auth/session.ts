@@ -19,6 +19,12 @@ export async function readContext(from: Headers): Promise<Context | null> {
   return { actor: { userId, name, email }, requestId: from.get(REQUEST_ID_HEADER) ?? newId() };
 }
 
+/** Which of somebody's sessions this request belongs to. */
+export async function getSessionId(): Promise<string | null> {
+  const found = await getAuth().api.getSession({ headers: await headers(), query: { disableCookieCache: true } });
+  return found?.session.id ?? null;
+}
+
 /** Of the running request; asked once however often it is called. */
 export const getContext = cache(async (): Promise<Context | null> => readContext(await headers()));
 
