@@ -14,8 +14,10 @@ export const CALC_VERSION = 1;
 const LEVELS: readonly number[] = [0, 0.1, 0.25, 0.5, 0.75, 1, 1.5, 2.25, 3.5, 5];
 /** Halvings of the step between two levels in which the shelter falls: a sixteenth of it remains. */
 const HALVINGS = 4;
-/** Steps after which a shelter that has lost a tie-out, or stands far from the design pressure, counts as not settled. */
+/** Steps after which a shelter that has lost a tie-out counts as not settled. */
 const KNOCK_OUT_LIMIT = 2_000;
+/** Steps allowed from the shape of a neighbouring pressure. */
+const NEAR_LIMIT = 1_200;
 const LOAD_CASES: readonly LoadCase[] = ["pressing", "lifting"];
 
 export interface ShelterAnalysisInput {
@@ -66,9 +68,9 @@ export function analysisKey(
  * would do.
  *
  * The design response is the envelope over all directions and both load cases. The other levels repeat only the cases
- * that govern a tie-out or leave the least head-room at the design pressure. Along the levels each pull is the largest so
- * far, so that more wind never asks less of an anchor; where a case does not settle, the pull is taken to grow in
- * proportion to the pressure (judgement).
+ * that govern a tie-out or leave the least head-room at the design pressure, and end with the first at which the shelter
+ * falls. Along the levels each pull is the largest so far, so that more wind never asks less of an anchor; where a case
+ * does not settle, the pull is taken to grow in proportion to the pressure (judgement).
  *
  * @throws RangeError without a direction, for a pressure that is not > 0, or for a spec that can't be built
  */
@@ -106,9 +108,11 @@ export function analyseShelter(input: ShelterAnalysisInput): ShelterAnalysis {
   };
 }
 
+/** One case; a shape from which it does not settle soon is given up for the drawn one. */
 function solveCase(shelter: ShelterNet, one: WindCase, pressurePa: number, start?: Float64Array): SolvedCase {
   const panelPressurePa = one.unitPressurePa.map((unit) => unit * pressurePa);
-  return { ...one, panelPressurePa, equilibrium: solveShelterNet(shelter, panelPressurePa, { start }) };
+  const near = start && solveShelterNet(shelter, panelPressurePa, { start, iterationLimit: NEAR_LIMIT });
+  return { ...one, panelPressurePa, equilibrium: near?.settled ? near : solveShelterNet(shelter, panelPressurePa, {}) };
 }
 
 /** The settled case in which a tie-out pulls most; the first case when none settles. */
@@ -129,7 +133,9 @@ interface Level {
   readonly cases: readonly SolvedCase[];
 }
 
-/** Responses at every level, pulls made to rise with the pressure. */
+const stands = (cases: readonly SolvedCase[]): boolean => cases.every((one) => one.equilibrium.standing);
+
+/** Responses at every level up to the first at which the shelter falls, pulls made to rise with the pressure. */
 function monotoneLevels(
   shelter: ShelterNet,
   governing: readonly SolvedCase[],
@@ -144,10 +150,14 @@ function monotoneLevels(
   const follow = (multiples: readonly number[]): Level[] => {
     const levels: Level[] = [];
     for (const multiple of multiples) {
-      const before = levels.length > 0 ? itemAt(levels, levels.length - 1).cases : followed;
+      const last = levels[levels.length - 1];
+      if (multiple > 1 && !(last ? stands(last.cases) : stands(designCases))) break;
+      const before = last ? last.cases : followed;
       levels.push({
         multiple,
-        cases: before.map((one) => solveCase(shelter, one, multiple * pressurePa, startOf(one))),
+        cases: before.map((one) =>
+          solveCase(shelter, one, multiple * pressurePa, multiple > 0 ? startOf(one) : undefined),
+        ),
       });
     }
     return levels;
@@ -170,8 +180,7 @@ function closeInOnFall(
   levels: readonly Level[],
   pressurePa: number,
 ): Level[] {
-  const stands = ({ cases }: Level) => cases.every((one) => one.equilibrium.standing);
-  const fallen = levels.findIndex((level) => !stands(level));
+  const fallen = levels.findIndex((level) => !stands(level.cases));
   const [low, high] = [levels[fallen - 1], levels[fallen]];
   if (!low || !high) return [];
   const found: Level[] = [];
@@ -184,7 +193,7 @@ function closeInOnFall(
       cases: followed.map((one) => solveCase(shelter, one, multiple * pressurePa, startOf(one))),
     };
     found.push(level);
-    if (stands(level)) lowMultiple = multiple;
+    if (stands(level.cases)) lowMultiple = multiple;
     else highMultiple = multiple;
   }
   return found;

@@ -49,10 +49,12 @@ export interface NetState {
 }
 
 /**
- * Masses never fall below this share of the all-directions value: a flat cloth stiffens as it bellies. A net that still
- * runs away is started again with the next share; at 1 the step is stable whatever way the links turn.
+ * Masses never fall below this share of the all-directions value: a flat cloth stiffens as it bellies. A net that runs
+ * away, or swings on and on, is tried with the next share; at 1 the step is stable whatever way the links turn.
  */
 const MASS_FLOOR_SHARES = [0.06, 0.25, 1] as const;
+/** Steps after which a net that only swings is taken on with the next share, from where it is. */
+const ATTEMPT_LIMIT = 1_200;
 const DEFAULT_TOLERANCE = 0.004;
 const DEFAULT_ITERATION_LIMIT = 3_000;
 
@@ -64,13 +66,19 @@ const DEFAULT_ITERATION_LIMIT = 3_000;
  * @param options start, a link left out, tolerance (share of all loads, default 0.004), iteration limit (default 3000)
  */
 export function relaxNet(net: Net, netLoad: NetLoad, options: NetOptions = {}): NetState {
-  let attempt = runRelaxation(net, netLoad, options, MASS_FLOOR_SHARES[0]);
-  let iterations = attempt.state.iterations;
-  for (const massFloorShare of MASS_FLOOR_SHARES.slice(1)) {
-    if (!attempt.hasRunAway) break;
-    attempt = runRelaxation(net, netLoad, options, massFloorShare);
+  const limit = options.iterationLimit ?? DEFAULT_ITERATION_LIMIT;
+  let start = options.start ?? net.drawn;
+  let iterations = 0;
+  let attempt: ReturnType<typeof runRelaxation> | null = null;
+  for (const massFloorShare of MASS_FLOOR_SHARES) {
+    const isLast = massFloorShare === 1;
+    const iterationLimit = isLast ? limit - iterations : Math.min(limit - iterations, ATTEMPT_LIMIT);
+    attempt = runRelaxation(net, netLoad, { ...options, start, iterationLimit }, massFloorShare);
     iterations += attempt.state.iterations;
+    if (attempt.state.isSettled || attempt.state.hasCollapsed || iterations >= limit) break;
+    start = attempt.hasRunAway ? (options.start ?? net.drawn) : attempt.state.positions;
   }
+  if (!attempt) throw new RangeError("Nothing was tried.");
   return { ...attempt.state, iterations };
 }
 
