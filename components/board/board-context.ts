@@ -9,6 +9,7 @@ import type { StakingBoardModel } from "./use-staking-board";
 
 export interface BoardContextValue {
   readonly view: CampPlanView;
+  readonly groundName: string | null;
   readonly preferences: Preferences;
   readonly board: StakingBoardModel;
   /** The shelter that is shown. */

@@ -36,7 +36,7 @@ interface BoardDragProps {
 /** Dragging by mouse, touch and keyboard; while a piece is over a tie-out every margin shows what it would be. */
 export function BoardDrag({ board, shelter, anchors, onDropped, onDragging, children }: BoardDragProps) {
   const [piece, setPiece] = useState<Piece | null>(null);
-  const { prepared, state, showPreview, apply } = board;
+  const { engine, prepared, state, showPreview, apply } = board;
 
   const order = useMemo(
     () => shelter.tieOuts.toSorted((a, b) => a.number - b.number).map((one) => spotTargetId("plan", one)),
@@ -72,11 +72,11 @@ export function BoardDrag({ board, shelter, anchors, onDropped, onDragging, chil
     (activeId: unknown, overId: unknown) => {
       const dragged = readPiece(activeId);
       const target = readTarget(overId);
-      if (!dragged || !target) return null;
-      const change = changeOfDrop(prepared, state.placements, dragged, target);
+      if (!dragged || !target || !engine || !prepared) return null;
+      const change = changeOfDrop(engine, prepared, state.placements, dragged, target);
       return change && { change, dragged, target };
     },
-    [prepared, state.placements],
+    [engine, prepared, state.placements],
   );
   const stop = () => {
     setPiece(null);

@@ -1,6 +1,5 @@
 "use client";
 
-import { GROUNDS } from "@/lib/calc/tables/grounds";
 import { formatWindRange } from "@/lib/format/angles";
 import { formatAltitude } from "@/lib/format/lengths";
 import { formatSpeed } from "@/lib/format/speeds";
@@ -9,15 +8,14 @@ import { SaveLine } from "./save-line";
 
 /** Where and when, and what the plan is made for. */
 export function BoardHeading() {
-  const { view, board, preferences } = useBoard();
+  const { view, board, groundName, preferences } = useBoard();
   const { details, days } = view.camp;
   const { designGustMs } = board.result;
-  const ground = GROUNDS.find((one) => one.kind === details.ground?.kind)?.name.toLowerCase();
   const wetness = details.ground && details.ground.wetness !== "usual" ? `, ${details.ground.wetness}` : "";
   const facts = [
     days[0] && formatDay(days[0]),
     details.altitudeM !== null && formatAltitude(details.altitudeM, preferences.lengthUnit),
-    ground && `${ground}${wetness}`,
+    groundName && `${groundName.toLowerCase()}${wetness}`,
     designGustMs !== null &&
       `gust ${formatSpeed(designGustMs, preferences.speedUnit)} from ${formatWindRange(details.windFromDeg, details.windToDeg)}`,
     details.strongWindHours !== null && `${details.strongWindHours}\u2009h of it`,

@@ -2,6 +2,8 @@ import type { CalcAnswer, CalcTaskName, CalcTasks } from "./calc-tasks";
 
 /** Runs the long calculations beside the page; on the page itself where a worker can't be had. */
 export interface CalcClient {
+  /** Keeps the worker; undoes a `close` that has only just been asked for. */
+  open(): void;
   run<Name extends CalcTaskName>(name: Name, input: CalcTasks[Name]["input"]): Promise<CalcTasks[Name]["output"]>;
   close(): void;
 }
@@ -12,12 +14,15 @@ interface Waiting {
   readonly onPage: () => void;
 }
 
+const CLOSE_AFTER_MS = 1_000;
+
 export function createCalcClient(): CalcClient {
   const waiting = new Map<number, Waiting>();
   let worker: Worker | null | undefined;
   let nextId = 1;
+  let closing: ReturnType<typeof setTimeout> | undefined;
 
-  const open = (): Worker | null => {
+  const start = (): Worker | null => {
     if (typeof Worker === "undefined") return null;
     try {
       const opened = new Worker(new URL("./calc.worker.ts", import.meta.url), { type: "module" });
@@ -46,7 +51,7 @@ export function createCalcClient(): CalcClient {
         const onPage = () => {
           import("./calc-tasks").then(({ runTask }) => resolve(runTask(name, input))).catch(reject);
         };
-        if (worker === undefined) worker = open();
+        if (worker === undefined) worker = start();
         if (!worker) {
           onPage();
           return;
@@ -56,10 +61,14 @@ export function createCalcClient(): CalcClient {
         waiting.set(id, { resolve, reject, onPage });
         worker.postMessage({ id, name, input });
       }),
+    open: () => clearTimeout(closing),
     close: () => {
-      worker?.terminate();
-      worker = undefined;
-      waiting.clear();
+      // React may take a page down and put it up again at once; work under way must survive that.
+      closing = setTimeout(() => {
+        worker?.terminate();
+        worker = undefined;
+        waiting.clear();
+      }, CLOSE_AFTER_MS);
     },
   };
 }

@@ -2,12 +2,11 @@
 
 import { useId, useState } from "react";
 import type { ReactNode } from "react";
-import { tandemSpacingM } from "@/lib/calc/plan-reinforce";
-import { isDriven } from "@/lib/calc/rig-anchor";
 import { KNOTS } from "@/lib/calc/tables/lines";
 import type { Placement, TrayAnchor } from "@/lib/calc/types";
 import { formatLean } from "@/lib/format/angles";
 import { lengthFromUnit } from "@/lib/format/lengths";
+import { isDriven } from "./anchor-kind";
 import { useBoard } from "./board-context";
 import { CommitNumber } from "./commit-number";
 import { useIsWide } from "./use-is-wide";
@@ -50,8 +49,12 @@ export function RiggingForm({ placement, anchor }: { readonly placement: Placeme
                 value={placement.tandem?.anchorId ?? ""}
                 onChange={(event) => {
                   const second = seconds.find((one) => one.id === event.target.value);
+                  const { engine } = board;
+                  if (!engine) return;
                   put({
-                    tandem: second ? { anchorId: second.id, spacingM: tandemSpacingM(anchor.spec, second.spec) } : null,
+                    tandem: second
+                      ? { anchorId: second.id, spacingM: engine.tandemSpacingM(anchor.spec, second.spec) }
+                      : null,
                   });
                 }}
               >

@@ -1,7 +1,7 @@
 "use client";
 
 import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
-import { useCallback, useMemo, useState } from "react";
+import { lazy, Suspense, useCallback, useMemo, useState } from "react";
 import type { Preferences } from "@/lib/domain/preferences";
 import type { CampPlanView } from "@/lib/domain/views";
 import { Cautions } from "@/components/ui/layout";
@@ -15,19 +15,24 @@ import { placeFromTray } from "./drag-change";
 import { KitTray } from "./kit-tray";
 import { PhoneSheet } from "./phone-sheet";
 import { isSameSpot, type Spot } from "./plan-change";
-import { PitchPanel } from "./pitch-panel";
 import { PlanDrawing } from "./plan-drawing";
 import { ProposalPanel } from "./proposal-panel";
 import { RankedList } from "./ranked-list";
 import { ShelterTabs } from "./shelter-tabs";
+import type { BoardStart } from "./start-board-view";
 import { TieOutDetail } from "./tie-out-detail";
 import { useIsWide } from "./use-is-wide";
 import { useProposal } from "./use-proposal";
 import { useStakingBoard } from "./use-staking-board";
 import { VerdictPanel } from "./verdict-panel";
 
+/** Opened seldom, and it brings the kinds of shelter with it. */
+const PitchPanel = lazy(() => import("./pitch-panel").then((module) => ({ default: module.PitchPanel })));
+
 export interface StakingBoardProps {
   readonly view: CampPlanView;
+  /** Worked out on the server from the same view. */
+  readonly start: BoardStart;
   readonly preferences: Preferences;
   /** Whose unsaved changes are kept on this device. */
   readonly userId: string;
@@ -43,8 +48,8 @@ export function StakingBoard(props: StakingBoardProps) {
   );
 }
 
-function Board({ view, preferences, userId }: StakingBoardProps) {
-  const board = useStakingBoard(view, userId);
+function Board({ view, start, preferences, userId }: StakingBoardProps) {
+  const board = useStakingBoard(view, start, userId);
   const isWide = useIsWide();
   const [chosenPitchId, setChosenPitchId] = useState<string | null>(board.result.weakest?.pitchId ?? null);
   const [chosen, setChosen] = useState<Spot | null>(board.result.weakest);
@@ -62,16 +67,17 @@ function Board({ view, preferences, userId }: StakingBoardProps) {
   const selectedResult = shelter?.tieOuts.find((one) => isSameSpot(one, selected)) ?? null;
   const model = pitch ? board.models.get(pitch.id) : null;
 
-  const { prepared, state, apply } = board;
+  const { engine, prepared, state, apply } = board;
   const putAnchor = useCallback(
     (anchorId: string, spot: Spot) => {
+      if (!engine || !prepared) return;
       const found = prepared.shelters.find((one) => one.pitch.pitchId === spot.pitchId);
       const number = found?.tieOuts.find((one) => one.tieOut.id === spot.tieOutId)?.tieOut.number;
-      const placement = placeFromTray(prepared, state.placements, anchorId, spot);
+      const placement = placeFromTray(engine, prepared, state.placements, anchorId, spot);
       const name = prepared.anchors.get(anchorId)?.name ?? "The anchor";
       apply({ type: "place", placement }, `${name} is at tie-out ${number ?? ""} now.`);
     },
-    [prepared, state.placements, apply],
+    [engine, prepared, state.placements, apply],
   );
   const touchSpot = useCallback(
     (spot: Spot) => {
@@ -96,6 +102,7 @@ function Board({ view, preferences, userId }: StakingBoardProps) {
   if (!pitch || !shelter) return null;
   const value: BoardContextValue = {
     view,
+    groundName: start.groundName,
     preferences,
     board,
     pitch,
@@ -136,8 +143,12 @@ function Board({ view, preferences, userId }: StakingBoardProps) {
                 />
               </div>
             </div>
-            <div className="order-5 px-4 sm:px-7 lg:p-0">
-              {openPanel === "pitch" && <PitchPanel />}
+            <div className="order-5 px-4 sm:px-7 lg:order-2 lg:p-0">
+              {openPanel === "pitch" && (
+                <Suspense fallback={<p className="text-15 text-pencil">One moment…</p>}>
+                  <PitchPanel />
+                </Suspense>
+              )}
               {openPanel === "proposal" && <ProposalPanel proposal={proposal} onClose={() => setOpenPanel(null)} />}
             </div>
             <div className="order-3 flex min-w-0 flex-col gap-3 px-4 sm:px-7 lg:p-0">

@@ -2,11 +2,11 @@
 
 import Link from "next/link";
 import { Button } from "@/components/ui/button";
-import { isDriven } from "@/lib/calc/rig-anchor";
 import type { TieOutResult } from "@/lib/calc/types";
 import { formatAngle, formatLean } from "@/lib/format/angles";
 import { formatForce } from "@/lib/format/forces";
 import { formatChance, formatMargin } from "@/lib/format/numbers";
+import { isDriven } from "./anchor-kind";
 import { useBoard } from "./board-context";
 import { MendList } from "./mend-list";
 import { RiggingForm } from "./rigging-form";

@@ -2,14 +2,13 @@
 
 import { useMutation } from "@tanstack/react-query";
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
-import { analysisKey } from "@/lib/calc/analyse-shelter";
-import { designAnalysisRequest } from "@/lib/calc/prepare-camp";
 import type { ShelterAnalysis, ShelterSpec } from "@/lib/calc/types";
 import { toWindInput } from "@/lib/domain/plan/to-camp-input";
 import type { PitchDetails } from "@/lib/domain/shelter/schema";
 import type { CampPlanView, PitchView } from "@/lib/domain/views";
 import { patchPitch, RefusedError } from "./board-requests";
 import type { CalcClient } from "./calc-client";
+import type { Engine } from "./use-engine";
 
 interface Changed {
   readonly details: PitchDetails;
@@ -30,6 +29,7 @@ function specWith(pitch: PitchView, details: PitchDetails): ShelterSpec {
 export function useCampPitches(
   view: CampPlanView,
   calc: CalcClient,
+  engine: Engine | null,
   { onRefused, onSaved }: { readonly onRefused: (reason: string) => void; readonly onSaved: () => void },
 ) {
   const [changed, setChanged] = useState<Readonly<Record<string, Changed>>>({});
@@ -47,16 +47,17 @@ export function useCampPitches(
         if (!over || isOld) return { pitch, key: null, request: null };
         const spec = specWith(pitch, over.details);
         const next: PitchView = { ...pitch, details: over.details, version: over.version, spec, analysis: null };
+        if (!engine) return { pitch: next, key: null, request: null };
         const { headingDeg, patch } = over.details;
-        const request = designAnalysisRequest(
+        const request = engine.designAnalysisRequest(
           { wind },
           { pitchId: pitch.id, name: pitch.name, spec, headingDeg, patch, analysis: null },
         );
         if ("gaps" in request) return { pitch: next, key: null, request: null };
-        const key = analysisKey(request.spec, request.relativeWindDirectionsDeg, request.pressurePa);
+        const key = engine.analysisKey(request.spec, request.relativeWindDirectionsDeg, request.pressurePa);
         return { pitch: { ...next, analysis: analyses.get(key) ?? null }, key, request };
       }),
-    [view.pitches, changed, analyses, wind],
+    [view.pitches, changed, analyses, wind, engine],
   );
 
   useEffect(() => {

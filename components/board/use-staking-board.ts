@@ -2,10 +2,7 @@
 
 import { useCallback, useEffect, useMemo, useReducer, useState } from "react";
 import { useRouter } from "next/navigation";
-import { evaluatePlacements } from "@/lib/calc/camp";
-import { prepareCamp } from "@/lib/calc/prepare-camp";
-import { buildShelter } from "@/lib/calc/shelter-kinds";
-import type { Placement, ShelterModel } from "@/lib/calc/types";
+import type { Placement, ShelterModel, ShelterSpec } from "@/lib/calc/types";
 import { newId } from "@/lib/domain/new-id";
 import { toCampInput } from "@/lib/domain/plan/to-camp-input";
 import type { PlanChange } from "@/lib/domain/plan/schema";
@@ -14,13 +11,15 @@ import type { CampPlanView } from "@/lib/domain/views";
 import { reduceBoard, startBoard, tryChange, type BoardAction, type BoardRules, type BoardState } from "./board-state";
 import { createCalcClient } from "./calc-client";
 import type { Spot } from "./plan-change";
+import type { BoardStart } from "./start-board-view";
 import { useCampPitches } from "./use-camp-pitches";
+import { useEngine, type Engine } from "./use-engine";
 import { usePlanSaving } from "./use-plan-saving";
 
 /** A shelter that can't be built has no drawing; the calculation names the gap. */
-function buildOrNull(spec: Parameters<typeof buildShelter>[0]): ShelterModel | null {
+function buildOrNull(engine: Engine, spec: ShelterSpec): ShelterModel | null {
   try {
-    return buildShelter(spec);
+    return engine.buildShelter(spec);
   } catch (error) {
     if (error instanceof RangeError) return null;
     throw error;
@@ -28,17 +27,22 @@ function buildOrNull(spec: Parameters<typeof buildShelter>[0]): ShelterModel | n
 }
 
 /** Everything a staking plan on the screen knows and can do. */
-export function useStakingBoard(view: CampPlanView, userId: string) {
+export function useStakingBoard(view: CampPlanView, start: BoardStart, userId: string) {
   const router = useRouter();
   const [calc] = useState(createCalcClient);
-  useEffect(() => () => calc.close(), [calc]);
+  useEffect(() => {
+    calc.open();
+    return () => calc.close();
+  }, [calc]);
+
+  const engine = useEngine();
 
   const isTieOut = useMemo(() => {
     const known = new Map(
-      view.pitches.map((pitch) => [pitch.id, new Set(buildOrNull(pitch.spec)?.tieOuts.map((tieOut) => tieOut.id))]),
+      Object.entries(start.models).map(([id, model]) => [id, new Set(model?.tieOuts.map((tieOut) => tieOut.id))]),
     );
     return (pitchId: string, tieOutId: string) => known.get(pitchId)?.has(tieOutId) ?? false;
-  }, [view.pitches]);
+  }, [start.models]);
   const rules: BoardRules = useMemo(
     () => ({ tray: view.tray, shockCordCount: view.shockCordCount, isTieOut }),
     [view.tray, view.shockCordCount, isTieOut],
@@ -62,18 +66,32 @@ export function useStakingBoard(view: CampPlanView, userId: string) {
     },
     [refresh],
   );
-  const { pitches, waiting, changePitch } = useCampPitches(view, calc, { onRefused: refuse, onSaved: refresh });
+  const pitched = useCampPitches(view, calc, engine, { onRefused: refuse, onSaved: refresh });
+  const { pitches, changePitch } = pitched;
   const scope = { tripId: view.trip.id, campId: view.camp.id };
   const { saving, retry } = usePlanSaving(state, dispatch, scope, userId, refresh);
 
   const [preview, setPreview] = useState<readonly Placement[] | null>(null);
   const prepared = useMemo(
-    () => prepareCamp(toCampInput(view.camp.details, pitches, view.tray, [])),
-    [view.camp.details, pitches, view.tray],
+    () => engine && engine.prepareCamp(toCampInput(view.camp.details, pitches, view.tray, [])),
+    [engine, view.camp.details, pitches, view.tray],
   );
-  const saved = useMemo(() => evaluatePlacements(prepared, state.placements), [prepared, state.placements]);
-  const result = useMemo(() => (preview ? evaluatePlacements(prepared, preview) : saved), [prepared, preview, saved]);
-  const models = useMemo(() => new Map(pitches.map((pitch) => [pitch.id, buildOrNull(pitch.spec)])), [pitches]);
+  const shown = preview ?? state.placements;
+  const result = useMemo(
+    () => (engine && prepared ? engine.evaluatePlacements(prepared, shown) : start.result),
+    [engine, prepared, shown, start.result],
+  );
+  const models = useMemo(
+    () =>
+      new Map(pitches.map((pitch) => [pitch.id, engine ? buildOrNull(engine, pitch.spec) : start.models[pitch.id]])),
+    [engine, pitches, start.models],
+  );
+  // Without the calculation, the server's numbers stand for the server's plan and for no other.
+  const isBehind = !engine && state.placements !== view.placements;
+  const waiting = useMemo(
+    () => (isBehind ? new Set(pitches.map((pitch) => pitch.id)) : pitched.waiting),
+    [isBehind, pitches, pitched.waiting],
+  );
   const campInput = useMemo(
     () => toCampInput(view.camp.details, pitches, view.tray, state.placements),
     [view.camp.details, pitches, view.tray, state.placements],
@@ -117,6 +135,7 @@ export function useStakingBoard(view: CampPlanView, userId: string) {
     state,
     dispatch,
     calc,
+    engine,
     pitches,
     waiting,
     models,

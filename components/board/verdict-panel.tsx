@@ -14,8 +14,9 @@ export function VerdictPanel() {
   const words = isWaiting ? "working out…" : verdictHeadline(shelter, preferences.speedUnit);
   const tone = isWaiting ? "text-pencil" : VERDICT_TONES[shelter.verdict];
   const weakest = shelter.tieOuts.find((one) => one.tieOutId === shelter.weakestTieOutId);
-  const worst = result.shelters.find((one) => one.pitchId === result.weakest?.pitchId);
-  const isWorseElsewhere = worst && worst.pitchId !== shelter.pitchId && worst.verdict !== "holds";
+  // The shelter that gives way first in a rising wind, which need not be the one with the smallest margin.
+  const first = result.shelters.find((one) => one.holdsToGustMs !== null && one.holdsToGustMs === result.holdsToGustMs);
+  const worst = first && first.pitchId !== shelter.pitchId && first.verdict !== "holds" ? first : null;
   return (
     <section aria-labelledby="verdict-heading">
       <p className="text-13 text-pencil">{isPreview ? "This shelter would then" : "This shelter"}</p>
@@ -36,12 +37,12 @@ export function VerdictPanel() {
           </>
         )}
       </p>
-      {isWorseElsewhere && (
+      {worst && (
         <p className="mt-1 text-15">
           Worse at this camp: {worst.name}, {verdictHeadline(worst, preferences.speedUnit)}.
         </p>
       )}
-      {!isWorseElsewhere && result.holdsToGustMs !== null && result.shelters.length > 1 && (
+      {!worst && result.holdsToGustMs !== null && result.shelters.length > 1 && (
         <p className="mt-1 text-15 text-pencil">
           The whole camp holds to {gustWords(result.holdsToGustMs, preferences.speedUnit)}.
         </p>
