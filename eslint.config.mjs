@@ -81,7 +81,7 @@ const config = [
   forbid(["app/**/*.{ts,tsx}"], [DB]),
   forbid(["db/schema/**/*.ts"], [APP, SERVER, [["@/components/*"], "The schema knows nothing of the screen."]]),
   { files: ["**/*.mjs", "db/seed.ts", "db/migrate.ts", "tests/**"], rules: { "no-console": "off" } },
-  { ignores: [".next/**", "node_modules/**", "drizzle/**", "coverage/**", "data/**", "next-env.d.ts"] },
+  { ignores: [".next/**", ".next-*/**", "node_modules/**", "drizzle/**", "coverage/**", "data/**", "next-env.d.ts"] },
 ];
 
 export default config;
