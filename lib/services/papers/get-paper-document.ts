@@ -18,6 +18,7 @@ import { getPreferences } from "../preferences/get-preferences";
 import { toTripView } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
 import { listFallbacks } from "./fallbacks";
+import { markHandedOut } from "./mark-handed-out";
 
 const getPaperDocumentInput = z.object({ tripId: idSchema, paper: paperSchema });
 
@@ -91,6 +92,7 @@ export async function getPaperDocument({
 }): Promise<PaperDocument> {
   const { tripId, paper } = parseInput(getPaperDocumentInput, input);
   const standing = await requirePermission(ctx, tripId, "paper.own");
+  await markHandedOut(ctx, tripId);
   const db = getDb();
   const state = await loadTripState(db, tripId);
   const { speedUnit } = await getPreferences({ ctx });

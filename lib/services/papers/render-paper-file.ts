@@ -1,5 +1,5 @@
 import type { z } from "zod";
-import type { paperSizeSchema} from "@/lib/domain/paper/schema";
+import type { paperSizeSchema } from "@/lib/domain/paper/schema";
 import { type Paper } from "@/lib/domain/paper/schema";
 import type { PaperDocument } from "@/lib/domain/views";
 import type { Context } from "@/lib/services/context/context";

@@ -1,4 +1,4 @@
-import { and, desc, eq, sql } from "drizzle-orm";
+import { and, desc, eq, gte, ne, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { changeLog, trip } from "@/db/schema";
 import { newId } from "@/lib/domain/ids";
@@ -37,7 +37,7 @@ export function toTripView(row: TripRow, role: Role, nights: number): TripView {
 
 interface Change {
   readonly tripId: string;
-  readonly action: "create" | "update" | "delete" | "copy" | "reorder";
+  readonly action: "create" | "update" | "delete" | "copy" | "reorder" | "hand-out";
   readonly entity: "trip" | "camp" | "shelter" | "pitch" | "sleepers" | "kit" | "plan" | "pack" | "person" | "post";
   readonly entityId: string;
   /** For people: "Otter Flat: ground and wind". */
@@ -46,7 +46,23 @@ interface Change {
   readonly isPrinted: boolean;
 }
 
-/** Says who changed what, in the transaction of the change, and counts the version of the papers up. */
+/** Whether somebody was shown or sent papers as they are now. Until then a change makes no new version of them. */
+export async function isHandedOut(reader: Reader, tripId: string): Promise<boolean> {
+  const [row] = await reader
+    .select({ id: changeLog.id })
+    .from(changeLog)
+    .innerJoin(trip, eq(trip.id, changeLog.tripId))
+    .where(
+      and(eq(changeLog.tripId, tripId), eq(changeLog.action, "hand-out"), gte(changeLog.createdAt, trip.updatedAt)),
+    )
+    .limit(1);
+  return row !== undefined;
+}
+
+/**
+ * Says who changed what, in the transaction of the change. When it stands on papers that somebody has, their version
+ * counts up: two papers of one version never differ.
+ */
 export async function recordChange(tx: Transaction, ctx: Context, change: Change): Promise<void> {
   const { isPrinted, ...row } = change;
   const createdAt = new Date();
@@ -54,9 +70,10 @@ export async function recordChange(tx: Transaction, ctx: Context, change: Change
     .insert(changeLog)
     .values({ id: newId(), ...row, userId: ctx.actor.userId, userName: ctx.actor.name, createdAt });
   if (!isPrinted) return;
+  const step = (await isHandedOut(tx, change.tripId)) ? 1 : 0;
   await tx
     .update(trip)
-    .set({ paperVersion: sql`${trip.paperVersion} + 1`, updatedAt: createdAt })
+    .set({ paperVersion: sql`${trip.paperVersion} + ${step}`, updatedAt: createdAt })
     .where(eq(trip.id, change.tripId));
 }
 
@@ -68,7 +85,13 @@ export async function refuseStale(
   const [last] = await tx
     .select({ by: changeLog.userName, at: changeLog.createdAt })
     .from(changeLog)
-    .where(and(eq(changeLog.tripId, stale.trip.id), eq(changeLog.entityId, stale.entityId)))
+    .where(
+      and(
+        eq(changeLog.tripId, stale.trip.id),
+        eq(changeLog.entityId, stale.entityId),
+        ne(changeLog.action, "hand-out"),
+      ),
+    )
     .orderBy(desc(changeLog.createdAt))
     .limit(1);
   const when = last ? ` on ${formatInstant(last.at, stale.trip.timeZone)}` : "";
