@@ -18,8 +18,8 @@ export interface GroupedProblem {
   readonly emptyValues: readonly number[];
   /** Whole-number costs of using one of a kind, most important first; they decide among equals. Default none. */
   readonly costs?: readonly (readonly number[])[];
-  /** The kind each row has now; the last tie-break is to change as few rows as can be. */
-  readonly present?: readonly (number | null)[];
+  /** The kind each row has now, −1 = none of these; the last tie-break is to change as few rows as can be. */
+  readonly present?: readonly number[];
 }
 
 /** The kind given to each row; null = the row stays empty. */
@@ -191,12 +191,9 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
   const costCount = (problem.costs?.[0]?.length ?? 0) + 1;
   const noCosts: readonly number[] = new Array<number>(costCount).fill(0);
   const costOf = (kind: number): readonly number[] => problem.costs?.[kind] ?? noCosts;
-  const presentOf = Int32Array.from(problem.values, (_, row) => {
-    const kind = problem.present?.[row];
-    return kind === undefined ? -1 : (kind ?? kinds);
-  });
+  const presentOf = problem.present ?? [];
   /** 1 when the row would get something else than it has, else 0. */
-  const changeOf = (row: number, kind: number): number => (at(presentOf, row) === kind ? 0 : 1);
+  const changeOf = (row: number, kind: number): number => (presentOf[row] === kind ? 0 : 1);
 
   const levels = levelsOf(problem);
   const levelOf = new Map<number, number>();

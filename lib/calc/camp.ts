@@ -1,7 +1,8 @@
 import { demandAt } from "./analyse-shelter";
 import { prepareCamp, type PreparedCamp, type PreparedShelter, type PreparedTieOut } from "./prepare-camp";
 import { retensionSentence } from "./retension";
-import { findHoldsTo, setAnchor, spotKey, strengthKey, type SetAnchor } from "./tie-out-strength";
+import { Stock } from "./stock";
+import { findHoldsTo, NOTHING_HOLDS, setAnchor, spotKey, strengthKey, type SetAnchor } from "./tie-out-strength";
 import type { CampInput, CampResult, Gap, Placement, ShelterResult, TieOutResult } from "./types";
 import { chanceHolds, verdictOf, worstVerdict } from "./verdict";
 
@@ -68,7 +69,7 @@ export function evaluateTieOut(
 
   const capacity = anchor.capacityAt(tieOut.lineAngleDeg);
   if (capacity.status === "unknown") return { ...unknown(capacity.gaps), capacity };
-  const evening = capacity.status === "ok" ? capacity : { medianN: 0, scatter: 0, dependableN: 0 };
+  const evening = capacity.status === "ok" ? capacity : NOTHING_HOLDS;
   const morning =
     prepared.nightCycles === null
       ? null
@@ -158,17 +159,6 @@ function evaluateShelter(
   return result;
 }
 
-/** How many of each anchor are still in the tray; never below zero. */
-function countLeft(prepared: PreparedCamp, placements: readonly Placement[]): Record<string, number> {
-  const left = new Map(prepared.input.tray.map((anchor) => [anchor.id, anchor.count]));
-  const take = (id: string) => left.set(id, Math.max(0, (left.get(id) ?? 0) - 1));
-  for (const placement of placements) {
-    if (left.has(placement.anchorId)) take(placement.anchorId);
-    if (placement.tandem && left.has(placement.tandem.anchorId)) take(placement.tandem.anchorId);
-  }
-  return Object.fromEntries(left);
-}
-
 /**
  * Every margin of a camp for these placements. Of a prepared camp only the tie-outs whose placement is new are
  * computed; results of the others are the same objects as before.
@@ -192,7 +182,7 @@ export function evaluatePlacements(prepared: PreparedCamp, placements: readonly 
     isHoldsToOpen: shelters.some((shelter) => shelter.holdsToGustMs === holds && shelter.isHoldsToOpen === true),
     weakest: weakest ? { pitchId: weakest.pitchId, tieOutId: weakest.tieOutId } : null,
     shelters,
-    left: countLeft(prepared, placements),
+    left: new Stock(prepared.input.tray, placements).toRecord(),
     retension: retensionSentence(prepared.input.strongWindHours, shelters),
   };
 }

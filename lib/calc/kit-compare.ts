@@ -1,8 +1,7 @@
 import { marginOf } from "./camp";
 import { proposePreparedPlan, type PlanOptions } from "./plan";
 import { prepareCamp } from "./prepare-camp";
-import { strengthOf } from "./rig-anchor";
-import { spotKey } from "./tie-out-strength";
+import { readPlan } from "./rig-anchor";
 import type { AnchorSpec, CampInput } from "./types";
 
 /** A kind of anchor that a kit can be made of. */
@@ -51,30 +50,21 @@ export function compareKits(
   );
   const compared = kits.map((counts): KitComparison => {
     const weakestByCamp = prepared.map((camp) => {
-      const tray = camp.input.tray.map((anchor, index) => ({ ...anchor, count: counts[index] ?? 0 }));
+      if (!camp.isComplete) return null;
+      const tray = choices.map((choice, index) => ({ ...choice, count: counts[index] ?? 0, found: false }));
       // Only the counts differ between kits, so everything that was computed for the camp stays good.
       const { placements } = proposePreparedPlan({ ...camp, input: { ...camp.input, tray } }, options, []);
-      const placementAt = new Map(placements.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
-      let weakest: number | null = Infinity;
-      for (const shelter of camp.shelters) {
-        for (const tieOut of shelter.tieOuts) {
-          if (weakest === null || tieOut.demandN === null) {
-            weakest = null;
-            continue;
-          }
-          const placement = placementAt.get(spotKey(shelter.pitch.pitchId, tieOut.tieOut.id));
-          const strength = placement ? strengthOf(camp, shelter, tieOut, placement) : null;
-          weakest = Math.min(weakest, strength ? marginOf(strength.dependableN, tieOut.demandN) : 0);
-        }
-      }
-      return weakest === Infinity ? null : weakest;
+      const margins = readPlan(camp, placements).map(({ tieOut, strength }) =>
+        strength ? marginOf(strength.dependableN, tieOut.demandN) : 0,
+      );
+      return Math.min(...margins);
     });
     const known = weakestByCamp.filter((margin) => margin !== null);
     return {
       counts,
-      massKg: counts.reduce((sum, count, index) => sum + count * (choices[index]?.massKg ?? 0), 0),
+      massKg: choices.reduce((sum, choice, index) => sum + choice.massKg * (counts[index] ?? 0), 0),
       weakestByCamp,
-      weakest: known.length > 0 && known.length === weakestByCamp.length ? Math.min(...known) : null,
+      weakest: known.length === camps.length && camps.length > 0 ? Math.min(...known) : null,
     };
   });
   return compared.sort((a, b) => (b.weakest ?? -1) - (a.weakest ?? -1) || a.massKg - b.massKg);

@@ -1,9 +1,8 @@
-import { evaluateTieOut } from "./camp";
-import { prepareCamp, type PreparedCamp, type PreparedShelter, type PreparedTieOut } from "./prepare-camp";
-import { isDriven, rigAtBestLean, strengthOf } from "./rig-anchor";
+import { evaluateTieOut, marginOf } from "./camp";
+import { isKnownTieOut, prepareCamp, type KnownTieOut, type PreparedCamp, type PreparedShelter } from "./prepare-camp";
+import { isDriven, readPlan, rigAtBestLean } from "./rig-anchor";
 import { spotKey } from "./tie-out-strength";
-import type { CampInput, Mend, PitchedShelter, Placement, TieOutResult } from "./types";
-import { marginOf } from "./camp";
+import type { CampInput, Mend, PitchedShelter, Placement, TieOutResult, TrayAnchor } from "./types";
 
 /** A tie-out of one pitched shelter. */
 export interface TieOutSpot {
@@ -15,8 +14,10 @@ export interface TieOutSpot {
 export interface MendCase {
   readonly prepared: PreparedCamp;
   readonly shelter: PreparedShelter;
-  readonly tieOut: PreparedTieOut;
+  readonly tieOut: KnownTieOut;
   readonly present: Placement | null;
+  /** The anchor that is there; null when none is, or one that left the tray. */
+  readonly anchor: TrayAnchor | null;
   readonly now: TieOutResult;
 }
 
@@ -41,10 +42,11 @@ const LEAST_GAIN = 0.02;
 export function openCase(prepared: PreparedCamp, spot: TieOutSpot): MendCase | null {
   const shelter = prepared.shelters.find((one) => one.pitch.pitchId === spot.pitchId);
   const tieOut = shelter?.tieOuts.find((one) => one.tieOut.id === spot.tieOutId);
-  if (!shelter || !tieOut || tieOut.demandN === null || tieOut.gaps.length > 0) return null;
+  if (!shelter || !tieOut || !isKnownTieOut(tieOut)) return null;
   const key = spotKey(spot.pitchId, spot.tieOutId);
   const present = prepared.input.placements.find((one) => spotKey(one.pitchId, one.tieOutId) === key) ?? null;
-  return { prepared, shelter, tieOut, present, now: evaluateTieOut(prepared, shelter, tieOut, present) };
+  const anchor = (present && prepared.anchors.get(present.anchorId)) ?? null;
+  return { prepared, shelter, tieOut, present, anchor, now: evaluateTieOut(prepared, shelter, tieOut, present) };
 }
 
 /** A mend as far as it is known before it is measured. */
@@ -56,43 +58,33 @@ export function measureMend(one: MendCase, draft: MendDraft, placement: Placemen
   return asMend(one.now, draft, result);
 }
 
-/** `result` is the tie-out with the mend done; null when that gains nothing by evening or by morning. */
+/** `result` is the tie-out with the mend done; null when that gains nothing by evening or, for shock cord, by morning. */
 export function asMend(now: TieOutResult, draft: MendDraft, result: TieOutResult): Mend | null {
-  if (result.margin === null || result.holdsToGustMs === null) return null;
-  const isStronger = result.margin > (now.margin ?? 0) * (1 + LEAST_GAIN);
-  const isLasting =
-    draft.kind === "shock-cord" && (result.morningMargin ?? 0) > (now.morningMargin ?? 0) * (1 + LEAST_GAIN);
-  if (!isStronger && !isLasting) return null;
-  return { ...draft, margin: result.margin, holdsToGustMs: result.holdsToGustMs };
+  const { margin, holdsToGustMs } = result;
+  if (margin === null || holdsToGustMs === null) return null;
+  const gains = (before: number | null, after: number | null) => (after ?? 0) > (before ?? 0) * (1 + LEAST_GAIN);
+  const isGain =
+    gains(now.margin, margin) || (draft.kind === "shock-cord" && gains(now.morningMargin, result.morningMargin));
+  return isGain ? { ...draft, margin, holdsToGustMs } : null;
 }
 
 /** Mends that reach margin 1 first, in order of work; then the others, the largest margin first. */
 export function rankMends(mends: readonly Mend[]): Mend[] {
   const work = (mend: Mend) => ORDER_OF_WORK.indexOf(mend.kind);
-  const isEnough = (mend: Mend) => mend.margin >= 1;
-  return [...mends].sort((a, b) => {
-    if (isEnough(a) !== isEnough(b)) return isEnough(a) ? -1 : 1;
-    if (isEnough(a) && work(a) !== work(b)) return work(a) - work(b);
-    return b.margin - a.margin || work(a) - work(b) || (a.title < b.title ? -1 : 1);
-  });
+  const enough = mends.filter((mend) => mend.margin >= 1).sort((a, b) => work(a) - work(b) || b.margin - a.margin);
+  const rest = mends.filter((mend) => mend.margin < 1).sort((a, b) => b.margin - a.margin || work(a) - work(b));
+  return [...enough, ...rest];
 }
 
-/** The smallest margin of a shelter with these placements; null when none is known. */
-function weakestMargin(
-  prepared: PreparedCamp,
-  shelter: PreparedShelter,
-  placements: readonly Placement[],
-): number | null {
-  const placementAt = new Map(placements.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
-  let weakest: number | null = null;
-  for (const tieOut of shelter.tieOuts) {
-    const placement = placementAt.get(spotKey(shelter.pitch.pitchId, tieOut.tieOut.id));
-    const strength = placement ? strengthOf(prepared, shelter, tieOut, placement) : null;
-    if (!strength || tieOut.demandN === null) continue;
-    const margin = marginOf(strength.dependableN, tieOut.demandN);
-    if (weakest === null || margin < weakest) weakest = margin;
-  }
-  return weakest;
+/** The smallest margin of a shelter with these placements; Infinity when none is known. */
+function weakestMargin(prepared: PreparedCamp, pitchId: string, placements: readonly Placement[]): number {
+  return readPlan(prepared, placements)
+    .filter(({ shelter }) => shelter.pitch.pitchId === pitchId)
+    .reduce(
+      (weakest, { tieOut, strength }) =>
+        strength ? Math.min(weakest, marginOf(strength.dependableN, tieOut.demandN)) : weakest,
+      Infinity,
+    );
 }
 
 /**
@@ -108,23 +100,26 @@ export function measurePitchChange(one: MendCase, pitch: PitchedShelter, draft: 
   const after = openCase(prepareCamp(changed), { pitchId: pitch.pitchId, tieOutId: one.tieOut.tieOut.id });
   if (!after || (one.shelter.standing === true && after.shelter.standing !== true)) return null;
   const own = input.placements.filter((placement) => placement.pitchId === pitch.pitchId);
-  const placements = own.map((placement) => leanAnew(after, placement));
-  const before = weakestMargin(one.prepared, one.shelter, own);
-  const then = weakestMargin(after.prepared, after.shelter, placements);
-  if (before !== null && (then === null || then < before * (1 - LEAST_GAIN / 2))) return null;
-  const placement = placements.find((other) => other.tieOutId === one.tieOut.tieOut.id);
-  if (!placement) return null;
+  const moved = leanAnew(after);
+  const movedAt = new Map(moved.map((placement) => [placement.tieOutId, placement]));
+  const placements = own.map((placement) => movedAt.get(placement.tieOutId) ?? placement);
+  const before = weakestMargin(one.prepared, pitch.pitchId, own);
+  const then = weakestMargin(after.prepared, pitch.pitchId, placements);
+  if (then < before * (1 - LEAST_GAIN / 2)) return null;
+  const placement = placements.find((other) => other.tieOutId === one.tieOut.tieOut.id) ?? null;
   const result = evaluateTieOut(after.prepared, after.shelter, after.tieOut, placement);
-  const moved = placements.filter((other, index) => other !== own[index]);
   return asMend(one.now, { ...draft, placements: moved }, result);
 }
 
-function leanAnew(after: MendCase, placement: Placement): Placement {
-  const tieOut = after.shelter.tieOuts.find((one) => one.tieOut.id === placement.tieOutId);
-  const anchor = after.prepared.anchors.get(placement.anchorId);
-  if (placement.pinned || placement.tandem || !tieOut || !anchor || !isDriven(anchor.spec)) return placement;
-  const rigged = rigAtBestLean(after.prepared, after.shelter, tieOut, anchor, placement);
-  if (!rigged) return placement;
-  const held = strengthOf(after.prepared, after.shelter, tieOut, placement)?.dependableN ?? 0;
-  return rigged.strength.dependableN > held * (1 + LEAST_GAIN) ? rigged.placement : placement;
+/** The single stakes of the shelter that another lean now makes better; pins stay. */
+function leanAnew({ prepared, shelter }: MendCase): Placement[] {
+  return readPlan(prepared, prepared.input.placements).flatMap((planned) => {
+    const { placement, tieOut, strength } = planned;
+    const anchor = placement && prepared.anchors.get(placement.anchorId);
+    if (planned.shelter !== shelter || !anchor || !isDriven(anchor.spec) || placement.pinned || placement.tandem)
+      return [];
+    const rigged = rigAtBestLean(prepared, shelter, tieOut, anchor, placement);
+    if (!rigged || rigged.strength.dependableN <= (strength?.dependableN ?? 0) * (1 + LEAST_GAIN)) return [];
+    return [rigged.placement];
+  });
 }

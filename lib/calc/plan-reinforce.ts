@@ -1,142 +1,126 @@
 import { marginOf } from "./camp";
-import type { PreparedCamp, PreparedShelter, PreparedTieOut } from "./prepare-camp";
-import { isDriven, rigAtBestLean, strengthOf, type Rigged } from "./rig-anchor";
-import { inSentence, twoDigits } from "./wording";
+import type { KnownTieOut, PreparedCamp, PreparedShelter } from "./prepare-camp";
+import { isDriven, rigAtBestLean, stakeLengthM, strengthOf, type Rigged } from "./rig-anchor";
+import type { Stock } from "./stock";
 import type { AnchorSpec, Placement, TrayAnchor } from "./types";
+import { inSentence, twoDigits } from "./wording";
 
 /** One tie-out that the proposal is free to fill. */
 export interface PlanRow {
   readonly shelter: PreparedShelter;
-  readonly tieOut: PreparedTieOut;
+  readonly tieOut: KnownTieOut;
   readonly present: Placement | null;
 }
 
-/** Rows that have something but would not hold, most important first. */
-function weakRows(rows: readonly PlanRow[], rigged: readonly (Rigged | null)[]): number[] {
-  return rows
-    .map((row, index) => ({ row, index, one: rigged[index] }))
-    .filter(({ row, one }) => one && marginOf(one.strength.dependableN, row.tieOut.demandN ?? 0) < 1)
-    .sort((a, b) => (b.row.tieOut.priority ?? 0) - (a.row.tieOut.priority ?? 0) || a.index - b.index)
-    .map(({ index }) => index);
+/** What the proposal puts where; a row that is not in it stays empty. */
+export type Filled = ReadonlyMap<PlanRow, Rigged>;
+
+export interface PlanStep {
+  readonly text: string;
 }
 
 /** A rock that one person carries a few steps, kg (judgement). */
 export const USUAL_ROCK_KG = 10;
 
+const marginAt = (row: PlanRow, { strength }: Rigged): number => marginOf(strength.dependableN, row.tieOut.demandN);
+
+/** Rows that have something but would not hold, most important first. */
+function weakRows(filled: Filled): [PlanRow, Rigged][] {
+  return [...filled]
+    .filter(([row, rigged]) => marginAt(row, rigged) < 1)
+    .sort(([a], [b]) => b.tieOut.priority - a.tieOut.priority);
+}
+
 /**
- * A rock on the lip of each driven anchor that would not hold without, in order of priority, where it helps.
- * `rigged` has one entry per row; a new array comes back and one sentence per rock is added to `steps`.
+ * A rock on the lip of each driven anchor that would not hold without, in order of priority, where it helps. Adds one
+ * sentence per rock to `steps`.
  */
-export function backWithRocks(
-  prepared: PreparedCamp,
-  rows: readonly PlanRow[],
-  rigged: readonly (Rigged | null)[],
-  steps: { text: string }[],
-): (Rigged | null)[] {
-  const next = [...rigged];
-  for (const index of weakRows(rows, rigged)) {
-    const row = rows[index];
-    const one = next[index];
-    const anchor = one && prepared.anchors.get(one.placement.anchorId);
-    if (!row || !one || !anchor || !isDriven(anchor.spec) || one.placement.rockKg >= USUAL_ROCK_KG) continue;
-    const better = rigAtBestLean(prepared, row.shelter, row.tieOut, anchor, {
-      ...one.placement,
-      rockKg: USUAL_ROCK_KG,
-    });
-    if (!better || better.strength.dependableN <= one.strength.dependableN) continue;
-    next[index] = better;
-    steps.push({
-      text: `Backed ${nameRow(row)} with a rock of ${USUAL_ROCK_KG}\u2009kg on the lip: ${describeGain(row, one, better)}.`,
-    });
+export function backWithRocks(prepared: PreparedCamp, filled: Filled, steps: PlanStep[]): Filled {
+  const next = new Map(filled);
+  for (const [row, rigged] of weakRows(filled)) {
+    const { anchor, placement, strength } = rigged;
+    if (!isDriven(anchor.spec) || placement.rockKg >= USUAL_ROCK_KG) continue;
+    const better = rigAtBestLean(prepared, row.shelter, row.tieOut, anchor, { ...placement, rockKg: USUAL_ROCK_KG });
+    if (!better || better.strength.dependableN <= strength.dependableN) continue;
+    next.set(row, better);
+    const gain = describeGain(row, rigged, better);
+    steps.push({ text: `Backed ${nameRow(row)} with a rock of ${USUAL_ROCK_KG}\u2009kg on the lip: ${gain}.` });
   }
   return next;
 }
 
-/** Distance in line that two stakes need, m: half of what the longer has in the ground, to the next 5 cm. */
+/**
+ * Distance in line that two driven anchors need, m: half of what the longer has in the ground, to the next 5 cm, at least
+ * 10 cm.
+ */
 export function tandemSpacingM(front: AnchorSpec, second: AnchorSpec): number {
-  const lengthOf = (spec: AnchorSpec) => (spec.class === "stake" ? spec.lengthM : 0);
-  return Math.max(0.1, Math.ceil(Math.max(lengthOf(front), lengthOf(second)) * 10) / 20);
+  return Math.max(0.1, Math.ceil(Math.max(stakeLengthM(front), stakeLengthM(second)) * 10 - 1e-9) / 20);
 }
 
 /**
- * Two driven anchors in line, each at the best lean of the front one: the order that holds more, among equals the longer in
- * front. Null when it can't be.
+ * Two driven anchors in line at the best lean of the front one: the order that holds more, among equals the longer in
+ * front. `present` is what is there now, `second` what is added. Null when it can't be.
  */
 export function rigInLine(
   prepared: PreparedCamp,
   shelter: PreparedShelter,
-  tieOut: PreparedTieOut,
-  present: Placement,
+  tieOut: KnownTieOut,
+  present: { readonly anchor: TrayAnchor; readonly placement: Placement },
   second: TrayAnchor,
 ): Rigged | null {
-  const first = prepared.anchors.get(present.anchorId);
-  if (!first || !isDriven(first.spec) || !isDriven(second.spec) || present.tandem) return null;
-  const lengthOf = (anchor: TrayAnchor) => (anchor.spec.class === "stake" ? anchor.spec.lengthM : 0);
-  const longerFirst = lengthOf(second) > lengthOf(first) ? [second, first] : [first, second];
+  const first = present.anchor;
+  if (!isDriven(first.spec) || !isDriven(second.spec) || present.placement.tandem) return null;
   const spacingM = tandemSpacingM(first.spec, second.spec);
+  const orders = [
+    { front: first, rear: second },
+    { front: second, rear: first },
+  ].sort((a, b) => stakeLengthM(b.front.spec) - stakeLengthM(a.front.spec));
   let best: Rigged | null = null;
-  for (const [front, rear] of [longerFirst, [...longerFirst].reverse()]) {
-    const base = front && rigAtBestLean(prepared, shelter, tieOut, front, present);
-    if (!base || !rear) continue;
+  for (const { front, rear } of orders) {
+    const base = rigAtBestLean(prepared, shelter, tieOut, front, present.placement);
+    if (!base) continue;
     const placement: Placement = { ...base.placement, tandem: { anchorId: rear.id, spacingM } };
     const strength = strengthOf(prepared, shelter, tieOut, placement);
-    if (!strength || strength.dependableN <= (best?.strength.dependableN ?? 0)) continue;
-    best = { placement, strength };
+    if (!strength || (best && strength.dependableN <= best.strength.dependableN)) continue;
+    best = { anchor: front, placement, strength };
   }
   return best;
 }
 
 /**
- * A second stake in line, from what is `left` (counted down), at each driven anchor that would not hold alone, in order of
- * priority: the lightest that makes it hold, else the strongest.
+ * A second stake in line, from what is left in `stock`, at each driven anchor that would not hold alone, in order of
+ * priority: the lightest that makes it hold, else the strongest. Adds one sentence per pair to `steps`.
  */
 export function doubleUp(
   prepared: PreparedCamp,
-  rows: readonly PlanRow[],
-  rigged: readonly (Rigged | null)[],
+  filled: Filled,
   kinds: readonly TrayAnchor[],
-  left: Map<string, number>,
-  steps: { text: string }[],
-): (Rigged | null)[] {
-  const next = [...rigged];
-  for (const index of weakRows(rows, rigged)) {
-    const row = rows[index];
-    const one = next[index];
-    if (!row || !one) continue;
-    let best: { rigged: Rigged; second: TrayAnchor } | null = null;
-    for (const second of kinds) {
-      if ((left.get(second.id) ?? 0) <= 0) continue;
-      const pair = rigInLine(prepared, row.shelter, row.tieOut, one.placement, second);
-      if (!pair || pair.strength.dependableN <= one.strength.dependableN) continue;
-      if (!best || isBetterPair(row, pair, second, best)) best = { rigged: pair, second };
-    }
+  stock: Stock,
+  steps: PlanStep[],
+): Filled {
+  const next = new Map(filled);
+  for (const [row, rigged] of weakRows(filled)) {
+    const pairs = kinds
+      .filter((second) => stock.left(second.id) > 0)
+      .flatMap((second) => {
+        const pair = rigInLine(prepared, row.shelter, row.tieOut, rigged, second);
+        return pair && pair.strength.dependableN > rigged.strength.dependableN ? [{ pair, second }] : [];
+      });
+    const holding = pairs
+      .filter(({ pair }) => marginAt(row, pair) >= 1)
+      .sort((a, b) => a.second.massKg - b.second.massKg);
+    const strongest = [...pairs].sort((a, b) => b.pair.strength.dependableN - a.pair.strength.dependableN);
+    const [best] = [...holding, ...strongest];
     if (!best) continue;
-    left.set(best.second.id, (left.get(best.second.id) ?? 0) - 1);
-    next[index] = best.rigged;
-    const gain = describeGain(row, one, best.rigged);
+    stock.take(best.second.id);
+    next.set(row, best.pair);
+    const gain = describeGain(row, rigged, best.pair);
     steps.push({ text: `Doubled ${nameRow(row)} (${inSentence(best.second.name)}, in line): ${gain}.` });
   }
   return next;
 }
 
-/** The lighter of two that hold, else the stronger. */
-function isBetterPair(
-  row: PlanRow,
-  pair: Rigged,
-  second: TrayAnchor,
-  best: { rigged: Rigged; second: TrayAnchor },
-): boolean {
-  const demand = row.tieOut.demandN ?? 0;
-  const holds = pair.strength.dependableN >= demand;
-  const bestHolds = best.rigged.strength.dependableN >= demand;
-  if (holds && bestHolds && second.massKg !== best.second.massKg) return second.massKg < best.second.massKg;
-  return pair.strength.dependableN > best.rigged.strength.dependableN;
-}
-
 const nameRow = (row: PlanRow): string => `tie-out ${row.tieOut.tieOut.number} of ${row.shelter.pitch.name}`;
-function describeGain(row: PlanRow, before: Rigged, after: Rigged): string {
-  const demand = row.tieOut.demandN ?? 0;
-  const from = marginOf(before.strength.dependableN, demand);
-  const to = marginOf(after.strength.dependableN, demand);
-  return `margin ${twoDigits(from)} to ${twoDigits(to)}`;
-}
+
+const describeGain = (row: PlanRow, before: Rigged, after: Rigged): string =>
+  `margin ${twoDigits(marginAt(row, before))} to ${twoDigits(marginAt(row, after))}`;

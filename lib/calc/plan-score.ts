@@ -1,7 +1,7 @@
 import { marginOf } from "./camp";
 import type { PreparedCamp } from "./prepare-camp";
-import { strengthOf } from "./rig-anchor";
-import { spotKey } from "./tie-out-strength";
+import { readPlan } from "./rig-anchor";
+import { Stock } from "./stock";
 import type { Placement } from "./types";
 
 /** A margin above this is as good as any (judgement): better anchors are then free for others. */
@@ -23,6 +23,9 @@ export function weightedMargin(dependableN: number | null, weightN: number, larg
 export const largestWeight = (prepared: PreparedCamp): number =>
   Math.max(0, ...prepared.shelters.flatMap((shelter) => shelter.tieOuts.map((tieOut) => tieOut.weightN ?? 0)));
 
+/** Mass in whole tenths of a gram: finer than any scale in a pack, and exact to add. */
+export const massUnits = (massKg: number): number => Math.round(massKg * 10_000);
+
 export interface PlanScore {
   /** Weighted margins from the worst on. */
   readonly values: readonly number[];
@@ -33,28 +36,18 @@ export interface PlanScore {
 /** How good a plan is, by the measure of the proposal. */
 export function scorePlan(prepared: PreparedCamp, placements: readonly Placement[]): PlanScore {
   const largest = largestWeight(prepared);
-  const placementAt = new Map(placements.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
-  const values: number[] = [];
-  let mass = 0;
-  for (const shelter of prepared.shelters) {
-    for (const tieOut of shelter.tieOuts) {
-      if (tieOut.weightN === null) continue;
-      const placement = placementAt.get(spotKey(shelter.pitch.pitchId, tieOut.tieOut.id));
-      const strength = placement ? strengthOf(prepared, shelter, tieOut, placement) : null;
-      values.push(weightedMargin(strength?.dependableN ?? null, tieOut.weightN, largest));
-      for (const id of placement ? [placement.anchorId, placement.tandem?.anchorId] : []) {
-        mass += Math.round((prepared.anchors.get(id ?? "")?.massKg ?? 0) * 10_000);
-      }
-    }
-  }
+  const values = readPlan(prepared, placements).map(({ tieOut, strength }) =>
+    weightedMargin(strength && strength.dependableN, tieOut.weightN, largest),
+  );
+  const { tray } = prepared.input;
+  const stock = new Stock(tray, placements);
+  const mass = tray.reduce((sum, { id, count, massKg }) => sum + (count - stock.left(id)) * massUnits(massKg), 0);
   return { values: values.sort((a, b) => a - b), mass };
 }
 
-/** Lexicographic in the weighted margins, worst first, then lighter. */
+/** Lexicographic in the weighted margins, worst first, then lighter. Both of the same camp. */
 export function isBetter(a: PlanScore, b: PlanScore): boolean {
-  for (let i = 0; i < a.values.length; i++) {
-    const difference = (a.values[i] ?? 0) - (b.values[i] ?? 0);
-    if (Math.abs(difference) > MARGIN_STEP / 2) return difference > 0;
-  }
-  return a.mass < b.mass;
+  const differences = a.values.map((value, index) => value - (b.values[index] ?? value));
+  const first = differences.find((difference) => Math.abs(difference) > MARGIN_STEP / 2);
+  return first === undefined ? a.mass < b.mass : first > 0;
 }

@@ -1,12 +1,13 @@
 import { assignLexicographic } from "./assignment";
 import { marginOf } from "./camp";
-import { isBetter, largestWeight, scorePlan, weightedMargin } from "./plan-score";
-import { backWithRocks, doubleUp, type PlanRow } from "./plan-reinforce";
-import { findPlanProblems, prepareCamp, type PlanProblem, type PreparedCamp } from "./prepare-camp";
-import { rigAtBestLean, strengthOf, type Rigged } from "./rig-anchor";
+import { backWithRocks, doubleUp, type Filled, type PlanRow, type PlanStep } from "./plan-reinforce";
+import { isBetter, largestWeight, massUnits, scorePlan, weightedMargin } from "./plan-score";
+import { findPlanProblems, isKnownTieOut, prepareCamp, type PlanProblem, type PreparedCamp } from "./prepare-camp";
+import { readPlan, rigAtBestLean } from "./rig-anchor";
+import { Stock } from "./stock";
 import { spotKey } from "./tie-out-strength";
-import { twoDigits } from "./wording";
 import type { AnchorSpec, CampInput, Placement, TrayAnchor } from "./types";
+import { twoDigits } from "./wording";
 
 export interface PlanOptions {
   /** Use what is found at the camp (rocks, trees, sticks), not only what is carried. */
@@ -18,7 +19,7 @@ export interface PlanOptions {
 export interface PlanProposal {
   readonly placements: readonly Placement[];
   /** What was done, in order, one sentence each. */
-  readonly steps: readonly { readonly text: string }[];
+  readonly steps: readonly PlanStep[];
   /** What could not be planned, and why. */
   readonly problems: readonly PlanProblem[];
 }
@@ -55,93 +56,89 @@ export function proposePreparedPlan(
   options: PlanOptions,
   placements: readonly Placement[] = prepared.input.placements,
 ): PlanProposal {
-  const placementAt = new Map(placements.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
-  const rows: PlanRow[] = [];
-  const kept: Placement[] = [];
-  const problems: PlanProblem[] = [];
-  for (const shelter of prepared.shelters) {
-    for (const tieOut of shelter.tieOuts) {
-      const { pitchId } = shelter.pitch;
-      const present = placementAt.get(spotKey(pitchId, tieOut.tieOut.id)) ?? null;
-      const [gap] = tieOut.gaps;
-      if (gap) problems.push({ pitchId, tieOutId: tieOut.tieOut.id, message: gap.message });
-      if (present && (present.pinned || gap)) kept.push(present);
-      else if (!gap) rows.push({ shelter, tieOut, present });
-    }
-  }
-  // One order whatever the order of the input, so that equal camps get equal plans.
-  rows.sort(
-    (a, b) =>
-      compareText(a.shelter.pitch.pitchId, b.shelter.pitch.pitchId) ||
-      compareText(a.tieOut.tieOut.id, b.tieOut.tieOut.id),
-  );
-
-  const left = new Map(prepared.input.tray.map((anchor) => [anchor.id, anchor.count]));
-  const take = (id: string) => left.set(id, Math.max(0, (left.get(id) ?? 0) - 1));
-  for (const placement of kept) {
-    take(placement.anchorId);
-    if (placement.tandem) take(placement.tandem.anchorId);
-  }
-  const kinds = prepared.input.tray
-    .filter((anchor) => (options.allowFound || !anchor.found) && (left.get(anchor.id) ?? 0) > 0)
+  const { tray, rocksAvailable } = prepared.input;
+  const { rows, kept, problems } = sortOut(prepared, placements);
+  const stock = new Stock(tray, kept);
+  const kinds = tray
+    .filter((anchor) => (options.allowFound || !anchor.found) && stock.left(anchor.id) > 0)
     .sort((a, b) => compareText(a.id, b.id));
 
-  const rigged = assignRows(prepared, rows, kinds, left);
-  rigged.forEach((one) => one && take(one.placement.anchorId));
-  const steps: { text: string }[] = [];
-  const backed =
-    options.allowFound && prepared.input.rocksAvailable ? backWithRocks(prepared, rows, rigged, steps) : rigged;
-  const doubled = options.allowDoubling ? doubleUp(prepared, rows, backed, kinds, left, steps) : backed;
-
-  const proposal = [...kept, ...doubled.flatMap((one) => (one ? [one.placement] : []))];
-  const empty = rows.filter((_, index) => !doubled[index]);
-  for (const { shelter, tieOut } of empty) {
+  const steps: PlanStep[] = [];
+  const single = assignRows(prepared, rows, kinds, stock);
+  const backed = options.allowFound && rocksAvailable ? backWithRocks(prepared, single, steps) : single;
+  const filled = options.allowDoubling ? doubleUp(prepared, backed, kinds, stock, steps) : backed;
+  const proposal = [...kept, ...[...filled.values()].map((one) => one.placement)];
+  for (const { shelter, tieOut } of rows.filter((row) => !filled.has(row))) {
     problems.push({
       pitchId: shelter.pitch.pitchId,
       tieOutId: tieOut.tieOut.id,
       message: `Nothing is left in the tray that holds at tie-out ${tieOut.tieOut.number} of ${shelter.pitch.name}.`,
     });
   }
-  if (
-    isAllowed(prepared, placements, options) &&
-    !isBetter(scorePlan(prepared, proposal), scorePlan(prepared, placements))
-  ) {
+  const isWorthIt = isBetter(scorePlan(prepared, proposal), scorePlan(prepared, placements));
+  if (!isWorthIt && isAllowed(prepared, placements, options)) {
     return { placements, steps: [{ text: "The plan that is there can't be bettered with this tray." }], problems };
   }
-  return {
-    placements: proposal,
-    steps: [describePlan(prepared, proposal, rows.length - empty.length, rows.length, kept.length), ...steps],
-    problems,
-  };
+  const outcome = describePlan(prepared, proposal, filled.size, rows.length, kept.length);
+  return { placements: proposal, steps: [outcome, ...steps], problems };
 }
 
-const compareText = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
+const compareText = (a: string, b: string): number => Number(a > b) - Number(a < b);
 
-/** The exact step: one anchor for each row. */
+/** Tie-outs that are free to fill, placements that stay, and the gaps that keep a tie-out from being planned. */
+function sortOut(prepared: PreparedCamp, placements: readonly Placement[]) {
+  const placementAt = new Map(placements.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
+  const rows: PlanRow[] = [];
+  const kept: Placement[] = [];
+  const problems: PlanProblem[] = [];
+  for (const shelter of prepared.shelters) {
+    const { pitchId } = shelter.pitch;
+    for (const tieOut of shelter.tieOuts) {
+      const present = placementAt.get(spotKey(pitchId, tieOut.tieOut.id)) ?? null;
+      if (!isKnownTieOut(tieOut)) {
+        if (present) kept.push(present);
+        tieOut.gaps
+          .slice(0, 1)
+          .forEach(({ message }) => problems.push({ pitchId, tieOutId: tieOut.tieOut.id, message }));
+      } else if (present?.pinned) kept.push(present);
+      else rows.push({ shelter, tieOut, present });
+    }
+  }
+  // One order whatever the order of the input, so that equal camps get equal plans.
+  const nameOf = ({ shelter, tieOut }: PlanRow) => spotKey(shelter.pitch.pitchId, tieOut.tieOut.id);
+  rows.sort((a, b) => compareText(nameOf(a), nameOf(b)));
+  return { rows, kept, problems };
+}
+
+/** The exact step: one anchor for each row, taken from `stock`. */
 function assignRows(
   prepared: PreparedCamp,
   rows: readonly PlanRow[],
   kinds: readonly TrayAnchor[],
-  left: ReadonlyMap<string, number>,
-): (Rigged | null)[] {
+  stock: Stock,
+): Filled {
   const largest = largestWeight(prepared);
-  const candidates = rows.map((row) =>
-    kinds.map((kind) => rigAtBestLean(prepared, row.shelter, row.tieOut, kind, row.present)),
-  );
-  const kindIndex = new Map(kinds.map((kind, index) => [kind.id, index]));
+  const candidates = rows.map((row) => ({
+    row,
+    rigged: kinds.map((kind) => rigAtBestLean(prepared, row.shelter, row.tieOut, kind, row.present)),
+  }));
   const assignment = assignLexicographic({
-    values: rows.map((row, index) =>
-      (candidates[index] ?? []).map((one) =>
-        one ? weightedMargin(one.strength.dependableN, row.tieOut.weightN ?? 0, largest) : null,
-      ),
+    values: candidates.map(({ row, rigged }) =>
+      rigged.map((one) => one && weightedMargin(one.strength.dependableN, row.tieOut.weightN, largest)),
     ),
-    counts: kinds.map((kind) => left.get(kind.id) ?? 0),
-    emptyValues: rows.map((row) => weightedMargin(null, row.tieOut.weightN ?? 0, largest)),
-    // Tenths of a gram: finer than any scale in a pack.
-    costs: kinds.map((kind) => [Math.round(kind.massKg * 10_000), WORK[kind.spec.class]]),
-    present: rows.map((row) => (row.present ? (kindIndex.get(row.present.anchorId) ?? null) : null)),
+    counts: kinds.map((kind) => stock.left(kind.id)),
+    emptyValues: rows.map((row) => weightedMargin(null, row.tieOut.weightN, largest)),
+    costs: kinds.map((kind) => [massUnits(kind.massKg), WORK[kind.spec.class]]),
+    present: rows.map((row) => kinds.findIndex((kind) => kind.id === row.present?.anchorId)),
   });
-  return assignment.map((kind, row) => (kind === null ? null : (candidates[row]?.[kind] ?? null)));
+  const filled = new Map(
+    candidates.flatMap(({ row, rigged }, index) => {
+      const one = rigged[assignment[index] ?? -1];
+      return one ? [[row, one] as const] : [];
+    }),
+  );
+  for (const { placement } of filled.values()) stock.take(placement.anchorId);
+  return filled;
 }
 
 function describePlan(
@@ -150,22 +147,21 @@ function describePlan(
   filled: number,
   free: number,
   kept: number,
-): { text: string } {
-  const placementAt = new Map(proposal.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
-  let weakest: { margin: number; text: string } | null = null;
-  for (const shelter of prepared.shelters) {
-    for (const tieOut of shelter.tieOuts) {
-      const placement = placementAt.get(spotKey(shelter.pitch.pitchId, tieOut.tieOut.id));
-      const strength = placement ? strengthOf(prepared, shelter, tieOut, placement) : null;
-      if (!strength || tieOut.demandN === null) continue;
-      const margin = marginOf(strength.dependableN, tieOut.demandN);
-      if (weakest && weakest.margin <= margin) continue;
-      const text = `tie-out ${tieOut.tieOut.number} of ${shelter.pitch.name}, margin ${twoDigits(margin)}`;
-      weakest = { margin, text };
-    }
-  }
+): PlanStep {
+  const [weakest] = readPlan(prepared, proposal)
+    .flatMap(({ shelter, tieOut, strength }) =>
+      strength
+        ? [
+            {
+              margin: marginOf(strength.dependableN, tieOut.demandN),
+              at: `${tieOut.tieOut.number} of ${shelter.pitch.name}`,
+            },
+          ]
+        : [],
+    )
+    .sort((a, b) => a.margin - b.margin);
   const pins = kept > 0 ? ` ${kept} left as ${kept === 1 ? "it was" : "they were"}.` : "";
-  const end = weakest ? ` Weakest: ${weakest.text}.` : "";
+  const end = weakest ? ` Weakest: tie-out ${weakest.at}, margin ${twoDigits(weakest.margin)}.` : "";
   return { text: `Gave ${filled} of ${free} tie-outs their anchor.${pins}${end}` };
 }
 
@@ -175,10 +171,9 @@ function isAllowed(prepared: PreparedCamp, placements: readonly Placement[], opt
     prepared.shelters.flatMap(({ pitch, tieOuts }) => tieOuts.map(({ tieOut }) => spotKey(pitch.pitchId, tieOut.id))),
   );
   if (findPlanProblems(placements, prepared.anchors, spots).length > 0) return false;
+  const isOfTheGroup = (id: string) => prepared.anchors.get(id)?.found === false;
   return placements.every(
-    (one) =>
-      one.pinned ||
-      ((options.allowDoubling || one.tandem === null) &&
-        (options.allowFound || prepared.anchors.get(one.anchorId)?.found === false)),
+    ({ pinned, tandem, anchorId }) =>
+      pinned || ((options.allowDoubling || tandem === null) && (options.allowFound || isOfTheGroup(anchorId))),
   );
 }

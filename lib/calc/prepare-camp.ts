@@ -22,6 +22,7 @@ import { windAtShelter, windDirections } from "./wind";
 export interface PreparedTieOut {
   readonly tieOut: TieOut;
   readonly name: string;
+  readonly ground: GroundState | null;
   /** Its place in the analysis; −1 without one. */
   readonly demandIndex: number;
   readonly demandN: number | null;
@@ -37,6 +38,18 @@ export interface PreparedTieOut {
   /** Strengths by rigging, filled while plans are proposed. */
   readonly strengths: Map<string, Strength | null>;
 }
+
+/** A tie-out of which everything but the anchor is known. */
+export interface KnownTieOut extends PreparedTieOut {
+  readonly ground: GroundState;
+  readonly demandN: number;
+  readonly lineAngleDeg: number;
+  readonly weightN: number;
+  readonly priority: number;
+}
+
+/** Without a gap all of its numbers are there. */
+export const isKnownTieOut = (tieOut: PreparedTieOut): tieOut is KnownTieOut => tieOut.gaps.length === 0;
 
 export interface PreparedShelter {
   readonly pitch: PitchedShelter;
@@ -156,6 +169,7 @@ function draftShelter(input: CampInput, pitch: PitchedShelter): Draft {
     const consequence = isKnown ? (analysis.consequences.find((one) => one.tieOutId === tieOut.id) ?? null) : null;
     return {
       tieOut,
+      ground,
       name: describeTieOut(tieOut, pitch.headingDeg, windRange),
       demandIndex,
       demandN: demand?.pullN ?? null,

@@ -1,4 +1,4 @@
-import { marginOf } from "./camp";
+import { evaluateTieOut, marginOf } from "./camp";
 import { groundRow } from "./ground";
 import {
   asMend,
@@ -10,9 +10,9 @@ import {
   type TieOutSpot,
 } from "./mend-measure";
 import { rigInLine, USUAL_ROCK_KG } from "./plan-reinforce";
-import { prepareCamp, type PreparedTieOut } from "./prepare-camp";
-import { isDriven, rigAtBestLean, type Rigged } from "./rig-anchor";
-import { evaluateTieOut } from "./camp";
+import { prepareCamp } from "./prepare-camp";
+import { isDriven, readPlan, rigAtBestLean, type PlannedTieOut, type Rigged } from "./rig-anchor";
+import { Stock } from "./stock";
 import type { CampInput, Mend, Placement, TrayAnchor } from "./types";
 import { inSentence, twoDigits } from "./wording";
 
@@ -32,25 +32,27 @@ const isWeightOrDeadman = (anchor: TrayAnchor): boolean =>
  */
 export function quickMends(camp: CampInput, spot: TieOutSpot): Mend[] {
   const one = openCase(prepareCamp(camp), spot);
-  if (!one || one.present?.pinned) return one ? rankMends(patchMends(one)) : [];
-  const left = countFree(camp);
-  return rankMends([
-    ...leanMends(one),
-    ...trayMends(one, left),
-    ...exchangeMends(one),
-    ...cordMends(one),
-    ...rockMends(one),
-    ...tandemMends(one, left),
-    ...patchMends(one),
-  ]);
+  if (!one) return [];
+  const stock = new Stock(camp.tray, camp.placements);
+  const free = camp.tray.filter((anchor) => stock.left(anchor.id) > 0);
+  const atThePin = one.present?.pinned
+    ? []
+    : [
+        ...trayMends(one, free, stock),
+        ...(one.present && one.anchor ? anchorMends(one, one.present, one.anchor, free) : []),
+      ];
+  return rankMends([...atThePin, ...patchMends(one)]);
 }
 
-function countFree(camp: CampInput): ReadonlyMap<string, number> {
-  const left = new Map(camp.tray.map((anchor) => [anchor.id, anchor.count]));
-  for (const { anchorId, tandem } of camp.placements) {
-    for (const id of tandem ? [anchorId, tandem.anchorId] : [anchorId]) left.set(id, (left.get(id) ?? 0) - 1);
-  }
-  return left;
+/** What can be done with the anchor that is there. */
+function anchorMends(one: MendCase, present: Placement, anchor: TrayAnchor, free: readonly TrayAnchor[]): Mend[] {
+  return [
+    ...exchangeMends(one, present, anchor),
+    ...cordMends(one, present),
+    ...(isDriven(anchor.spec)
+      ? [...leanMends(one, present, anchor), ...rockMends(one, present), ...tandemMends(one, present, anchor, free)]
+      : []),
+  ];
 }
 
 const countLeft = (anchor: TrayAnchor, left: number): string =>
@@ -71,168 +73,123 @@ function describeLean(leanDeg: number): string {
   return leanDeg > 0 ? `leaning ${leanDeg}° away from the pull` : `leaning ${-leanDeg}° towards the pull`;
 }
 
-function leanMends(one: MendCase): Mend[] {
-  const { present, prepared } = one;
-  const anchor = present && prepared.anchors.get(present.anchorId);
-  if (!present || !anchor || !isDriven(anchor.spec)) return [];
-  const rigged = rigAtBestLean(prepared, one.shelter, one.tieOut, anchor, present);
+function leanMends(one: MendCase, present: Placement, anchor: TrayAnchor): Mend[] {
+  const rigged = rigAtBestLean(one.prepared, one.shelter, one.tieOut, anchor, present);
   if (!rigged) return [];
   const placement = { ...present, leanDeg: rigged.placement.leanDeg, depthOutM: 0 };
-  const title = present.depthOutM > 0 ? "Drive it home" : "Drive it";
-  const was =
-    present.depthOutM > 0
-      ? `${Math.round(present.depthOutM * 1000)}\u2009mm stand out now`
-      : `now ${describeLean(present.leanDeg)}`;
-  return nonNull(
-    measureMend(one, draftOf("best-lean", `${title} ${describeLean(placement.leanDeg)}`, was, [placement]), placement),
-  );
+  const isOut = present.depthOutM > 0;
+  const title = `${isOut ? "Drive it home" : "Drive it"} ${describeLean(placement.leanDeg)}`;
+  const outMm = Math.round(present.depthOutM * 1000);
+  const was = isOut ? `${outMm}\u2009mm stand out now` : `now ${describeLean(present.leanDeg)}`;
+  return nonNull(measureMend(one, draftOf("best-lean", title, was, [placement]), placement));
 }
 
-/** The best of `anchors` by what they hold here, at most MOST_OF_A_KIND. */
-function bestAnchors(one: MendCase, anchors: readonly TrayAnchor[]): { anchor: TrayAnchor; rigged: Rigged }[] {
-  return anchors
-    .flatMap((anchor) =>
-      nonNull(rigAtBestLean(one.prepared, one.shelter, one.tieOut, anchor, one.present)).map((rigged) => ({
-        anchor,
-        rigged,
-      })),
-    )
-    .sort(
-      (a, b) => b.rigged.strength.dependableN - a.rigged.strength.dependableN || (a.anchor.id < b.anchor.id ? -1 : 1),
-    )
-    .slice(0, MOST_OF_A_KIND);
-}
+/** The strongest first; the order of the tray among equals. */
+const strongestFirst = <T extends { readonly rigged: Rigged }>(offers: readonly T[]): T[] =>
+  [...offers].sort((a, b) => b.rigged.strength.dependableN - a.rigged.strength.dependableN);
 
-function trayMends(one: MendCase, left: ReadonlyMap<string, number>): Mend[] {
-  const { prepared, present } = one;
-  const free = prepared.input.tray.filter(
-    (anchor) => anchor.id !== present?.anchorId && (left.get(anchor.id) ?? 0) > 0,
-  );
-  const mends = (kind: Mend["kind"], anchors: readonly TrayAnchor[], title: (name: string) => string) =>
-    bestAnchors(one, anchors).flatMap(({ anchor, rigged }) => {
-      const detail = countLeft(anchor, left.get(anchor.id) ?? 0);
-      return nonNull(
-        measureMend(one, draftOf(kind, title(inSentence(anchor.name)), detail, [rigged.placement]), rigged.placement),
-      );
-    });
+function trayMends(one: MendCase, free: readonly TrayAnchor[], stock: Stock): Mend[] {
+  const others = free.filter((anchor) => anchor.id !== one.present?.anchorId);
+  const offer = (kind: Mend["kind"], verb: string, anchors: readonly TrayAnchor[]) =>
+    strongestFirst(
+      anchors.flatMap((anchor) =>
+        nonNull(rigAtBestLean(one.prepared, one.shelter, one.tieOut, anchor, one.present)).map((rigged) => ({
+          rigged,
+        })),
+      ),
+    )
+      .slice(0, MOST_OF_A_KIND)
+      .flatMap(({ rigged: { anchor, placement } }) => {
+        const title = `${verb} the ${inSentence(anchor.name)}`;
+        const detail = countLeft(anchor, stock.left(anchor.id));
+        return nonNull(measureMend(one, draftOf(kind, title, detail, [placement]), placement));
+      });
   return [
-    ...mends(
+    ...offer(
       "swap",
-      free.filter((anchor) => !isWeightOrDeadman(anchor)),
-      (name) => (present ? `Swap with the ${name}` : `Put the ${name} here`),
+      one.present ? "Swap with" : "Put in",
+      others.filter((anchor) => !isWeightOrDeadman(anchor)),
     ),
-    ...mends("weight-or-deadman", free.filter(isWeightOrDeadman), (name) => `Hold it with the ${name}`),
+    ...offer("weight-or-deadman", "Hold it with", others.filter(isWeightOrDeadman)),
   ];
 }
 
-/** Anchors of other tie-outs that can spare them: theirs then still holds, or at least more than this one did. */
-function exchangeMends(one: MendCase): Mend[] {
-  const { prepared, present } = one;
-  const mine = present && prepared.anchors.get(present.anchorId);
-  if (!present || !mine || present.tandem || one.now.margin === null) return [];
-  const found: { mend: Mend; worse: number }[] = [];
-  const here = new Map<string, Rigged | null>();
-  for (const shelter of prepared.shelters) {
-    for (const tieOut of shelter.tieOuts) {
-      const other = prepared.input.placements.find(
-        (placement) => placement.pitchId === shelter.pitch.pitchId && placement.tieOutId === tieOut.tieOut.id,
-      );
-      const theirs = other && prepared.anchors.get(other.anchorId);
-      if (!other || !theirs || other.pinned || other.tandem || theirs.id === mine.id || tieOut.demandN === null)
-        continue;
-      let hereWith = here.get(theirs.id);
-      if (hereWith === undefined) {
-        hereWith = rigAtBestLean(prepared, one.shelter, one.tieOut, theirs, present);
-        here.set(theirs.id, hereWith);
-      }
-      const thereWith = rigAtBestLean(prepared, shelter, tieOut, mine, other);
-      if (!hereWith || !thereWith) continue;
-      const gained = marginOf(hereWith.strength.dependableN, one.tieOut.demandN ?? 0);
-      const spared = marginOf(thereWith.strength.dependableN, tieOut.demandN);
-      if (Math.min(gained, spared) <= one.now.margin || spared < Math.min(1, gained)) continue;
-      const mend = asMend(
-        one.now,
-        draftOf(
-          "swap",
-          `Exchange with ${nameOther(one, shelter.pitch.name, tieOut)}: ${inSentence(theirs.name)}`,
-          `its margin is then ${twoDigits(spared)}`,
-          [hereWith.placement, thereWith.placement],
-        ),
-        // The gust is looked for only for those that are offered.
-        { ...one.now, margin: gained, holdsToGustMs: 0 },
-      );
-      if (mend) found.push({ mend, worse: Math.min(gained, spared) });
-    }
-  }
-  found.sort((a, b) => b.worse - a.worse || (a.mend.title < b.mend.title ? -1 : 1));
-  return found.slice(0, MOST_OF_A_KIND).map(({ mend }) => {
-    const [placement] = mend.placements;
-    const result = placement ? evaluateTieOut(prepared, one.shelter, one.tieOut, placement) : one.now;
-    return { ...mend, holdsToGustMs: result.holdsToGustMs ?? 0 };
+/** Anchors of other tie-outs that can spare them: theirs then still holds, or at least more than this one will. */
+function exchangeMends(one: MendCase, present: Placement, mine: TrayAnchor): Mend[] {
+  const { prepared, now } = one;
+  const least = now.margin;
+  if (present.tandem || least === null) return [];
+  const offers = readPlan(prepared, prepared.input.placements).flatMap((other) => {
+    const { placement } = other;
+    const theirs = placement && prepared.anchors.get(placement.anchorId);
+    if (!theirs || theirs.id === mine.id || placement.pinned || placement.tandem) return [];
+    const here = rigAtBestLean(prepared, one.shelter, one.tieOut, theirs, present);
+    const there = rigAtBestLean(prepared, other.shelter, other.tieOut, mine, placement);
+    if (!here || !there) return [];
+    const gained = marginOf(here.strength.dependableN, one.tieOut.demandN);
+    const spared = marginOf(there.strength.dependableN, other.tieOut.demandN);
+    if (Math.min(gained, spared) <= least || spared < Math.min(1, gained)) return [];
+    return [{ other, here, there, spared, worse: Math.min(gained, spared) }];
   });
+  return offers
+    .sort((a, b) => b.worse - a.worse)
+    .slice(0, MOST_OF_A_KIND)
+    .flatMap(({ other, here, there, spared }) => {
+      const title = `Exchange with ${nameOther(one, other)}: ${inSentence(here.anchor.name)}`;
+      const detail = `its margin is then ${twoDigits(spared)}`;
+      const draft = draftOf("swap", title, detail, [here.placement, there.placement]);
+      return nonNull(measureMend(one, draft, here.placement));
+    });
 }
 
-function nameOther(one: MendCase, shelterName: string, tieOut: PreparedTieOut): string {
+function nameOther(one: MendCase, { shelter, tieOut }: PlannedTieOut): string {
   const name = `tie-out ${tieOut.tieOut.number}`;
-  return shelterName === one.shelter.pitch.name ? name : `${name} of ${shelterName}`;
+  return shelter === one.shelter ? name : `${name} of ${shelter.pitch.name}`;
 }
 
-function cordMends(one: MendCase): Mend[] {
-  const { present, prepared, now } = one;
-  if (!present || present.shockCord || now.morningMargin === null) return [];
+function cordMends(one: MendCase, present: Placement): Mend[] {
+  const { prepared, now } = one;
+  if (present.shockCord || now.morningMargin === null) return [];
   const placement = { ...present, shockCord: true };
   const then = evaluateTieOut(prepared, one.shelter, one.tieOut, placement);
   const detail = `by morning ${twoDigits(then.morningMargin ?? 0)} instead of ${twoDigits(now.morningMargin)}`;
   return nonNull(asMend(now, draftOf("shock-cord", "Put shock cord in the line", detail, [placement]), then));
 }
 
-function rockMends(one: MendCase): Mend[] {
-  const { present, prepared } = one;
-  const anchor = present && prepared.anchors.get(present.anchorId);
-  if (!prepared.input.rocksAvailable || !present || !anchor || !isDriven(anchor.spec)) return [];
-  if (present.rockKg >= USUAL_ROCK_KG) return [];
+function rockMends(one: MendCase, present: Placement): Mend[] {
+  if (!one.prepared.input.rocksAvailable || present.rockKg >= USUAL_ROCK_KG) return [];
   const placement = { ...present, rockKg: USUAL_ROCK_KG };
   const title = `Put a rock of ${USUAL_ROCK_KG}\u2009kg on its lip`;
   return nonNull(measureMend(one, draftOf("rock", title, "on the side of the shelter", [placement]), placement));
 }
 
-function tandemMends(one: MendCase, left: ReadonlyMap<string, number>): Mend[] {
-  const { present, prepared } = one;
-  if (!present) return [];
-  const pairs = prepared.input.tray
-    .filter((anchor) => (left.get(anchor.id) ?? 0) > 0)
-    .flatMap((second) =>
-      nonNull(rigInLine(prepared, one.shelter, one.tieOut, present, second)).map((rigged) => ({ second, rigged })),
-    )
-    .sort(
-      (a, b) => b.rigged.strength.dependableN - a.rigged.strength.dependableN || (a.second.id < b.second.id ? -1 : 1),
-    );
-  return pairs.slice(0, 1).flatMap(({ second, rigged }) => {
-    const { placement } = rigged;
-    const metres = `${(placement.tandem?.spacingM ?? 0).toFixed(2)}\u2009m`;
-    const isBehind = placement.tandem?.anchorId === second.id;
-    const detail = isBehind
-      ? `${inSentence(second.name)}, ${metres} behind`
-      : `${inSentence(second.name)} in front, the one there now ${metres} behind`;
-    return nonNull(measureMend(one, draftOf("tandem", "Second stake in line", detail, [placement]), placement));
-  });
+function tandemMends(one: MendCase, present: Placement, anchor: TrayAnchor, free: readonly TrayAnchor[]): Mend[] {
+  const pairs = free.flatMap((second) =>
+    nonNull(rigInLine(one.prepared, one.shelter, one.tieOut, { anchor, placement: present }, second)).map((rigged) => ({
+      second,
+      rigged,
+    })),
+  );
+  return strongestFirst(pairs)
+    .slice(0, 1)
+    .flatMap(({ second, rigged: { placement } }) => {
+      const metres = `${(placement.tandem?.spacingM ?? 0).toFixed(2)}\u2009m`;
+      const detail =
+        placement.tandem?.anchorId === second.id
+          ? `${inSentence(second.name)}, ${metres} behind`
+          : `${inSentence(second.name)} in front, the one there now ${metres} behind`;
+      return nonNull(measureMend(one, draftOf("tandem", "Second stake in line", detail, [placement]), placement));
+    });
 }
 
 function patchMends(one: MendCase): Mend[] {
   const { input } = one.prepared;
   const { pitch } = one.shelter;
-  const patch = pitch.patch === "main" ? "second" : "main";
-  const ground = patch === "main" ? input.ground : input.secondGround;
+  const isMain = pitch.patch === "main";
+  const ground = isMain ? input.secondGround : input.ground;
   if (!ground || !one.present) return [];
-  const title = patch === "main" ? "Move the shelter to the main ground" : "Move the shelter to the second patch";
-  return nonNull(
-    measurePitchChange(
-      one,
-      { ...pitch, patch },
-      {
-        ...draftOf("other-patch", title, inSentence(groundRow(ground.kind).name), []),
-        pitchChange: { patch },
-      },
-    ),
-  );
+  const patch = isMain ? "second" : "main";
+  const title = isMain ? "Move the shelter to the second patch" : "Move the shelter to the main ground";
+  const draft = draftOf("other-patch", title, inSentence(groundRow(ground.kind).name), []);
+  return nonNull(measurePitchChange(one, { ...pitch, patch }, { ...draft, pitchChange: { patch } }));
 }

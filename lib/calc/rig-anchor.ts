@@ -1,7 +1,7 @@
 import { capacityNumbers } from "./capacity";
-import type { PreparedCamp, PreparedShelter, PreparedTieOut } from "./prepare-camp";
-import { setAnchor, strengthKey, type Strength } from "./tie-out-strength";
-import type { AnchorSpec, GroundState, Placement, Rigging, TrayAnchor } from "./types";
+import { isKnownTieOut, type KnownTieOut, type PreparedCamp, type PreparedShelter } from "./prepare-camp";
+import { setAnchor, spotKey, strengthKey, type Strength } from "./tie-out-strength";
+import type { AnchorSpec, Placement, Rigging, TrayAnchor } from "./types";
 
 /** Knot of a placement that nobody has rigged yet: holds and can be tightened (judgement). */
 const USUAL_KNOT = "taut-line-hitch";
@@ -33,7 +33,11 @@ export function plainPlacement(pitchId: string, tieOutId: string, anchorId: stri
   };
 }
 
+/** Length of a stake, m; 0 of anything else. */
+export const stakeLengthM = (spec: AnchorSpec): number => (spec.class === "stake" ? spec.lengthM : 0);
+
 export interface Rigged {
+  readonly anchor: TrayAnchor;
   readonly placement: Placement;
   readonly strength: Strength;
 }
@@ -42,16 +46,14 @@ export interface Rigged {
 export function strengthOf(
   prepared: PreparedCamp,
   shelter: PreparedShelter,
-  tieOut: PreparedTieOut,
+  tieOut: KnownTieOut,
   placement: Placement,
 ): Strength | null {
   const key = strengthKey(placement);
   const known = tieOut.strengths.get(key);
   if (known !== undefined) return known;
-  const anchor = shelter.ground
-    ? setAnchor(placement, prepared.anchors, shelter.ground, shelter.pitch.spec.line)
-    : null;
-  const strength = anchor && tieOut.lineAngleDeg !== null ? anchor.strengthAt(tieOut.lineAngleDeg) : null;
+  const anchor = setAnchor(placement, prepared.anchors, tieOut.ground, shelter.pitch.spec.line);
+  const strength = anchor?.strengthAt(tieOut.lineAngleDeg) ?? null;
   tieOut.strengths.set(key, strength);
   return strength;
 }
@@ -63,37 +65,28 @@ export function strengthOf(
 export function rigAtBestLean(
   prepared: PreparedCamp,
   shelter: PreparedShelter,
-  tieOut: PreparedTieOut,
+  tieOut: KnownTieOut,
   anchor: TrayAnchor,
   habit: Placement | null,
 ): Rigged | null {
-  if (!shelter.ground || tieOut.lineAngleDeg === null) return null;
   const plain = plainPlacement(shelter.pitch.pitchId, tieOut.tieOut.id, anchor.id);
   const base: Placement = habit
-    ? {
-        ...plain,
-        knot: habit.knot,
-        shockCord: habit.shockCord,
-        rockKg: isDriven(anchor.spec) ? habit.rockKg : 0,
-      }
+    ? { ...plain, knot: habit.knot, shockCord: habit.shockCord, rockKg: isDriven(anchor.spec) ? habit.rockKg : 0 }
     : plain;
-  const leans: number[] = [];
-  if (isDriven(anchor.spec)) {
-    leans.push(recallBestLean(prepared, shelter.ground, shelter.pitch.patch, tieOut.lineAngleDeg, anchor, base.rockKg));
-    if (habit?.anchorId === anchor.id) leans.push(habit.leanDeg);
-  } else leans.push(0);
+  const leans = isDriven(anchor.spec) ? [recallBestLean(prepared, shelter, tieOut, anchor, base.rockKg)] : [0];
+  if (isDriven(anchor.spec) && habit?.anchorId === anchor.id) leans.push(habit.leanDeg);
   let best: Rigged | null = null;
   for (const leanDeg of leans) {
     const placement = { ...base, leanDeg };
     const strength = strengthOf(prepared, shelter, tieOut, placement);
     if (!strength || strength.dependableN <= 0) continue;
-    if (!best || strength.dependableN > best.strength.dependableN * (1 + 1e-9)) best = { placement, strength };
+    if (!best || strength.dependableN > best.strength.dependableN * (1 + 1e-9)) best = { anchor, placement, strength };
   }
   if (!best || best.placement.leanDeg === 0 || !isLeanIdle(best.strength)) return best;
   // Line or head give first: upright is less work and holds the same.
   const placement = { ...base, leanDeg: 0 };
   const strength = strengthOf(prepared, shelter, tieOut, placement);
-  return strength && strength.dependableN >= best.strength.dependableN ? { placement, strength } : best;
+  return strength && strength.dependableN >= best.strength.dependableN ? { anchor, placement, strength } : best;
 }
 
 const isLeanIdle = ({ mode }: Strength): boolean => mode === "line-breaks" || mode === "head-gives" || mode === "rated";
@@ -101,14 +94,13 @@ const isLeanIdle = ({ mode }: Strength): boolean => mode === "line-breaks" || mo
 /** The best lean of a stake in a ground, −10…45° in steps of 5°; among equals the nearest to upright. */
 function recallBestLean(
   prepared: PreparedCamp,
-  ground: GroundState,
-  patch: string,
-  lineAngleDeg: number,
+  shelter: PreparedShelter,
+  { ground, lineAngleDeg }: KnownTieOut,
   anchor: TrayAnchor,
   rockKg: number,
 ): number {
   const angleDeg = Math.min(90, Math.round(lineAngleDeg / LINE_ANGLE_STEP_DEG) * LINE_ANGLE_STEP_DEG);
-  const key = `${anchor.id}|${patch}|${angleDeg}|${rockKg}`;
+  const key = `${anchor.id}|${shelter.pitch.patch}|${angleDeg}|${rockKg}`;
   const known = prepared.leans.get(key);
   if (known !== undefined) return known;
   const rigging = {
@@ -133,4 +125,25 @@ function recallBestLean(
   consider(centre + LEAN_STEP_DEG);
   prepared.leans.set(key, best.leanDeg);
   return best.leanDeg;
+}
+
+/** One known tie-out of a camp with what a plan puts there and what that holds. */
+export interface PlannedTieOut {
+  readonly shelter: PreparedShelter;
+  readonly tieOut: KnownTieOut;
+  readonly placement: Placement | null;
+  /** Null when it is empty or what it holds is not known. */
+  readonly strength: Strength | null;
+}
+
+/** Every tie-out without a gap, with what a plan puts there. */
+export function readPlan(prepared: PreparedCamp, placements: readonly Placement[]): PlannedTieOut[] {
+  const placementAt = new Map(placements.map((one) => [spotKey(one.pitchId, one.tieOutId), one]));
+  return prepared.shelters.flatMap((shelter) =>
+    shelter.tieOuts.filter(isKnownTieOut).map((tieOut) => {
+      const placement = placementAt.get(spotKey(shelter.pitch.pitchId, tieOut.tieOut.id)) ?? null;
+      const strength = placement && strengthOf(prepared, shelter, tieOut, placement);
+      return { shelter, tieOut, placement, strength };
+    }),
+  );
 }

@@ -47,7 +47,8 @@ export interface SetAnchor {
   readonly strengthAt: (lineAngleDeg: number, pullCycles?: number) => Strength | null;
 }
 
-const NOTHING: Strength = { medianN: 0, scatter: 0, dependableN: 0, mode: null };
+/** The strength of what can't be used. */
+export const NOTHING_HOLDS: Strength = { medianN: 0, scatter: 0, dependableN: 0, mode: null };
 
 /** Ties a placement to its anchor, ground and rigging; null when an anchor it names is not in the tray. */
 export function setAnchor(
@@ -69,7 +70,7 @@ export function setAnchor(
       const input = inputAt(lineAngleDeg, pullCycles);
       const numbers = capacityNumbers(input);
       if (numbers) return numbers;
-      return anchorCapacity(input).status === "unusable" ? NOTHING : null;
+      return anchorCapacity(input).status === "unusable" ? NOTHING_HOLDS : null;
     },
   };
 }

@@ -135,7 +135,7 @@ describe("what would mend a tie-out, without working out the shelter anew", () =
   it("fills an empty tie-out", () => {
     const empty = { ...camp, placements: camp.placements.filter((one) => one.tieOutId !== WEAK) };
     const offers = quickMends(empty, SPOT);
-    expect(offers.map((mend) => mend.title)).toContain("Put the anchor wide here");
+    expect(offers.map((mend) => mend.title)).toContain("Put in the anchor wide");
     expect(offers.every((mend) => mend.kind === "swap" || mend.kind === "weight-or-deadman")).toBe(true);
   });
 
