@@ -59,6 +59,11 @@ async function letAccountGo(userId: string): Promise<void> {
   }
 }
 
+function logUnlessRefusal(error: unknown): void {
+  if (error instanceof APIError && error.statusCode < 500) return;
+  log.error("auth failed", error);
+}
+
 function createAuth() {
   // Without a proxy that vouches for addresses, everybody shares one bucket: it has to be wider.
   const isAddressKnown = env.trustedIpHeader !== undefined;
@@ -75,6 +80,7 @@ function createAuth() {
     database: drizzleAdapter(getDb(), { provider: "sqlite", schema, transaction: true }),
     telemetry: { enabled: false },
     logger: { level: "error", log: (level, message) => log.warn("auth", { level, message: message.slice(0, 200) }) },
+    onAPIError: { onError: logUnlessRefusal },
     emailAndPassword: {
       enabled: true,
       autoSignIn: false,

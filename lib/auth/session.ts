@@ -1,4 +1,5 @@
 import "server-only";
+import { APIError } from "better-auth/api";
 import { headers } from "next/headers";
 import { redirect } from "next/navigation";
 import { cache } from "react";
@@ -11,9 +12,19 @@ import { isSessionTooOld } from "./session-age";
 export const REQUEST_ID_HEADER = "x-request-id";
 export const PATH_HEADER = "x-leestead-path";
 
+async function findSession(from: Headers) {
+  try {
+    return await getAuth().api.getSession({ headers: from, query: { disableCookieCache: true } });
+  } catch (error) {
+    // Too old: beforeAuth has just ended it.
+    if (error instanceof APIError && error.statusCode === 401) return null;
+    throw error;
+  }
+}
+
 /** Who these headers belong to, or null. */
 export async function readContext(from: Headers): Promise<Context | null> {
-  const found = await getAuth().api.getSession({ headers: from, query: { disableCookieCache: true } });
+  const found = await findSession(from);
   if (!found || !found.user.emailVerified || isSessionTooOld(found.session.createdAt)) return null;
   const { id: userId, name, email } = found.user;
   return { actor: { userId, name, email }, requestId: from.get(REQUEST_ID_HEADER) ?? newId() };
@@ -21,7 +32,7 @@ export async function readContext(from: Headers): Promise<Context | null> {
 
 /** Which of somebody's sessions this request belongs to. */
 export async function getSessionId(): Promise<string | null> {
-  const found = await getAuth().api.getSession({ headers: await headers(), query: { disableCookieCache: true } });
+  const found = await findSession(await headers());
   return found?.session.id ?? null;
 }
 

@@ -20,6 +20,7 @@ export async function handleAuth(
       ...(body === undefined ? {} : { body }),
     });
     const answer = await handler(inner);
+    if (answer.status >= 500) throw new Error(`auth answered ${answer.status}`);
     const response = new Response(answer.body, answer);
     const wait = response.headers.get("x-retry-after");
     if (wait) response.headers.set("Retry-After", wait);
