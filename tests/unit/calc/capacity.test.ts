@@ -168,6 +168,16 @@ describe("published orders of size", () => {
   });
 });
 
+describe("saturated ground", () => {
+  it("weighs less by the water in sand (18.5 − 9.807 kN/m³) and loses its cohesion; clay halves", () => {
+    const sand = groundStrength(groundOf("dry-loose-sand", { wetness: "saturated" }));
+    expect(sand.unitWeightNm3).toBeCloseTo(18_500 - 9_806.65, 9);
+    expect(sand.kind === "frictional" && sand.cohesionPa).toBe(0);
+    const loam = groundStrength(groundOf("firm-moist-loam", { wetness: "saturated" }));
+    expect(loam.kind === "undrained" && loam.shearStrengthPa).toBe(18_000);
+  });
+});
+
 describe("what can't be used, and what is not known", () => {
   it.each(["frozen-or-ice", "rock-slab", "deck"] as const)("says what to use instead of a stake on %s", (kind) => {
     for (const id of ["three-blade-150", "screw-in-200", "sticks-buried"]) {
