@@ -2,7 +2,15 @@ import { demandAt } from "./analyse-shelter";
 import { prepareCamp, type PreparedCamp, type PreparedShelter, type PreparedTieOut } from "./prepare-camp";
 import { retensionSentence } from "./retension";
 import { Stock } from "./stock";
-import { findHoldsTo, NOTHING_HOLDS, setAnchor, spotKey, strengthKey, type SetAnchor } from "./tie-out-strength";
+import {
+  findHoldsTo,
+  LARGEST_GUST_MS,
+  NOTHING_HOLDS,
+  setAnchor,
+  spotKey,
+  strengthKey,
+  type SetAnchor,
+} from "./tie-out-strength";
 import type { CampInput, CampResult, Gap, Placement, ShelterResult, TieOutResult } from "./types";
 import { chanceHolds, verdictOf, worstVerdict } from "./verdict";
 
@@ -150,7 +158,8 @@ function evaluateShelter(
     verdict,
     gaps: shelter.gaps,
     holdsToGustMs: holds === null || stands === null ? null : Math.min(holds, stands),
-    isHoldsToOpen: holds !== null && stands !== null && shelter.isStandsToOpen && holds >= stands,
+    isHoldsToOpen:
+      holds !== null && stands !== null && shelter.isStandsToOpen && holds >= Math.min(stands, LARGEST_GUST_MS),
     tieOuts,
     weakestTieOutId: findWeakest(tieOuts)?.tieOutId ?? null,
     standing: shelter.standing,

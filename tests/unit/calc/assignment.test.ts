@@ -231,6 +231,28 @@ describe("lexicographic bottleneck", () => {
     expect(assignLexicographic(problem)).toEqual([null, 0, 0, null]);
   });
 
+  it("changes as little as it can among equals", () => {
+    const equal = {
+      values: [
+        [2, 2],
+        [2, 2],
+        [2, 2],
+      ],
+      counts: [2, 2],
+      emptyValues: [0, 0, 0],
+      costs: [[1], [1]],
+    };
+    for (const present of [
+      [0, 1, 0],
+      [1, 1, 0],
+      [1, 0, 1],
+    ]) {
+      expect(assignLexicographic({ ...equal, present })).toEqual(present);
+    }
+    // The lighter kind still comes before the fewer changes.
+    expect(assignLexicographic({ ...equal, costs: [[1], [2]], present: [1, 1, -1] })).toEqual([1, 0, 0]);
+  });
+
   it("refuses sizes that do not fit, fractions of an anchor and numbers that are not finite", () => {
     expect(() => assignLexicographic({ values: [[1]], counts: [1, 2], emptyValues: [0] })).toThrow(RangeError);
     expect(() => assignLexicographic({ values: [[1]], counts: [1.5], emptyValues: [0] })).toThrow(RangeError);

@@ -9,6 +9,8 @@ import {
   planProblems,
   prepareCamp,
 } from "@/lib/calc/camp";
+import { analyseShelter } from "@/lib/calc/analyse-shelter";
+import { retensionSentence } from "@/lib/calc/retension";
 import { findHoldsTo } from "@/lib/calc/tie-out-strength";
 import type { CampInput, TieOutResult } from "@/lib/calc/types";
 import {
@@ -379,5 +381,123 @@ describe("plans that can't stand", () => {
       "All 2 of Anchor ring are placed. Lift one first.",
     ]);
     expect(planProblems(ringCamp())).toEqual([]);
+  });
+});
+
+describe("when to tighten the lines", () => {
+  const shelter = (margins: readonly [number, number][]) =>
+    ({
+      name: "Tarp",
+      tieOuts: margins.map(([margin, morningMargin], index) => ({ number: index + 1, margin, morningMargin })),
+    }) as unknown as Parameters<typeof retensionSentence>[1][number];
+
+  it("says nothing without hours, in a still night, or when hardly a gust comes", () => {
+    expect(retensionSentence(null, [])).toBeNull();
+    expect(retensionSentence(0, [])).toBeNull();
+    expect(retensionSentence(0.5, [])).toBeNull();
+  });
+
+  it("names the one that the morning finds too weak, and counts the others", () => {
+    expect(retensionSentence(6, [shelter([[2, 1.1]])])).not.toMatch(/By morning/);
+    expect(
+      retensionSentence(6, [
+        shelter([
+          [2, 1.1],
+          [1.2, 0.9],
+        ]),
+      ]),
+    ).toMatch(/By morning tie-out 2 of Tarp is below/);
+    expect(
+      retensionSentence(6, [
+        shelter([
+          [1.1, 0.8],
+          [1.2, 0.7],
+        ]),
+      ]),
+    ).toMatch(/tie-out 2 of Tarp and one more are below/);
+    expect(
+      retensionSentence(6, [
+        shelter([
+          [1.1, 0.8],
+          [1.2, 0.7],
+          [1.3, 0.9],
+          [0.4, 0.2],
+        ]),
+      ]),
+    ).toMatch(/tie-out 2 of Tarp and 2 more are/);
+  });
+
+  it("half of the loosening of N gusts, by its logarithm, is done after √N of them", () => {
+    // 6 h at 12 strong pulls an hour: 72 pulls, √72 = 8.5 of them, 360 min ÷ 8.5 = 42 min.
+    expect(retensionSentence(6, [])).toMatch(/after about 42 minutes/);
+  });
+});
+
+describe("real shelters", () => {
+  const analysed = (kind: "ridge-tarp" | "half-pyramid", fromDeg: number, toDeg: number): CampInput => {
+    const pitch = { ...pitchOf("a", kind, [1]), headingDeg: 0, analysis: null };
+    const camp = campOf({ wind: { ...WIND, fromDeg, toDeg }, shelters: [pitch], tray: [trayOf("blade", BLADE, 20)] });
+    const request = designAnalysisRequest(camp, pitch);
+    if ("gaps" in request) throw new Error("expected a request");
+    return {
+      ...camp,
+      shelters: [{ ...pitch, analysis: analyseShelter(request) }],
+      placements: tieOutIds(kind).map((id) => placementOf("a", id, "blade")),
+    };
+  };
+  const margins = (camp: CampInput) =>
+    new Map(allTieOuts(camp).map((one) => [one.tieOutId, one.margin ?? NaN] as const));
+
+  it.each(["ridge-tarp", "half-pyramid"] as const)(
+    "%s: wind from the left is the mirror of wind from the right",
+    (kind) => {
+      const left = margins(analysed(kind, 240, 270));
+      const right = margins(analysed(kind, 90, 120));
+      const mirrored = (id: string) => id.replace(/left|right/, (side) => (side === "left" ? "right" : "left"));
+      expect(left.size).toBeGreaterThan(5);
+      // The net is relaxed until little is left out of balance, from either side: 0.2 % apart at most.
+      for (const [id, margin] of left)
+        expect(Math.abs((right.get(mirrored(id)) ?? NaN) / margin - 1)).toBeLessThan(0.002);
+    },
+  );
+
+  it("turning camp and wind together changes nothing", () => {
+    const camp = analysed("half-pyramid", 240, 270);
+    const turned = {
+      ...camp,
+      wind: { ...camp.wind, fromDeg: 310, toDeg: 340 },
+      shelters: camp.shelters.map((pitch) => ({ ...pitch, headingDeg: 70 })),
+    };
+    const [pitch] = turned.shelters;
+    if (!pitch) throw new Error("one shelter");
+    const request = designAnalysisRequest(turned, pitch);
+    const before = designAnalysisRequest(camp, pitchOf("a", "half-pyramid", [1]));
+    if ("gaps" in request || "gaps" in before) throw new Error("expected requests");
+    expect(request.pressurePa).toBe(before.pressurePa);
+    expect(margins(turned)).toEqual(margins(camp));
+  });
+
+  it("more gust never raises the weakest margin, whatever the angle of the lines does", () => {
+    const camp = analysed("ridge-tarp", 240, 270);
+    const weakest = [2, 5, 10, 15, 20, 25, 30, 40].map((speedMs) =>
+      Math.min(...margins({ ...camp, wind: { ...camp.wind, strength: { kind: "gust", speedMs } } }).values()),
+    );
+    expect(weakest).toEqual([...weakest].sort((a, b) => b - a));
+  });
+
+  it("a breeze is analysed in a stronger wind and read off below it", () => {
+    const breeze = { ...WIND, strength: { kind: "gust" as const, speedMs: 1 } };
+    const request = designAnalysisRequest({ wind: breeze }, pitchOf("a", "pyramid", [1]));
+    if ("gaps" in request) throw new Error("expected a request");
+    expect(request.pressurePa).toBe(60);
+    expect(pressureOf("pyramid", breeze)).toBeLessThan(1);
+  });
+
+  it("says when it looked no further", () => {
+    const camp = ringCamp({ shelters: [pitchOf("a", "pyramid", [0.01])] });
+    const result = evaluateCamp(camp);
+    expect(result.isHoldsToOpen).toBe(true);
+    expect(result.shelters[0]?.isHoldsToOpen).toBe(true);
+    expect(evaluateCamp(ringCamp()).isHoldsToOpen).toBe(false);
   });
 });

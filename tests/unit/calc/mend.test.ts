@@ -4,7 +4,18 @@ import { designAnalysisRequest, evaluateCamp, planProblems, spotKey } from "@/li
 import { mendTieOut, pitchMends, quickMends } from "@/lib/calc/mend";
 import { buildShelter, defaultShelterSpec } from "@/lib/calc/shelter-kinds";
 import type { AnchorSpec, CampInput, Mend, PitchedShelter, Placement } from "@/lib/calc/types";
-import { BLADE, campOf, LOAM, pitchOf, placementOf, SHORT_HOOK, tieOutIds, trayOf, WIND } from "./camp-fixtures";
+import {
+  analysisOf,
+  BLADE,
+  campOf,
+  LOAM,
+  pitchOf,
+  placementOf,
+  SHORT_HOOK,
+  tieOutIds,
+  trayOf,
+  WIND,
+} from "./camp-fixtures";
 
 const IDS = tieOutIds("pyramid");
 const WEAK = IDS[1] ?? "";
@@ -199,5 +210,92 @@ describe("what would mend it by pitching otherwise", () => {
     expect(all.filter((mend) => mend.pitchChange !== null).length).toBe(mends.length);
     const enough = all.filter((mend) => mend.margin >= 1).length;
     expect(all.slice(0, enough).every((mend) => mend.margin >= 1)).toBe(true);
+  });
+});
+
+describe("what is offered depends on what is there", () => {
+  const kindsOf = (of: CampInput) => new Set(quickMends(of, SPOT).map((mend) => mend.kind));
+  const withHere = (more: Partial<Placement>): CampInput => ({
+    ...camp,
+    placements: camp.placements.map((one) => (one.tieOutId === WEAK ? { ...one, ...more } : one)),
+  });
+
+  it("no rock where there are none or one lies there, no cord where one is, no third stake in line", () => {
+    expect(kindsOf({ ...camp, rocksAvailable: false }).has("rock")).toBe(false);
+    expect(kindsOf(withHere({ rockKg: 10 })).has("rock")).toBe(false);
+    expect(kindsOf(withHere({ shockCord: true })).has("shock-cord")).toBe(false);
+    expect(kindsOf({ ...camp, strongWindHours: null }).has("shock-cord")).toBe(false);
+    const doubled = withHere({ tandem: { anchorId: "hook", spacingM: 0.15 } });
+    expect(kindsOf(doubled).has("tandem")).toBe(false);
+    expect(quickMends(doubled, SPOT).every((mend) => !mend.title.startsWith("Exchange"))).toBe(true);
+  });
+
+  it("a stake already at its best lean is not driven again, one that stands out is driven home", () => {
+    const driven = withHere({
+      leanDeg: quickMends(camp, SPOT).find((mend) => mend.kind === "best-lean")?.placements[0]?.leanDeg ?? NaN,
+      depthOutM: 0,
+    });
+    expect(kindsOf(driven).has("best-lean")).toBe(false);
+    const lean = (of: CampInput) => quickMends(of, SPOT).find((mend) => mend.kind === "best-lean");
+    expect(lean(camp)?.title).toMatch(/^Drive it home /);
+    expect(lean(camp)?.detail).toBe("30\u2009mm stand out now");
+    expect(lean(withHere({ depthOutM: 0, leanDeg: 60 }))?.detail).toBe("now leaning 60° away from the pull");
+    expect(lean(withHere({ depthOutM: 0, leanDeg: -10 }))?.detail).toBe("now leaning 10° towards the pull");
+  });
+
+  it("from the second patch back to the main ground, with the leans that suit it", () => {
+    const on = { ...camp, ground: { ...LOAM, kind: "hard-trodden-loam" as const }, secondGround: LOAM };
+    const second = { ...on, shelters: on.shelters.map((pitch) => ({ ...pitch, patch: "second" as const })) };
+    const mend = quickMends(second, SPOT).find((one) => one.kind === "other-patch");
+    expect(mend?.title).toBe("Move the shelter to the main ground");
+    expect(mend?.pitchChange).toEqual({ patch: "main" });
+    expect(mend?.placements.every((one) => one.leanDeg !== -10)).toBe(true);
+  });
+
+  it("what can't be driven is replaced by what can lie there", () => {
+    const rock = {
+      ...camp,
+      ground: { ...LOAM, kind: "rock-slab" as const },
+      secondGround: null,
+      tray: [...tray, trayOf("bag", { class: "surface-weight", massKg: 30 }, 1, 0, true)],
+    };
+    const offers = quickMends(rock, SPOT);
+    expect(offers.map((mend) => mend.kind)).toEqual(["weight-or-deadman"]);
+    expect(offers[0]?.title).toBe("Hold it with the anchor bag");
+    expect(offers[0]?.detail).toBe("found at the camp");
+  });
+
+  it("names the shelter when another one's anchor is taken", () => {
+    const both = {
+      ...camp,
+      shelters: [...camp.shelters, pitchOf("b", "diamond", [5])],
+      tray: [...tray, trayOf("peg", BLADE, 10)],
+      placements: [
+        ...camp.placements.map((one) => ({ ...one, anchorId: "hook" })),
+        ...tieOutIds("diamond").map((id) => placementOf("b", id, "peg")),
+      ],
+    };
+    const exchange = quickMends(both, SPOT).find((mend) => mend.title.startsWith("Exchange"));
+    expect(exchange?.title).toMatch(/^Exchange with tie-out \d+ of Shelter b: anchor peg$/);
+  });
+});
+
+describe("pitching otherwise where little can be changed", () => {
+  it("does not lengthen a pegged loop, and has no height to lower where none is chosen at the pitch", () => {
+    const spec = defaultShelterSpec("tunnel");
+    const model = buildShelter(spec);
+    const hem = model.tieOuts.find((tieOut) => tieOut.lineLengthM < 0.2);
+    const pitch: PitchedShelter = { pitchId: "a", name: "Tunnel", spec, headingDeg: 0, patch: "main", analysis: null };
+    const open = campOf({
+      wind: { ...WIND, fromDeg: null, toDeg: null },
+      shelters: [pitch],
+      tray: [trayOf("blade", BLADE, 30)],
+      placements: model.tieOuts.map((tieOut) => placementOf("a", tieOut.id, "blade")),
+    });
+    const calm = { ...pitch, analysis: analysisOf("tunnel", [40]) };
+    const never = () => {
+      throw new Error("nothing to analyse");
+    };
+    expect(pitchMends({ ...open, shelters: [calm] }, { pitchId: "a", tieOutId: hem?.id ?? "" }, never)).toEqual([]);
   });
 });
