@@ -1,6 +1,5 @@
 import type { ReactElement } from "react";
 import { View } from "@react-pdf/renderer";
-import type { ShelterResult } from "@/lib/calc/types";
 import type { PitchView } from "@/lib/domain/views";
 import { formatWindRange } from "@/lib/format/angles";
 import { formatAltitude } from "@/lib/format/lengths";
@@ -20,9 +19,9 @@ import {
   type PageFrameProps,
 } from "../sections/page-frame";
 import { StateIcon } from "../sections/marks";
-import { stateLegend, tieOutTable } from "../sections/tie-out-table";
+import { tieOutTable } from "../sections/tie-out-table";
 import { weakestTable } from "../sections/weakest-table";
-import { GREY, TYPE } from "../theme";
+import { TYPE } from "../theme";
 import {
   campHeadline,
   facingWords,
@@ -33,7 +32,8 @@ import {
   lowerFirst,
   nightWords,
 } from "../words";
-import { drawingOf, rowsOf, type CardContext } from "./pitch-card";
+import { planGrid, resultOf } from "./camp-plans";
+import { rowsOf, type CardContext } from "./pitch-card";
 
 type Keeping = Block & { readonly keepsWithNext?: boolean };
 
@@ -166,62 +166,6 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
     ),
     spacer(8),
     hairline(),
-  ]);
-}
-
-const PLAN_HEADING = 37;
-const LOWEST_PLAN = 118;
-const HIGHEST_PLAN = 250;
-const OTHER_PLAN = 170;
-
-/** All shelters at a glance, as large as lets the first page hold them, and the weakest tie-outs with them if it can. */
-function planGrid(context: CardContext, room: number, weakestHeight: number): Keeping[] {
-  const { camp, sheet } = context;
-  const count = camp.pitches.length;
-  if (count === 0) return [];
-  const across = count === 1 ? 1 : count === 2 || count === 4 ? 2 : 3;
-  const width = (sheet.inner - GAP * (across - 1)) / across;
-  const legend = stack([spacer(2), stateLegend()]);
-  const heights = [room - weakestHeight, room].map(
-    (space) => (space - legend.height) / Math.ceil(count / across) - PLAN_HEADING,
-  );
-  const height = Math.min(HIGHEST_PLAN, heights.find((one) => one >= LOWEST_PLAN) ?? OTHER_PLAN);
-  const rows: Keeping[] = [];
-  for (let i = 0; i < count; i += across) {
-    rows.push(
-      stack([
-        spacer(8),
-        columns(
-          camp.pitches
-            .slice(i, i + across)
-            .map((pitch) => ({ width, block: smallPlan(context, pitch, width, height) })),
-          GAP,
-        ),
-      ]),
-    );
-  }
-  return [...rows, legend];
-}
-
-const resultOf = (context: CardContext, pitch: PitchView): ShelterResult | undefined =>
-  context.camp.result.shelters.find((one) => one.pitchId === pitch.id);
-
-function smallPlan(context: CardContext, pitch: PitchView, width: number, height: number): Block {
-  const result = resultOf(context, pitch);
-  const holdsTo = holdsToWords(
-    result ?? { holdsToGustMs: null, gaps: [], verdict: "unknown" },
-    null,
-    context.preferences.speedUnit,
-  );
-  return stack([
-    textBlock(pitch.name, width, { size: TYPE.strong, weight: 800 }),
-    textBlock(
-      [facingWords(pitch), holdsTo.value === "unknown" ? "not known yet" : `holds to ${holdsTo.value}`].join(" · "),
-      width,
-      { size: TYPE.small, color: GREY },
-    ),
-    spacer(3),
-    drawingOf(context, pitch, result, width, height, "small"),
   ]);
 }
 

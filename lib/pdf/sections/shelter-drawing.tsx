@@ -1,18 +1,18 @@
-import { Circle, G, Line, Path, Polygon, Svg, Text } from "@react-pdf/renderer";
+import { Circle, G, Polygon, Svg } from "@react-pdf/renderer";
 import { buildShelter } from "@/lib/calc/shelter-kinds";
 import type { AnchorSpec, ShelterModel, ShelterSpec, Verdict } from "@/lib/calc/types";
 import { anchorMark } from "@/lib/domain/drawing/anchor-marks";
 import { composePlan, type ComposedPlan } from "@/lib/domain/drawing/compose-plan";
 import type { LabelSizes, PlacedTieOut } from "@/lib/domain/drawing/label-layout";
-import { bearingBetween, polar, type Point } from "@/lib/domain/drawing/path";
-import { planView, sleeperShape, type PlanView } from "@/lib/domain/drawing/plan-view";
+import { bearingBetween, type Point } from "@/lib/domain/drawing/path";
+import { planView, type PlanView } from "@/lib/domain/drawing/plan-view";
 import { STATE_MARKS } from "@/lib/domain/drawing/state-marks";
 import type { PitchView } from "@/lib/domain/views";
-import { FONT_STACK, type FontWeight } from "../fonts";
-import { printable } from "../glyphs";
-import { GREY, HAIR, INK, PALE } from "../theme";
+import { INK, PALE } from "../theme";
 import { spacer, type Block } from "./block";
+import { Label, North, ScaleBarMark, Segment, Wind } from "./drawing-furniture";
 import { PlacedMark, turnOfMark } from "./marks";
+import { Initials, Sleepers } from "./sleepers-drawing";
 
 export interface DrawnTieOut {
   readonly anchor: AnchorSpec | null;
@@ -101,29 +101,6 @@ export function shelterDrawing(input: ShelterDrawingInput): Block {
   };
 }
 
-function Label({
-  at,
-  size,
-  weight = 400,
-  children,
-}: {
-  at: Point;
-  size: number;
-  weight?: FontWeight;
-  children: string;
-}) {
-  return (
-    <Text
-      x={at[0]}
-      y={at[1] + size * 0.35}
-      textAnchor="middle"
-      style={{ fontFamily: FONT_STACK, fontSize: size, fontWeight: weight }}
-    >
-      {children}
-    </Text>
-  );
-}
-
 const pointsOf = (points: readonly Point[]) => points.map(([x, y]) => `${x},${y}`).join(" ");
 
 function Fabric({
@@ -159,73 +136,6 @@ function Fabric({
   );
 }
 
-function Segment({ from, to, width, color }: { from: Point; to: Point; width: number; color: string }) {
-  return <Line x1={from[0]} y1={from[1]} x2={to[0]} y2={to[1]} stroke={color} strokeWidth={width} />;
-}
-
-/** "Rosa Amsel" → "RA"; a single name gives its first letter. */
-export function initialsOf(name: string): string {
-  const words = printable(name)
-    .split(/[\s-]+/)
-    .filter((word) => /\p{L}/u.test(word));
-  const first = words[0]?.match(/\p{L}/u)?.[0] ?? "";
-  const last = words.length > 1 ? (words[words.length - 1]?.match(/\p{L}/u)?.[0] ?? "") : "";
-  return (first + last).toUpperCase();
-}
-
-const INITIALS_SIZE = 9;
-const ROOM_FOR_INITIALS = 14;
-
-function Sleepers({
-  view,
-  plan,
-  isFull,
-  names,
-}: {
-  view: PlanView;
-  plan: ComposedPlan;
-  isFull: boolean;
-  names: readonly string[];
-}) {
-  const drawn = names.length > 0 ? view.sleepers.slice(0, names.length) : view.sleepers;
-  return drawn.map((sleeper, index) => {
-    const name = names[index];
-    const shape = sleeperShape(sleeper, plan.fit);
-    const stroke = name === undefined ? HAIR : GREY;
-    return (
-      <G key={index}>
-        <Path d={shape.body} fill="#ffffff" stroke={stroke} strokeWidth={isFull ? 0.9 : 0.6} />
-        <Circle
-          cx={shape.headCentre[0]}
-          cy={shape.headCentre[1]}
-          r={shape.headRadius}
-          fill="none"
-          stroke={stroke}
-          strokeWidth={isFull ? 0.9 : 0.6}
-        />
-      </G>
-    );
-  });
-}
-
-/** Over the ridge, on white, so that they can be read. */
-function Initials({ view, plan, names }: { view: PlanView; plan: ComposedPlan; names: readonly string[] }) {
-  return view.sleepers.map((sleeper, index) => {
-    const name = names[index];
-    if (name === undefined || sleeper.widthM * plan.fit.scale < ROOM_FOR_INITIALS) return null;
-    const toFeet = sleeper.lengthM * plan.fit.scale * 0.12;
-    const at = polar(plan.fit.place(sleeper.centre), toFeet, sleeper.bearingDeg + 180);
-    return (
-      <G key={index}>
-        <Circle cx={at[0]} cy={at[1]} r={INITIALS_SIZE * 0.72} fill="#ffffff" stroke="none" />
-        <Label at={at} size={INITIALS_SIZE} weight={600}>
-          {initialsOf(name)}
-        </Label>
-      </G>
-    );
-  });
-}
-
 function TieOutLine({ placed }: { placed: PlacedTieOut }) {
   return <Segment from={placed.from} to={placed.anchor} width={0.9} color={INK} />;
 }
@@ -257,61 +167,6 @@ function TieOutMarks({ placed, drawn, sizes }: { placed: PlacedTieOut; drawn: Dr
       <PlacedMark paths={STATE_MARKS[drawn.verdict].paths} centre={state} size={sizes.stateRadius * 2.35} />
       <Label at={number} size={sizes.numberSize} weight={800}>
         {String(placed.tie.tieOut.number)}
-      </Label>
-    </G>
-  );
-}
-
-function Wind({ plan, isFull }: { plan: ComposedPlan; isFull: boolean }) {
-  if (plan.wind === null) return null;
-  return (
-    <G>
-      <Path d={plan.wind.arc} fill="none" stroke={INK} strokeWidth={isFull ? 1.2 : 0.8} />
-      {plan.wind.arrows.map((arrow, index) => (
-        <Path key={index} d={arrow.d} fill="none" stroke={INK} strokeWidth={isFull ? 1.5 : 1} />
-      ))}
-    </G>
-  );
-}
-
-function North({ at, radius, upDeg }: { at: Point; radius: number; upDeg: number }) {
-  const disc = radius * 0.66;
-  const centre: Point = [at[0], at[1] + radius * 0.34];
-  const tip = polar(centre, disc * 0.72, -upDeg);
-  const tail = polar(centre, disc * 0.72, 180 - upDeg);
-  const left = polar(tip, disc * 0.45, 180 - upDeg - 35);
-  const right = polar(tip, disc * 0.45, 180 - upDeg + 35);
-  return (
-    <G>
-      <Circle cx={centre[0]} cy={centre[1]} r={disc} fill="#ffffff" stroke={INK} strokeWidth={0.8} />
-      <Path
-        d={`M${tail.join(" ")}L${tip.join(" ")}M${left.join(" ")}L${tip.join(" ")}L${right.join(" ")}`}
-        fill="none"
-        stroke={INK}
-        strokeWidth={1.2}
-      />
-      <Label at={[at[0], centre[1] - disc - 6]} size={9} weight={800}>
-        N
-      </Label>
-    </G>
-  );
-}
-
-function ScaleBarMark({ plan }: { plan: ComposedPlan }) {
-  if (plan.scaleBar === null) return null;
-  const { left, y, length, lengthM } = plan.scaleBar;
-  const right = left + length;
-  const middle = left + length / 2;
-  return (
-    <G>
-      <Path
-        d={`M${left} ${y - 4}V${y + 4}M${left} ${y}H${right}M${right} ${y - 4}V${y + 4}M${middle} ${y - 2}V${y + 2}`}
-        fill="none"
-        stroke={INK}
-        strokeWidth={0.8}
-      />
-      <Label at={[middle, y - 8]} size={9}>
-        {`${lengthM}\u2009m`}
       </Label>
     </G>
   );

@@ -1,6 +1,48 @@
+import { readFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
 import { hasGlyph, printable } from "@/lib/pdf/glyphs";
 import { layLines, textWidth } from "@/lib/pdf/measure";
+import { unpackWoff } from "@/lib/pdf/woff";
+
+/** Code points of a font's format 4 character map (OpenType, table `cmap`). */
+function codePointsOf(font: Buffer): number[] {
+  const entry = Array.from({ length: font.readUInt16BE(4) }, (_, i) => 12 + i * 16).find(
+    (at) => font.toString("latin1", at, at + 4) === "cmap",
+  );
+  if (entry === undefined) throw new Error("The font has no character map.");
+  const table = font.readUInt32BE(entry + 8);
+  const found = new Set<number>();
+  for (let i = 0; i < font.readUInt16BE(table + 2); i += 1) {
+    const map = table + font.readUInt32BE(table + 4 + i * 8 + 4);
+    if (font.readUInt16BE(map) !== 4) continue;
+    const segments = font.readUInt16BE(map + 6) / 2;
+    for (let segment = 0; segment < segments; segment += 1) {
+      const end = font.readUInt16BE(map + 14 + segment * 2);
+      const start = font.readUInt16BE(map + 16 + segments * 2 + segment * 2);
+      for (let code = start; code <= end && code < 0xffff; code += 1) found.add(code);
+    }
+  }
+  return [...found];
+}
+
+test.each([400, 600, 800])("what is taken for covered is in the font files of weight %i", (weight) => {
+  const inFonts = new Set(
+    ["latin", "latin-ext", "cyrillic", "cyrillic-ext", "vietnamese"].flatMap((subset) =>
+      codePointsOf(
+        unpackWoff(
+          readFileSync(`node_modules/@fontsource/nunito-sans/files/nunito-sans-${subset}-${weight}-normal.woff`),
+        ),
+      ),
+    ),
+  );
+  const missing: string[] = [];
+  for (let code = 0x20; code < 0x3000; code += 1) {
+    const character = String.fromCodePoint(code);
+    if (hasGlyph(character) && !inFonts.has(code)) missing.push(`${character} U+${code.toString(16)}`);
+  }
+  expect(inFonts.size).toBeGreaterThan(800);
+  expect(missing).toEqual([]);
+});
 
 describe("printable", () => {
   test.each([
