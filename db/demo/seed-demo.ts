@@ -49,23 +49,25 @@ function chooseStartDate(): string {
   return week.find((day) => new Date(`${day}T00:00:00Z`).getUTCDay() === 5) ?? inSixWeeks;
 }
 
-/** On the worst night somebody has put a weak stake where the strongest was: it gives way, and it can be mended. */
+/** On the worst night somebody has put the lightest stake where a wide one was: it gives way, and it can be mended. */
 function weakenOne(
   input: CampInput,
   tray: readonly TrayAnchor[],
   placements: readonly Placement[],
 ): readonly Placement[] {
   const { shelters, left } = evaluateCamp({ ...input, placements });
-  const weakId = tray.find((anchor) => anchor.name.startsWith("V") && (left[anchor.id] ?? 0) > 0)?.id;
+  const [lightest] = tray
+    .filter((anchor) => !anchor.found && (left[anchor.id] ?? 0) > 0)
+    .sort((a, b) => a.massKg - b.massKg);
   const isWide = (id: string) => tray.some((anchor) => anchor.id === id && anchor.name.startsWith("Wide"));
-  const target = shelters
+  const [target] = shelters
     .flatMap((shelter) => shelter.tieOuts)
     .filter((one) => one.placement && isWide(one.placement.anchorId))
-    .sort((a, b) => (b.priority ?? 0) - (a.priority ?? 0))[0];
-  if (!weakId || !target) return placements;
+    .sort((a, b) => (b.priority ?? 0) - (a.priority ?? 0));
+  if (!lightest || !target) throw new Error("The demo's worst night has no stake to spare.");
   return placements.map((one) =>
     one.pitchId === target.pitchId && one.tieOutId === target.tieOutId
-      ? { ...one, anchorId: weakId, leanDeg: 0, tandem: null, rockKg: 0 }
+      ? { ...one, anchorId: lightest.id, leanDeg: 0, tandem: null, rockKg: 0 }
       : one,
   );
 }

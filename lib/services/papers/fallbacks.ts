@@ -8,10 +8,12 @@ import type { WorkedCamp } from "../analysis/work-out-camp";
 const TIE_OUTS = 3;
 const STEPS = 2;
 
-const steps = new WeakMap<
-  WorkedCamp,
-  Readonly<Record<string, readonly { number: number; mends: readonly Step[] }[]>>
->();
+const known = new WeakMap<WorkedCamp, Promise<readonly PitchSteps[]>>();
+
+interface PitchSteps {
+  readonly pitchId: string;
+  readonly tieOuts: readonly { readonly number: number; readonly mends: readonly Step[] }[];
+}
 
 interface Step {
   readonly title: string;
@@ -26,29 +28,38 @@ function listWeakest(tieOuts: readonly TieOutResult[]): TieOutResult[] {
     .slice(0, TIE_OUTS);
 }
 
-function findSteps(worked: WorkedCamp) {
-  const known = steps.get(worked);
-  if (known) return known;
-  const found = Object.fromEntries(
-    worked.result.shelters.map((shelter) => [
-      shelter.pitchId,
-      listWeakest(shelter.tieOuts).flatMap((one) => {
-        const mends = quickMends(worked.input, { pitchId: shelter.pitchId, tieOutId: one.tieOutId });
-        return mends.length === 0 ? [] : [{ number: one.number, mends: mends.slice(0, STEPS) }];
-      }),
-    ]),
-  );
-  steps.set(worked, found);
-  return found;
+/** Other requests get their turn between two searches: a trip's booklet needs dozens. */
+const takeTurns = () => new Promise<void>((resolve) => setImmediate(resolve));
+
+async function searchSteps({ input, result }: WorkedCamp): Promise<readonly PitchSteps[]> {
+  const pitches: PitchSteps[] = [];
+  for (const { pitchId, tieOuts } of result.shelters) {
+    const found: { number: number; mends: readonly Step[] }[] = [];
+    for (const { tieOutId, number } of listWeakest(tieOuts)) {
+      const mends = quickMends(input, { pitchId, tieOutId });
+      if (mends.length > 0) found.push({ number, mends: mends.slice(0, STEPS) });
+      await takeTurns();
+    }
+    pitches.push({ pitchId, tieOuts: found });
+  }
+  return pitches;
+}
+
+function findSteps(worked: WorkedCamp): Promise<readonly PitchSteps[]> {
+  const before = known.get(worked);
+  if (before) return before;
+  const search = searchSteps(worked);
+  known.set(worked, search);
+  return search;
 }
 
 /** What to do first when the ground is softer or the wind stronger than planned, per pitch, in order. */
-export function listFallbacks(
+export async function listFallbacks(
   worked: WorkedCamp,
   unit: Preferences["speedUnit"],
-): Readonly<Record<string, readonly string[]>> {
+): Promise<Readonly<Record<string, readonly string[]>>> {
   return Object.fromEntries(
-    Object.entries(findSteps(worked)).map(([pitchId, tieOuts]) => [
+    (await findSteps(worked)).map(({ pitchId, tieOuts }) => [
       pitchId,
       tieOuts.map(({ number, mends }) => {
         const words = mends.map((mend) => `${mend.title} (to ${formatHoldsTo(mend.holdsToGustMs, unit)})`);

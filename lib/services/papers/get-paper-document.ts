@@ -55,7 +55,7 @@ async function toPaperCamp({ state, speedUnit }: Desk, own: CampState, pitchId: 
   const isWanted = (id: string) => pitchId === null || id === pitchId;
   const names = new Map(state.people.map((one) => [one.id, one.name]));
   const pitches = worked.pitches.filter((one) => isWanted(one.id));
-  const fallbacks = listFallbacks(worked, speedUnit);
+  const fallbacks = await listFallbacks(worked, speedUnit);
   return {
     camp: own.camp,
     nightNumbers: numberNights(state, own),
