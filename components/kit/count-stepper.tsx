@@ -104,7 +104,7 @@ export function CountStepper({
       </div>
       <p
         role="status"
-        className={`min-h-4.5 max-w-56 text-13 ${isRefused ? "font-semibold text-rowan" : "text-pencil"}`}
+        className={`max-w-56 text-13 ${status === "" ? "sr-only" : ""} ${isRefused ? "font-semibold text-rowan" : "text-pencil"}`}
       >
         {status}
       </p>

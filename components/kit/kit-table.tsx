@@ -26,11 +26,17 @@ export function KitTable({ caption, items, renderCount, renderActions, hrefOf }:
             <span className="sr-only">Section</span>
           </th>
           <th scope="col">What</th>
-          <th scope="col">Each</th>
-          <th scope="col">Count</th>
-          <th scope="col">Together</th>
+          <th scope="col" className="w-24">
+            Each
+          </th>
+          <th scope="col" className="w-44">
+            Count
+          </th>
+          <th scope="col" className="w-28">
+            Together
+          </th>
           {renderActions && (
-            <th scope="col">
+            <th scope="col" className="w-24">
               <span className="sr-only">Actions</span>
             </th>
           )}

@@ -2,6 +2,7 @@
 
 import { useState } from "react";
 import { ActionForm, SubmitButton, useFieldErrors, type FormAction } from "@/components/ui/action-form";
+import { Chevron } from "@/components/forms/chevron";
 import { FieldError } from "@/components/ui/fields";
 import type { CarryPlanView } from "@/lib/domain/views";
 import { formatMass } from "@/lib/format/masses";
@@ -65,14 +66,14 @@ export function CarryForm({
       <input type="hidden" name="tripId" value={tripId} />
       <input type="hidden" name="carries:json" value={JSON.stringify(toCarries(loads))} />
       <CarryErrors />
-      <ul aria-label="Loads" className="mb-6 grid gap-x-10 gap-y-2 sm:grid-cols-2">
+      <ul aria-label="Loads" className="mb-6 grid gap-x-10 gap-y-3 sm:grid-cols-2">
         {plan.people.map((person) => {
           const massKg = massOf(person.id);
           return (
             <li key={person.id} className="grid grid-cols-[minmax(0,1fr)_auto] items-baseline gap-x-3 text-15">
               <span className="truncate">{person.name}</span>
               <span className="font-semibold">{formatMass(massKg)}</span>
-              <span aria-hidden="true" className="col-span-2 h-1.5 bg-hair">
+              <span aria-hidden="true" className="col-span-2 mt-1 h-1 bg-hair">
                 <span className="block h-full bg-ink" style={{ width: `${(massKg / heaviest) * 100}%` }} />
               </span>
             </li>
@@ -113,8 +114,11 @@ export function CarryForm({
           const left = item.count - Object.values(byPerson).reduce((sum, count) => sum + count, 0);
           return (
             <li key={item.id} className="border-t border-hair">
-              <details>
-                <summary className="flex min-h-12 flex-wrap items-center gap-x-3 py-1.5 text-15">
+              <details className="group">
+                <summary className="flex min-h-12 list-none flex-wrap items-center gap-x-3 py-1.5 text-15 [&::-webkit-details-marker]:hidden">
+                  <span className="text-spruce">
+                    <Chevron />
+                  </span>
                   <span className="font-semibold">
                     {item.count} × {item.name}
                   </span>

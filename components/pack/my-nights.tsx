@@ -21,7 +21,7 @@ export function MyNights({
       {nights.map((night) => (
         <li
           key={night.day}
-          className="grid gap-x-6 gap-y-1 border-t border-hair py-3.5 sm:grid-cols-[9rem_minmax(0,1fr)_minmax(0,1.2fr)_auto] sm:items-baseline"
+          className="grid gap-x-6 gap-y-1 border-t border-hair py-3.5 first:border-t-0 sm:grid-cols-[9rem_minmax(0,1fr)_minmax(0,1.2fr)_auto] sm:items-baseline"
         >
           <p className="text-15 font-bold">{formatDay(night.day)}</p>
           <p className="text-15 font-semibold">{night.campName}</p>

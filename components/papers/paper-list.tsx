@@ -59,12 +59,13 @@ export function PaperList({
                   label="Field card"
                   of={camp.name}
                 />
+                {camp.pitches.length > 0 && <span className="py-2.5 text-pencil">Pitch cards</span>}
                 {camp.pitches.map((pitch) => (
                   <PaperLink
                     key={pitch.id}
                     href={paperHref(tripId, { paper: "pitch-card", campId: camp.id, pitchId: pitch.id }, size)}
-                    label={`Pitch card, ${pitch.name}`}
-                    of={camp.name}
+                    label={pitch.name}
+                    of={`pitch card, ${camp.name}`}
                   />
                 ))}
               </div>

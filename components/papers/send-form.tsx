@@ -129,7 +129,7 @@ function TickList({
       <legend className="text-15 font-semibold">{legend}</legend>
       <input type="hidden" name={`${name}:json`} value={JSON.stringify(chosen)} />
       {hasAll && (
-        <div className="flex gap-2">
+        <div className="-ml-4 flex gap-1">
           <Button look="quiet" onClick={() => onChange(options.map((option) => option.key))}>
             Everybody
           </Button>

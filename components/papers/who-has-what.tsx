@@ -17,7 +17,10 @@ export function WhoHasWhat({
       {people.map((person) => {
         const last = messages.find((message) => message.toAddress === person.email && message.files.length > 0);
         return (
-          <li key={person.id} className="grid gap-x-6 border-t border-hair py-2.5 sm:grid-cols-[12rem_minmax(0,1fr)]">
+          <li
+            key={person.id}
+            className="grid gap-x-6 border-t border-hair py-2.5 first:border-t-0 sm:grid-cols-[12rem_minmax(0,1fr)]"
+          >
             <p className="text-15 font-semibold">{person.name}</p>
             <p className="text-15">
               {last ? (

@@ -34,7 +34,7 @@ export function PersonRow({ tripId, person, roleName, roles, actions }: PersonRo
   const isOpen = person.state !== "joined";
   return (
     <li className="border-t border-hair py-4">
-      <div className="grid items-center gap-x-6 gap-y-2 sm:grid-cols-[minmax(0,1fr)_11rem_auto]">
+      <div className="grid items-center gap-x-6 gap-y-2 sm:grid-cols-[minmax(0,1fr)_12rem] lg:grid-cols-[minmax(0,1fr)_12rem_21rem]">
         <div className="min-w-0">
           <p className="text-15 font-bold">
             {person.name}
@@ -47,7 +47,7 @@ export function PersonRow({ tripId, person, roleName, roles, actions }: PersonRo
           <p className={`text-13 ${isOpen ? "font-semibold text-ember" : "text-pencil"}`}>{STATES[person.state]}</p>
         </div>
         {actions && (
-          <div className="flex flex-wrap gap-1 sm:justify-end">
+          <div className="-ml-4 flex flex-wrap gap-1 sm:col-span-2 lg:col-span-1 lg:ml-0 lg:justify-end">
             {isOpen && (
               <ActionForm action={actions.invite}>
                 <input type="hidden" name="tripId" value={tripId} />

@@ -1,5 +1,6 @@
 "use client";
 
+import { Chevron } from "@/components/forms/chevron";
 import { NumberField } from "@/components/ui/fields";
 import { lengthInUnit } from "@/components/forms/place/lengths";
 import type { ShelterModel } from "@/lib/calc/types";
@@ -25,8 +26,9 @@ export function LineLengthFields({
   const withLine = model.tieOuts.filter((tie) => tie.lineLengthM > 0);
   if (withLine.length === 0) return null;
   return (
-    <details className="mt-5">
-      <summary className="flex min-h-11 items-center font-semibold text-spruce">
+    <details className="group mt-5">
+      <summary className="flex min-h-11 list-none items-center gap-2 font-semibold text-spruce [&::-webkit-details-marker]:hidden">
+        <Chevron />
         Length of each line ({withLine.length})
       </summary>
       <p className="mb-4 text-13 text-pencil">

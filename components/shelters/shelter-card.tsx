@@ -39,7 +39,7 @@ export function ShelterCard({
           .join(" · ")}
       </p>
       {note && <p className="text-13 text-pencil">{note}</p>}
-      {children && <div className="mt-1 flex flex-wrap gap-1">{children}</div>}
+      {children && <div className="mt-1 -ml-4 flex flex-wrap gap-1">{children}</div>}
     </div>
   );
 }

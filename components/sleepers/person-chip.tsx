@@ -35,7 +35,7 @@ export function PersonChip({ personId, name, placeId, places, isPicked, onPick, 
         type="button"
         aria-pressed={isPicked}
         onClick={() => onPick(personId)}
-        className="min-h-11 min-w-0 flex-1 py-2 text-left text-15 font-semibold"
+        className="min-h-11 min-w-0 flex-1 basis-24 py-2 text-left text-15 font-semibold"
       >
         {name}
       </button>
@@ -43,7 +43,7 @@ export function PersonChip({ personId, name, placeId, places, isPicked, onPick, 
         aria-label={`Where ${name} sleeps`}
         value={placeId}
         onChange={(event) => onMove(personId, event.target.value)}
-        className="min-h-11 max-w-full min-w-0 flex-1 basis-28 rounded-field bg-transparent px-2 text-13 text-pencil"
+        className="min-h-11 w-26 min-w-0 shrink-0 rounded-field bg-transparent px-2 text-13 text-pencil"
       >
         {places.map((place) => (
           <option key={place.id} value={place.id}>

@@ -33,7 +33,7 @@ export function SleepingPlace({
     <section
       ref={setNodeRef}
       aria-labelledby={headingId}
-      className={`min-w-0 border-t-2 pt-3 pb-4 ${isOver ? (isFull ? "border-rowan bg-rowan-wash" : "border-spruce bg-spruce-wash") : "border-hair"}`}
+      className={`min-w-0 border-t-2 pt-3 pb-4 ${place.places === null ? "col-span-full" : ""} ${isOver ? (isFull ? "border-rowan bg-rowan-wash" : "border-spruce bg-spruce-wash") : "border-hair"}`}
     >
       <div className="mb-3 flex flex-wrap items-baseline justify-between gap-x-3">
         <h3 id={headingId} className="text-15 font-bold">
@@ -47,12 +47,18 @@ export function SleepingPlace({
       </div>
       {drawing}
       {pickedName && !isFull && (
-        <Button className="mb-3 w-full" onClick={onPlaceHere}>
+        <Button className={place.places === null ? "mb-3" : "mb-3 w-full"} onClick={onPlaceHere}>
           Put {pickedName} here
         </Button>
       )}
       {taken === 0 && <p className="text-13 text-pencil">{emptyText}</p>}
-      <ul className="flex flex-col gap-2">{children}</ul>
+      <ul
+        className={
+          place.places === null ? "grid gap-2 sm:grid-cols-2 sm:gap-x-8 xl:grid-cols-3" : "flex flex-col gap-2"
+        }
+      >
+        {children}
+      </ul>
     </section>
   );
 }

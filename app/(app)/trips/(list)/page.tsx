@@ -50,7 +50,10 @@ function TripRow({ trip }: { readonly trip: TripListItem }) {
         href={`/trips/${trip.id}`}
         className="group grid gap-x-6 gap-y-1 py-4 sm:grid-cols-[10rem_minmax(0,1fr)_8rem] sm:items-baseline"
       >
-        <span className="text-15 text-pencil">{formatDayRange(trip.startDate, trip.endDate)}</span>
+        <span className="text-15 text-pencil">
+          {formatDayRange(trip.startDate, trip.endDate)}
+          <span className="block text-13">{trip.startDate.slice(0, 4)}</span>
+        </span>
         <span className="min-w-0">
           <span className="block text-18 font-bold group-hover:text-spruce group-hover:underline">{trip.name}</span>
           <span className="block text-15 text-pencil">
