@@ -106,7 +106,7 @@ const cache = new Map<string, unknown>();
 
 export const env: Env = new Proxy({} as Env, {
   get(_, name) {
-    if (typeof name !== "string" || !(name in FIELDS)) return undefined;
+    if (typeof name !== "string" || !Object.hasOwn(FIELDS, name)) return undefined;
     if (cache.has(name)) return cache.get(name);
     const result = read(name as keyof Fields);
     if ("problem" in result) throw new EnvError([result.problem]);
