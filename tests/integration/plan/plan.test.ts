@@ -271,7 +271,7 @@ describe("a proposal", () => {
       "tree",
     ]);
     const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, plan.placements);
-    const { placements } = proposePlan(input, { allowFound: true, allowDoubling: true });
+    const placements = [...proposePlan(input, { allowFound: true, allowDoubling: true }).placements];
     const saved = await save(ctx, [intent(0, { type: "replace", placements })]);
     expect(saved.outcomes[0]?.outcome).toBe("applied");
     const { version, details } = plan.camp;

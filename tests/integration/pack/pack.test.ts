@@ -1,0 +1,131 @@
+import { beforeAll, describe, expect, it } from "vitest";
+import { makeCast } from "../../helpers/actors";
+import { makeCampKit } from "../../helpers/camp-kit";
+import { codeOf, refusalOf } from "../../helpers/refusals";
+import { assignCarry } from "@/lib/services/pack/assign-carry";
+import { getCarryPlan } from "@/lib/services/pack/get-carry-plan";
+import { getPackList } from "@/lib/services/pack/get-pack-list";
+import { listPackItems } from "@/lib/services/pack/list-pack-items";
+import { savePackItems } from "@/lib/services/pack/save-pack-items";
+import { shareOutEvenly } from "@/lib/services/pack/share-out-evenly";
+import { tickPackItem } from "@/lib/services/pack/tick-pack-item";
+import { saveSleepers } from "@/lib/services/sleepers/save-sleepers";
+
+let cast: Awaited<ReturnType<typeof makeCast>>;
+let kit: Awaited<ReturnType<typeof makeCampKit>>;
+const one = <Input extends object>(input: Input) => ({ tripId: cast.tripId, ...input });
+const line = (name: string, more = {}) => ({ id: null, name, isGroupThing: false, massKg: null, ...more });
+
+beforeAll(async () => {
+  cast = await makeCast();
+  kit = await makeCampKit(cast.leader.ctx, cast.tripId, { nights: 2 });
+});
+
+describe("pack lists", () => {
+  it("hold everybody's lines, own lines and where one sleeps", async () => {
+    const { ctx } = cast.coLeader;
+    const { participant, leader } = cast.personIds;
+    await savePackItems({ ctx, input: one({ personId: null, items: [line("Mug"), line("Mat")] }) });
+    const items = [line("Stove", { isGroupThing: true, massKg: 0.4 }), line("Flute")];
+    await savePackItems({ ctx, input: one({ personId: participant, items }) });
+    const sleepers = [
+      { personId: participant, pitchId: kit.pitchId },
+      { personId: leader, pitchId: kit.pitchId },
+    ];
+    await saveSleepers({ ctx, input: one({ campId: kit.campId, sleepers }) });
+    const list = await getPackList({ ctx: cast.participant.ctx, input: one({ personId: "self" }) });
+    expect(list.own.map((row) => row.name).sort()).toEqual(["Flute", "Mat", "Mug"]);
+    expect(list.group).toMatchObject([{ name: "Stove", massKg: 0.4 }]);
+    expect(list.nights).toMatchObject([
+      { day: "2027-06-07", shelterName: "Ridge tarp", withNames: [cast.leader.name] },
+      { day: "2027-06-08", shelterName: "Ridge tarp", withNames: [cast.leader.name] },
+    ]);
+    const other = await getPackList({ ctx, input: one({ personId: "self" }) });
+    expect(other.nights[0]).toMatchObject({ shelterName: null, withNames: [] });
+  });
+
+  it("are read by their person and by who leads, and edited by who leads", async () => {
+    const { participant, leader } = cast.personIds;
+    expect((await getPackList({ ctx: cast.coLeader.ctx, input: one({ personId: participant }) })).person.id).toBe(
+      participant,
+    );
+    expect(await codeOf(getPackList({ ctx: cast.participant.ctx, input: one({ personId: leader }) }))).toBe(
+      "not-found",
+    );
+    expect(await codeOf(getPackList({ ctx: cast.stranger.ctx, input: one({ personId: "self" }) }))).toBe("not-found");
+    expect(await codeOf(getPackList({ ctx: cast.leader.ctx, input: one({ personId: cast.otherPersonId }) }))).toBe(
+      "not-found",
+    );
+    const input = one({ personId: participant, items: [] });
+    expect(await codeOf(savePackItems({ ctx: cast.participant.ctx, input }))).toBe("forbidden");
+    const foreign = one({ personId: cast.otherPersonId, items: [line("Spy")] });
+    expect(await codeOf(savePackItems({ ctx: cast.leader.ctx, input: foreign }))).toBe("not-found");
+    const unknown = one({ personId: participant, items: [line("Mug", { id: "0000000000000000000000000x" })] });
+    expect(await codeOf(savePackItems({ ctx: cast.leader.ctx, input: unknown }))).toBe("conflict");
+  });
+
+  it("keep ticks of the lines that stay, and take only one's own lines", async () => {
+    const { ctx } = cast.participant;
+    const before = await getPackList({ ctx, input: one({ personId: "self" }) });
+    const [first] = before.own;
+    const key = first?.key ?? "";
+    await tickPackItem({ ctx, input: one({ key, isTicked: true }) });
+    await tickPackItem({ ctx, input: one({ key, isTicked: true }) });
+    expect((await getPackList({ ctx, input: one({ personId: "self" }) })).own[0]?.isTicked).toBe(true);
+    // Everybody's line, but ticked by one person only.
+    const others = await getPackList({ ctx: cast.leader.ctx, input: one({ personId: "self" }) });
+    expect(others.own.some((row) => row.isTicked)).toBe(false);
+    const own = (await listPackItems({ ctx: cast.leader.ctx, input: one({}) })).find(
+      (row) => row.personId === cast.personIds.participant,
+    );
+    const notMine = one({ key: `item:${own?.id ?? ""}`, isTicked: true });
+    expect(await codeOf(tickPackItem({ ctx: cast.coLeader.ctx, input: notMine }))).toBe("not-found");
+    const bad = one({ key: "item:'; drop table--", isTicked: true });
+    expect(await codeOf(tickPackItem({ ctx, input: bad }))).toBe("bad-input");
+    await tickPackItem({ ctx, input: one({ key, isTicked: false }) });
+    expect((await getPackList({ ctx, input: one({ personId: "self" }) })).own[0]?.isTicked).toBe(false);
+  });
+});
+
+describe("loads", () => {
+  it("come out even and complete", async () => {
+    const { ctx } = cast.coLeader;
+    await shareOutEvenly({ ctx, input: one({}) });
+    const plan = await getCarryPlan({ ctx, input: one({}) });
+    expect(plan.shelters.every((shelter) => shelter.carrierId !== null)).toBe(true);
+    expect(plan.kitItems.every((item) => item.leftCount === 0)).toBe(true);
+    const total = plan.people.reduce((sum, person) => sum + person.massKg, 0);
+    const gear = 0.75 + plan.kitItems.reduce((sum, item) => sum + item.massKgEach * item.count, 0);
+    expect(total).toBeCloseTo(gear, 9);
+    const list = await getPackList({ ctx: cast.participant.ctx, input: one({ personId: "self" }) });
+    expect(list.groupMassKg).toBeGreaterThan(0);
+  });
+
+  it("are never more than there is, and stay on this trip", async () => {
+    const { ctx } = cast.leader;
+    const other = await makeCampKit(cast.otherLeader.ctx, cast.otherTripId);
+    const { leader, participant } = cast.personIds;
+    const kitLoad = (personId: string, kitItemId: string, count: number) => ({
+      type: "kit" as const,
+      personId,
+      kitItemId,
+      count,
+    });
+    const tarp = (personId: string, shelterId: string) => ({ type: "shelter" as const, personId, shelterId });
+    const before = await getCarryPlan({ ctx, input: one({}) });
+    for (const carries of [
+      [kitLoad(leader, kit.bladeId, 4), kitLoad(participant, kit.bladeId, 3)],
+      [tarp(leader, kit.shelterId), tarp(participant, kit.shelterId)],
+      [kitLoad(cast.otherPersonId, kit.bladeId, 1)],
+      [kitLoad(leader, other.bladeId, 1)],
+      [tarp(leader, other.shelterId)],
+    ]) {
+      expect(Object.keys((await refusalOf(assignCarry({ ctx, input: one({ carries }) }))).fieldErrors)).toEqual([
+        "carries",
+      ]);
+    }
+    expect(await getCarryPlan({ ctx, input: one({}) })).toEqual(before);
+    expect(await codeOf(shareOutEvenly({ ctx: cast.participant.ctx, input: one({}) }))).toBe("forbidden");
+    expect(await codeOf(getCarryPlan({ ctx: cast.stranger.ctx, input: one({}) }))).toBe("not-found");
+  });
+});
