@@ -11,7 +11,7 @@ export function contentDisposition(kind: "inline" | "attachment", fileName: stri
   // Lone surrogates can't be encoded; slashes and control characters have no place in a file name.
   const clean = [
     ...fileName
-      .replace(/[\p{Cc}\p{Surrogate}\\/:*?"<>|]/gu, " ")
+      .replace(/[\p{Cc}\p{Surrogate}\\/:*?<>|]/gu, " ")
       .replace(/\s+/g, " ")
       .trim(),
   ]

@@ -13,6 +13,8 @@ const known = new WeakMap<WorkedCamp, Promise<readonly PitchSteps[]>>();
 interface PitchSteps {
   readonly pitchId: string;
   readonly tieOuts: readonly { readonly number: number; readonly mends: readonly Step[] }[];
+  /** The first that gives; named when nothing in the tray helps. */
+  readonly weakest: { readonly number: number; readonly holdsToGustMs: number } | null;
 }
 
 interface Step {
@@ -40,7 +42,9 @@ async function searchSteps({ input, result }: WorkedCamp): Promise<readonly Pitc
       if (mends.length > 0) found.push({ number, mends: mends.slice(0, STEPS) });
       await takeTurns();
     }
-    pitches.push({ pitchId, tieOuts: found });
+    const [first] = listWeakest(tieOuts);
+    const weakest = first ? { number: first.number, holdsToGustMs: first.holdsToGustMs ?? 0 } : null;
+    pitches.push({ pitchId, tieOuts: found, weakest });
   }
   return pitches;
 }
@@ -59,12 +63,18 @@ export async function listFallbacks(
   unit: Preferences["speedUnit"],
 ): Promise<Readonly<Record<string, readonly string[]>>> {
   return Object.fromEntries(
-    (await findSteps(worked)).map(({ pitchId, tieOuts }) => [
-      pitchId,
-      tieOuts.map(({ number, mends }) => {
+    (await findSteps(worked)).map(({ pitchId, tieOuts, weakest }) => {
+      const lines = tieOuts.map(({ number, mends }) => {
         const words = mends.map((mend) => `${mend.title} (to ${formatHoldsTo(mend.holdsToGustMs, unit)})`);
         return `Tie-out ${number}: ${words.join("; or ")}.`;
-      }),
-    ]),
+      });
+      if (lines.length === 0 && weakest) {
+        const limit = formatHoldsTo(weakest.holdsToGustMs, unit);
+        lines.push(
+          `Tie-out ${weakest.number} gives first, at ${limit}. Nothing in the tray helps: pitch lower or leave in time.`,
+        );
+      }
+      return [pitchId, lines];
+    }),
   );
 }
