@@ -46,9 +46,12 @@ export function placeLabels(
       }
     }
     placed.push(boxOf(best.at, label));
-    return best.at;
+    // Server and browser differ in the last digit of a sine; rounded, both draw the same.
+    return [hundredths(best.at[0]), hundredths(best.at[1])];
   });
 }
+
+const hundredths = (value: number) => Math.round(value * 100) / 100;
 
 /** Half extent of the label's box along a bearing: an ellipse, so that labels turn smoothly round a spot. */
 function support({ width, height }: { width: number; height: number }, bearingDeg: number): number {

@@ -28,6 +28,8 @@ export interface ShelterPlanProps {
   readonly headingDeg: number;
   /** Compass bearing at the top; 0 = north up. */
   readonly upDeg?: number;
+  /** False where the shelter is not pitched anywhere, so that north means nothing. */
+  readonly hasNorth?: boolean;
   /** Leave out to draw no wind. */
   readonly wind?: { readonly fromDeg: number | null; readonly toDeg: number | null } | null;
   readonly marks?: Readonly<Record<string, TieOutMarks>>;
@@ -50,6 +52,7 @@ export function ShelterPlan({
   model,
   headingDeg,
   upDeg = 0,
+  hasNorth = true,
   wind = null,
   marks = NOTHING,
   selectedTieOutId = null,
@@ -108,7 +111,7 @@ export function ShelterPlan({
           isSelected={spot.tieOutId === selectedTieOutId}
         />
       ))}
-      <NorthArrow at={layout.north} upDeg={view.upDeg} />
+      {hasNorth && <NorthArrow at={layout.north} upDeg={view.upDeg} />}
       <ScaleBar at={layout.scale.at} length={layout.scale.length} lengthM={layout.scale.lengthM} />
     </svg>
   );

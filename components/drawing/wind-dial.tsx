@@ -164,6 +164,8 @@ function DegreeInput({
   readonly value: number | null;
   readonly onChange: (deg: number) => void;
 }) {
+  // What is being typed is not a bearing yet: an empty field, or the 2 of 270.
+  const [draft, setDraft] = useState<string | null>(null);
   return (
     <label className="flex w-28 flex-col gap-1 text-15 font-semibold">
       {label}
@@ -172,8 +174,10 @@ function DegreeInput({
         min={0}
         max={360}
         step={1}
-        value={value ?? ""}
+        value={draft ?? value ?? ""}
+        onBlur={() => setDraft(null)}
         onChange={(event) => {
+          setDraft(event.target.value);
           const deg = event.target.valueAsNumber;
           if (Number.isFinite(deg) && deg >= 0 && deg <= 360) onChange(deg);
         }}
