@@ -46,16 +46,16 @@ export function KitTable({ caption, items, renderCount, renderActions, hrefOf }:
         {items.map((item) => (
           <tr
             key={item.id}
-            className="grid grid-cols-[2.75rem_minmax(0,1fr)] items-center gap-x-3 border-t border-hair py-3 sm:table-row sm:[&>*]:py-3 sm:[&>*]:pr-4 sm:[&>*]:align-middle"
+            className="grid grid-cols-[2.75rem_minmax(0,1fr)_auto] items-center gap-x-3 border-t border-hair py-3 sm:table-row sm:[&>*]:py-3 sm:[&>*]:pr-4 sm:[&>*]:align-middle"
           >
-            <td className="row-span-2 self-start sm:w-12">
+            <td className="row-span-3 self-start sm:w-12">
               {item.details.type === "anchor" ? (
                 <AnchorMark spec={item.details.spec} size={38} />
               ) : (
                 <CordMark item={item} />
               )}
             </td>
-            <th scope="row" className="min-w-0 text-left font-normal">
+            <th scope="row" className="col-span-2 min-w-0 text-left font-normal">
               {hrefOf ? (
                 <Link href={hrefOf(item)} className="text-15 font-bold hover:text-spruce hover:underline">
                   {item.details.name}
@@ -71,12 +71,14 @@ export function KitTable({ caption, items, renderCount, renderActions, hrefOf }:
               )}
             </th>
             <td className="hidden text-15 whitespace-nowrap sm:table-cell">{formatMass(item.details.massKg)}</td>
-            <td className="col-start-2">{renderCount ? renderCount(item) : item.details.count}</td>
-            <td className="col-start-2 text-15 whitespace-nowrap">
+            <td className="col-start-2 row-start-2 -ml-4 sm:ml-0">
+              {renderCount ? renderCount(item) : item.details.count}
+            </td>
+            <td className="col-start-2 row-start-3 text-15 whitespace-nowrap">
               <span className="text-pencil sm:hidden">{formatMass(item.details.massKg)} each, together </span>
               {formatMass(item.details.massKg * item.details.count)}
             </td>
-            {renderActions && <td className="col-start-2 sm:text-right">{renderActions(item)}</td>}
+            {renderActions && <td className="col-start-3 row-start-2 text-right">{renderActions(item)}</td>}
           </tr>
         ))}
       </tbody>

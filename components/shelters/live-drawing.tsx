@@ -12,12 +12,15 @@ export function LiveDrawing({
   name,
   headingDeg = 0,
   wind = null,
+  isPitched = false,
   problem,
 }: {
   readonly model: ShelterModel;
   readonly name: string;
   readonly headingDeg?: number;
   readonly wind?: { readonly fromDeg: number | null; readonly toDeg: number | null } | null;
+  /** At a camp: then north and wind have a meaning. */
+  readonly isPitched?: boolean;
   readonly problem: string | null;
 }) {
   const xs = model.tieOuts.map((tie) => tie.anchor.x);
@@ -30,16 +33,16 @@ export function LiveDrawing({
         <ShelterPlan
           model={model}
           headingDeg={headingDeg}
-          upDeg={wind ? 0 : headingDeg}
+          hasNorth={isPitched}
           wind={wind}
-          width={520}
-          height={400}
+          width={440}
+          height={330}
           label={`${name} in plan with ${plural(model.tieOuts.length, "tie-out")}`}
         />
       </div>
-      <div className={`grid grid-cols-2 gap-3 ${problem ? "opacity-50" : ""}`}>
-        <ShelterElevation model={model} from="front" width={360} height={220} label={`${name} from the front`} />
-        <ShelterElevation model={model} from="side" width={360} height={220} label={`${name} from its right side`} />
+      <div className={`grid gap-1 ${problem ? "opacity-50" : ""}`}>
+        <ShelterElevation model={model} from="front" width={440} height={170} label={`${name} from the front`} />
+        <ShelterElevation model={model} from="side" width={440} height={170} label={`${name} from its right side`} />
       </div>
       <figcaption aria-live="polite" className="text-13 text-pencil">
         {problem ??

@@ -118,6 +118,7 @@ export function PitchForm({ action, tripId, campId, pitch, hasSecondPatch, wind,
           model={model}
           name={pitch.name}
           headingDeg={knownHeading}
+          isPitched
           wind={wind}
           problem={Object.values(problems)[0]?.[0] ?? null}
         />

@@ -24,7 +24,14 @@ export function ShelterCard({
     <div className="flex min-w-0 flex-col">
       {canBeDrawn && (
         <div className="rounded-sheet border border-hair bg-sheet">
-          <ShelterPlan model={buildShelter(details.spec)} headingDeg={0} width={400} height={270} label="" />
+          <ShelterPlan
+            model={buildShelter(details.spec)}
+            headingDeg={0}
+            hasNorth={false}
+            width={400}
+            height={270}
+            label=""
+          />
         </div>
       )}
       <h3 className="mt-3 text-15 font-bold">{title ?? details.name}</h3>
