@@ -37,7 +37,7 @@ const config = [
   },
   {
     files: ["**/*.ts", "**/*.tsx"],
-    ignores: ["lib/env.ts", "tests/**", "db/demo.mjs", "*.config.ts", "next.config.ts"],
+    ignores: ["lib/env.ts", "instrumentation.ts", "tests/**", "db/demo.mjs", "*.config.ts", "next.config.ts"],
     rules: {
       "no-restricted-syntax": [
         "error",

@@ -9,11 +9,12 @@ function makeNonce(): string {
 }
 
 function contentSecurityPolicy(nonce: string): string {
+  // The development server's own tools need both exceptions.
   const evaluation = env.isProduction ? "" : " 'unsafe-eval'";
   return [
     "default-src 'self'",
     `script-src 'nonce-${nonce}' 'strict-dynamic'${evaluation}`,
-    `style-src 'self' 'nonce-${nonce}'`,
+    env.isProduction ? `style-src 'self' 'nonce-${nonce}'` : "style-src 'self' 'unsafe-inline'",
     // Positions of dragged pieces and bars of charts are style attributes.
     "style-src-attr 'unsafe-inline'",
     "img-src 'self' data: blob:",

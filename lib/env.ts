@@ -2,9 +2,6 @@ import { z } from "zod";
 
 /** The only reader of the environment. Lazy, so that `next build` needs none; `checkEnv` reads all of it at start. */
 
-/** Next.js builds the instrumentation for the edge too, where nothing of it can run. */
-export const isNodeRuntime = process.env.NEXT_RUNTIME !== "edge";
-
 const port = z
   .string()
   .regex(/^\d{1,5}$/, "has to be a port number")
