@@ -33,7 +33,7 @@ function open(): Opened {
     const client = createClient({ url, ...(env.databaseAuthToken ? { authToken: env.databaseAuthToken } : {}) });
     return { db: drizzle(client, { schema }), url };
   }
-  mkdirSync(path.dirname(path.resolve(file)), { recursive: true });
+  mkdirSync(path.dirname(path.resolve(/* turbopackIgnore: true */ file)), { recursive: true });
   const client = serialiseWrites(createClient({ url, timeout: 5000 }));
   // First in the queue of writes. WAL stays in the file; synchronous = FULL is the default of each connection.
   client.execute("PRAGMA journal_mode = WAL").catch(() => undefined);

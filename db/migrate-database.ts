@@ -5,7 +5,7 @@ import { readMigrationFiles } from "drizzle-orm/migrator";
 import type { Database } from "./client";
 
 function migrationsFolder(): string {
-  return path.join(process.cwd(), "drizzle");
+  return path.join(/* turbopackIgnore: true */ process.cwd(), "drizzle");
 }
 
 export async function migrateDatabase(db: Database): Promise<void> {

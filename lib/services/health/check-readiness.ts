@@ -17,7 +17,7 @@ async function toCheck(work: () => Promise<boolean>): Promise<Check> {
 async function hasRoom(): Promise<boolean> {
   const file = toFilePath(env.databaseUrl);
   if (file === null) return true;
-  const { bavail, blocks, bsize } = await statfs(path.dirname(path.resolve(file)));
+  const { bavail, blocks, bsize } = await statfs(path.dirname(path.resolve(/* turbopackIgnore: true */ file)));
   return bavail / blocks > 0.05 || bavail * bsize > 2e9;
 }
 
