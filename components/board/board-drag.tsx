@@ -11,7 +11,9 @@ import {
   type DragEndEvent,
   type DragOverEvent,
   type DragStartEvent,
+  type Modifier,
 } from "@dnd-kit/core";
+import { getEventCoordinates } from "@dnd-kit/utilities";
 import { useCallback, useMemo, useState } from "react";
 import type { ReactNode } from "react";
 import { AnchorMark } from "@/components/drawing/anchor-mark";
@@ -23,6 +25,22 @@ import { readPiece, readTarget, spotTargetId, type Piece } from "./drag-ids";
 import { makeCoordinateGetter } from "./drag-keyboard";
 import { placementAt } from "./plan-change";
 import type { StakingBoardModel } from "./use-staking-board";
+
+/** Only at the very edge: the page must not run away under the piece. */
+const AUTO_SCROLL = { threshold: { x: 0, y: 0.06 } };
+const OFFSET_PX = 14;
+
+/** The piece hangs beside the pointer, so that the tie-out under it can be seen. */
+const besidePointer: Modifier = ({ activatorEvent, draggingNodeRect, transform }) => {
+  const start = activatorEvent && getEventCoordinates(activatorEvent);
+  if (!start || !draggingNodeRect) return transform;
+  return {
+    ...transform,
+    x: transform.x + start.x - draggingNodeRect.left + OFFSET_PX,
+    y: transform.y + start.y - draggingNodeRect.top + OFFSET_PX,
+  };
+};
+const BESIDE_POINTER = [besidePointer];
 
 interface BoardDragProps {
   readonly board: StakingBoardModel;
@@ -91,6 +109,7 @@ export function BoardDrag({ board, shelter, anchors, onDropped, onDragging, chil
       id="staking-plan"
       sensors={sensors}
       collisionDetection={findTarget}
+      autoScroll={AUTO_SCROLL}
       accessibility={{ announcements, screenReaderInstructions: DRAG_INSTRUCTIONS }}
       onDragStart={({ active }: DragStartEvent) => {
         setPiece(readPiece(active.id));
@@ -109,7 +128,7 @@ export function BoardDrag({ board, shelter, anchors, onDropped, onDragging, chil
       onDragCancel={stop}
     >
       {children}
-      <DragOverlay dropAnimation={null}>
+      <DragOverlay dropAnimation={null} modifiers={BESIDE_POINTER}>
         {dragged && (
           <div className="flex min-h-11 w-max cursor-grabbing items-center gap-2 rounded-sheet border border-spruce bg-sheet px-3 shadow-float">
             <AnchorMark spec={dragged.spec} size={26} />

@@ -17,7 +17,10 @@ export function placeFromTray(
   const found = findPrepared(prepared, spot);
   const anchor = prepared.anchors.get(anchorId);
   const present = placementAt(placements, spot);
-  const rigged = found && anchor ? engine.rigAtBestLean(prepared, found.shelter, found.tieOut, anchor, present) : null;
+  const rigged =
+    found && anchor && engine.isKnownTieOut(found.tieOut)
+      ? engine.rigAtBestLean(prepared, found.shelter, found.tieOut, anchor, present)
+      : null;
   const plain = engine.plainPlacement(spot.pitchId, spot.tieOutId, anchorId);
   if (rigged) return rigged.placement;
   return present ? { ...plain, knot: present.knot, shockCord: present.shockCord } : plain;

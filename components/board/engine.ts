@@ -2,6 +2,6 @@
 export { analysisKey } from "@/lib/calc/analyse-shelter";
 export { evaluatePlacements } from "@/lib/calc/camp";
 export { tandemSpacingM } from "@/lib/calc/plan-reinforce";
-export { designAnalysisRequest, prepareCamp } from "@/lib/calc/prepare-camp";
+export { designAnalysisRequest, isKnownTieOut, prepareCamp } from "@/lib/calc/prepare-camp";
 export { plainPlacement, rigAtBestLean } from "@/lib/calc/rig-anchor";
 export { buildShelter } from "@/lib/calc/shelter-kinds";

@@ -7,6 +7,15 @@ import { changeBetween, isSameSpot } from "./plan-change";
 import { useMends } from "./use-mends";
 
 const MOST_SHOWN = 5;
+const MOST_OF_A_KIND = 2;
+
+/** Exchanges with every other tie-out would crowd out the rest. */
+function withoutCrowding(mends: readonly Mend[]): readonly Mend[] {
+  const shown = mends.filter(
+    (mend, index) => mends.slice(0, index).filter((one) => one.kind === mend.kind).length < MOST_OF_A_KIND,
+  );
+  return shown.slice(0, MOST_SHOWN);
+}
 
 /** What would mend a tie-out, each with its gain; a touch does it. */
 export function MendList({ result }: { readonly result: TieOutResult }) {
@@ -25,7 +34,7 @@ export function MendList({ result }: { readonly result: TieOutResult }) {
     <div>
       <h3 className="text-15 font-semibold">What would mend it</h3>
       <ul>
-        {mends.slice(0, MOST_SHOWN).map((mend) => (
+        {withoutCrowding(mends).map((mend) => (
           <li key={`${mend.kind} ${mend.title}`} className="border-b border-hair last:border-0">
             <button
               type="button"

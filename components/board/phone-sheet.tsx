@@ -47,7 +47,7 @@ export function PhoneSheet({ result, isOpen, onToggle, children }: PhoneSheetPro
           {isWaiting || result.margin === null ? "–" : formatMargin(result.margin)}
         </span>
       </summary>
-      <div className="max-h-[42dvh] overflow-y-auto border-t border-hair pt-3">{children}</div>
+      <div className="max-h-[38dvh] overflow-y-auto border-t border-hair pt-3">{children}</div>
     </details>
   );
 }

@@ -52,6 +52,11 @@ export function RankedList({ detail }: { readonly detail: ReactNode }) {
   );
 }
 
+/** Nearly no pull: the margin is cut off where more says nothing. */
+function marginWords(margin: number): string {
+  return margin >= 99 ? "99+" : formatMargin(margin);
+}
+
 interface TieOutRowProps {
   readonly result: TieOutResult;
   readonly scaleN: number;
@@ -105,7 +110,7 @@ const TieOutRow = memo(function TieOutRow(props: TieOutRowProps) {
         <span className="w-14 shrink-0 text-right">
           <span className={`block text-18 font-bold ${isWaiting ? "text-pencil" : VERDICT_TONES[result.verdict]}`}>
             <span className="sr-only">margin </span>
-            {isWaiting || result.margin === null ? "–" : formatMargin(result.margin)}
+            {isWaiting || result.margin === null ? "–" : marginWords(result.margin)}
           </span>
           <span className="block text-13 text-pencil">
             {isWaiting || result.priority === null ? "" : `P ${Math.round(result.priority)}`}

@@ -164,7 +164,7 @@ function Board({ view, start, preferences, userId }: StakingBoardProps) {
             <div className="order-2 px-4 pt-3 pb-3 sm:px-7 lg:px-5 lg:pt-6 lg:pb-4">
               <VerdictPanel />
             </div>
-            <div className={`order-7 ${isWide ? "" : "pb-[46dvh]"}`}>
+            <div className={`order-7 ${isWide ? "" : isSheetOpen ? "pb-[46dvh]" : "pb-20"}`}>
               <RankedList detail={isWide ? detail : null} />
               <div className="flex flex-col gap-4 px-5 py-6">
                 {board.result.retension && <p className="text-15">{board.result.retension}</p>}

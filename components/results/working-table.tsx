@@ -8,6 +8,19 @@ export function formatWorkingValue({ value, unit }: Pick<Working, "value" | "uni
   return withUnit(isWhole ? String(value).replace("-", "−") : formatSignificant(value, 3), unit);
 }
 
+/** "s_u" with a low u, as it is printed in books. */
+function Symbol({ text }: { readonly text: string }) {
+  const [base, low] = text.split(/_(.*)/s);
+  return low ? (
+    <>
+      {base}
+      <sub>{low}</sub>
+    </>
+  ) : (
+    base
+  );
+}
+
 /** The steps of a result: symbol, meaning, value with unit, source. On a narrow screen each step is a block. */
 export function WorkingTable({
   caption,
@@ -41,7 +54,9 @@ export function WorkingTable({
             key={index}
             className="grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 border-b border-hair py-2 sm:table-row sm:py-0 [&>*]:break-inside-avoid"
           >
-            <td className="font-semibold italic sm:py-2 sm:pr-3 sm:align-top">{working.symbol}</td>
+            <td className="font-semibold italic sm:py-2 sm:pr-3 sm:align-top">
+              <Symbol text={working.symbol} />
+            </td>
             <th scope="row" className="col-span-2 row-start-2 text-left font-normal sm:py-2 sm:pr-3 sm:align-top">
               {working.meaning}
             </th>
