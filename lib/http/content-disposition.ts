@@ -9,14 +9,12 @@ function encodeExtended(text: string): string {
 /** Content-Disposition by RFC 6266: a plain name for old programs, the true one in UTF-8 beside it. */
 export function contentDisposition(kind: "inline" | "attachment", fileName: string): string {
   // Lone surrogates can't be encoded; slashes and control characters have no place in a file name.
-  const clean = [
-    ...fileName
-      .replace(/[\p{Cc}\p{Surrogate}\\/:*?<>|]/gu, " ")
-      .replace(/\s+/g, " ")
-      .trim(),
-  ]
-    .slice(0, 150)
-    .join("");
+  const words = fileName
+    .replaceAll('"', "")
+    .replace(/[\p{Cc}\p{Surrogate}\\/:*?<>|]/gu, " ")
+    .replace(/\s+/g, " ")
+    .trim();
+  const clean = [...words].slice(0, 150).join("");
   const plain = clean
     .normalize("NFKD")
     .replace(/\p{M}/gu, "")

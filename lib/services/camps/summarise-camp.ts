@@ -14,7 +14,11 @@ function listGaps(state: CampState, result: CampResult): Gap[] {
     ...tieOuts.filter((one) => one.placement !== null).flatMap((one) => one.gaps),
   ];
   const gaps = all.filter((gap, index) => all.findIndex((other) => other.field === gap.field) === index);
-  if (state.pitches.length === 0) gaps.push({ field: "camp.shelters", message: "Pitch a shelter at this camp." });
+  const hasGround = state.camp.details.ground !== null || gaps.some((gap) => gap.field === "camp.ground");
+  if (!hasGround) gaps.push({ field: "camp.ground", message: "Choose the ground of the camp." });
+  const isNamed = gaps.some((gap) => gap.field === "camp.shelters");
+  if (state.pitches.length === 0 && !isNamed)
+    gaps.push({ field: "camp.shelters", message: "Pitch a shelter at this camp." });
   const bare = tieOuts.filter((one) => one.placement === null).length;
   if (bare > 0) {
     gaps.push({ field: "plan.anchors", message: `${plural(bare, "tie-out has", "tie-outs have")} no anchor.` });

@@ -3,10 +3,10 @@ import type { Gap, Mend } from "@/lib/calc/types";
 import type { CampSummary, TodoItem } from "@/lib/domain/views";
 import type { Preferences } from "@/lib/domain/preferences";
 import { formatHoldsTo } from "@/lib/format/speeds";
-import { plural } from "@/lib/format/words";
+import { joinWords, plural } from "@/lib/format/words";
 import type { WorkedCamp } from "../analysis/work-out-camp";
 import type { CampState } from "../plan/load-trip-state";
-import { nameFirstGap } from "./overview-words";
+import { nameGap } from "./overview-words";
 
 export interface OverviewCamp {
   readonly state: CampState;
@@ -56,12 +56,16 @@ function describeMissing(camp: OverviewCamp, base: string): TodoItem[] {
   const place: readonly Gap[] = summary.gaps.filter(
     (gap) => gap.field.startsWith("camp.") && gap.field !== "camp.shelters",
   );
-  const items: TodoItem[] = place.map((gap) => ({
-    tone: "unknown",
-    title: `${summary.name} has ${nameFirstGap({ ...summary, gaps: [gap] }) ?? "something missing"}`,
-    action: gap.message,
-    href: `${page}/place`,
-  }));
+  const items: TodoItem[] = [];
+  const [first] = place;
+  if (first) {
+    items.push({
+      tone: "unknown",
+      title: `${summary.name} has ${joinWords(place.map((gap) => nameGap(gap)))} yet`,
+      action: place.length === 1 ? first.message : "Fill in its ground and wind",
+      href: `${page}/place`,
+    });
+  }
   if (state.pitches.length === 0) {
     items.push({
       tone: "unknown",

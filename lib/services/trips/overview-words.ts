@@ -1,3 +1,4 @@
+import type { Gap } from "@/lib/calc/types";
 import type { CampSummary } from "@/lib/domain/views";
 import type { Preferences } from "@/lib/domain/preferences";
 import { formatHoldsTo, formatSpeed } from "@/lib/format/speeds";
@@ -5,19 +6,27 @@ import { numberWord, startSentence } from "@/lib/format/words";
 
 /** What a missing input is called behind "has" or "have". */
 const MISSING: Readonly<Record<string, string>> = {
-  "camp.gust": "no wind yet",
-  "camp.exposure": "no exposure yet",
-  "camp.altitude": "no altitude yet",
-  "camp.ground": "no ground yet",
-  "camp.secondGround": "no second ground yet",
-  "camp.shelters": "no shelter yet",
+  "camp.gust": "no wind",
+  "camp.exposure": "no exposure",
+  "camp.altitude": "no altitude",
+  "camp.ground": "no ground",
+  "camp.secondGround": "no second ground",
+  "camp.shelters": "no shelter",
+  "camp.strongWindHours": "no hours of strong wind",
   "plan.anchors": "tie-outs without an anchor",
 };
 
+/** "no wind": behind "has". */
+export function nameGap(gap: Gap): string {
+  return MISSING[gap.field] ?? "something missing";
+}
+
 /** The first thing to enter, in the order in which one fills a camp in. */
-export function nameFirstGap(camp: CampSummary): string | null {
+function nameFirstGap(camp: CampSummary): string | null {
   const fields = Object.keys(MISSING).filter((field) => camp.gaps.some((gap) => gap.field === field));
-  return MISSING[fields[0] ?? ""] ?? null;
+  const [first] = fields;
+  if (!first) return null;
+  return first.startsWith("camp.") ? `${MISSING[first]} yet` : (MISSING[first] ?? null);
 }
 
 const countNights = (camps: readonly CampSummary[]) => camps.reduce((sum, camp) => sum + camp.days.length, 0);

@@ -175,7 +175,11 @@ describe("/quick-check", () => {
     const response = await check({ anchor: "three-blade-200", ground, lineAngleDeg: 30 });
     const { anchor, results } = (await response.json()) as {
       anchor: { name: string };
-      results: { lineAngleDeg: number; leanDeg: number; capacity: Record<string, number & string & unknown[]> }[];
+      results: {
+        lineAngleDeg: number;
+        leanDeg: number;
+        capacity: { status: string; medianN: number; scatter: number; dependableN: number; workings: unknown[] };
+      }[];
     };
     expect(anchor.name).toBe("Three-blade, 200 mm");
     expect(results).toHaveLength(1);
