@@ -128,7 +128,7 @@ function exchangeMends(one: MendCase, present: Placement, mine: TrayAnchor): Men
     if (!here || !there) return [];
     const gained = marginOf(here.strength.dependableN, one.tieOut.demandN);
     const spared = marginOf(there.strength.dependableN, other.tieOut.demandN);
-    if (Math.min(gained, spared) <= least || spared < Math.min(1, gained)) return [];
+    if (gained <= least || spared < Math.min(1, gained)) return [];
     return [{ other, here, there, spared, worse: Math.min(gained, spared) }];
   });
   return offers

@@ -219,6 +219,7 @@ describe("a shelter without a standing shape", () => {
 describe("looking for the gust at which a margin is 1", () => {
   it("has its ends", () => {
     expect(findHoldsTo(() => 0.9, [10, 20])).toBe(0);
+    expect(findHoldsTo((gust) => (gust === 0 || gust > 15 ? 0.9 : 1.1), [10, 20])).toBe(0);
     expect(findHoldsTo(() => 2, [10, 20])).toBe(LARGEST_GUST_MS);
   });
 

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { analyseShelter } from "@/lib/calc/analyse-shelter";
-import { designAnalysisRequest, evaluateCamp, planProblems, spotKey } from "@/lib/calc/camp";
+import { type AnalysisRequest, designAnalysisRequest, evaluateCamp, planProblems, spotKey } from "@/lib/calc/camp";
 import { mendTieOut, pitchMends, quickMends } from "@/lib/calc/mend";
 import { buildShelter, defaultShelterSpec } from "@/lib/calc/shelter-kinds";
 import type { AnchorSpec, CampInput, Mend, PitchedShelter, Placement } from "@/lib/calc/types";
@@ -11,6 +11,7 @@ import {
   LOAM,
   pitchOf,
   placementOf,
+  ringOf,
   SHORT_HOOK,
   tieOutIds,
   trayOf,
@@ -205,6 +206,38 @@ describe("what would mend it by pitching otherwise", () => {
     expect(pitchMends({ ...tarp, placements: [] }, spot)).toEqual([]);
   });
 
+  it("turns by an eighth, a quarter and a half, and lengthens no line beyond 8 m", () => {
+    const asked: AnalysisRequest[] = [];
+    const longest = { ...spec, lineLengthsM: { "corner-front-left": 5 } };
+    const long = { ...tarp, shelters: tarp.shelters.map((one) => ({ ...one, spec: longest })) };
+    const still = analysisOf("ridge-tarp", [1000]);
+    pitchMends(long, spot, (wanted) => {
+      asked.push(wanted);
+      return still;
+    });
+    const lengths = asked.map((wanted) => wanted.spec.lineLengthsM["corner-front-left"]);
+    expect(new Set(lengths)).toEqual(new Set([5, 7.5]));
+    // The wind comes from 260° with the front to the north; a front turned by 45° sees it at 215°.
+    expect(asked.slice(-4).map((wanted) => wanted.relativeWindDirectionsDeg[0])).toEqual([305, 215, 170, 80]);
+  });
+
+  it("offers nothing that helps here and hurts elsewhere", () => {
+    const ids = tieOutIds("ridge-tarp");
+    const shifted = analysisOf(
+      "ridge-tarp",
+      ids.map((id) => (id === spot.tieOutId ? 1 : 5000)),
+    );
+    expect(pitchMends(tarp, spot, () => shifted)).toEqual([]);
+    const eased = analysisOf("ridge-tarp", [1]);
+    expect(pitchMends(tarp, spot, () => eased).map((mend) => mend.kind)).toEqual([
+      "longer-line",
+      "lower-pitch",
+      "turn-shelter",
+    ]);
+    const fallen = analysisOf("ridge-tarp", [1], { fallsAt: 0.5 });
+    expect(pitchMends(tarp, spot, () => fallen)).toEqual([]);
+  });
+
   it("joins both kinds in one ranking", () => {
     const all = mendTieOut(tarp, spot);
     expect(all.filter((mend) => mend.pitchChange !== null).length).toBe(mends.length);
@@ -263,6 +296,18 @@ describe("what is offered depends on what is there", () => {
     expect(offers.map((mend) => mend.kind)).toEqual(["weight-or-deadman"]);
     expect(offers[0]?.title).toBe("Hold it with the anchor bag");
     expect(offers[0]?.detail).toBe("found at the camp");
+  });
+
+  it("does not take an anchor whose tie-out would then give way", () => {
+    const rings = (pulls: readonly number[]): CampInput => ({
+      ...camp,
+      shelters: [pitchOf("a", "pyramid", pulls)],
+      tray: [trayOf("small", ringOf(100), 1), trayOf("big", ringOf(500), IDS.length - 1)],
+      placements: IDS.map((id) => placementOf("a", id, id === WEAK ? "small" : "big")),
+    });
+    const exchanges = (of: CampInput) => quickMends(of, SPOT).filter((mend) => mend.title.startsWith("Exchange"));
+    expect(exchanges(rings(IDS.map((id) => (id === WEAK ? 200 : 180))))).toEqual([]);
+    expect(exchanges(rings(IDS.map((id) => (id === WEAK ? 200 : 10)))).length).toBeGreaterThan(0);
   });
 
   it("names the shelter when another one's anchor is taken", () => {

@@ -2,8 +2,10 @@ import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { evaluateCamp, planProblems, prepareCamp } from "@/lib/calc/camp";
 import { proposePlan } from "@/lib/calc/plan";
+import { bestLean } from "@/lib/calc/capacity";
+import { tandemSpacingM } from "@/lib/calc/plan-reinforce";
 import { isBetter, scorePlan, weightedMargin } from "@/lib/calc/plan-score";
-import type { CampInput, Placement, TieOutResult, TrayAnchor } from "@/lib/calc/types";
+import type { AnchorSpec, CampInput, Placement, TieOutResult, TrayAnchor } from "@/lib/calc/types";
 import {
   BLADE,
   campOf,
@@ -251,6 +253,76 @@ describe("steps after the exact one", () => {
         expect(one.margin ?? NaN).toBeGreaterThan(margin);
       } else expect(one.margin).toBe(margin);
     }
+  });
+
+  const oneSpare = (spares: readonly TrayAnchor[], pulls: readonly number[]) => {
+    const camp = campOf({
+      shelters: [pitchOf("a", "pyramid", pulls)],
+      tray: [trayOf("blade", BLADE, IDS.length), ...spares],
+    });
+    const { placements } = proposePlan(camp, { allowFound: false, allowDoubling: true });
+    return placements.filter((one) => one.tandem !== null);
+  };
+  /** Pulls that a single blade just fails to hold, and one it holds with less than twice as much. */
+  const single = results(weak, propose(weak)).map((one) =>
+    one.capacity?.status === "ok" ? one.capacity.dependableN : NaN,
+  );
+  const least = Math.min(...single.filter((value) => value > 0));
+  const most = Math.max(...single);
+
+  it("doubles the more important one when there is one spare, and nothing that holds already", () => {
+    const pulls = IDS.map((_, index) => (index === 2 ? 1.3 * most : index === 5 ? 1.2 * most : 0.6 * most));
+    const [pair, ...more] = oneSpare([trayOf("spare", BLADE, 1)], pulls);
+    expect(pair?.tieOutId).toBe(IDS[2]);
+    expect(more).toEqual([]);
+    expect(
+      oneSpare(
+        [trayOf("spare", BLADE, 5)],
+        IDS.map(() => 0.6 * most),
+      ),
+    ).toEqual([]);
+  });
+
+  it("takes the lighter of two that make it hold", () => {
+    const pulls = IDS.map((_, index) => (index === 2 ? 1.1 * most : 0.1 * least));
+    const heavyFirst = [trayOf("a-heavy", BLADE, 1, 0.06), trayOf("b-light", BLADE, 1, 0.02)];
+    expect(oneSpare(heavyFirst, pulls)[0]?.tandem?.anchorId).not.toBe("a-heavy");
+  });
+
+  it("sets two in line half the longer one's length apart, to the next 5 cm", () => {
+    const longer = (lengthM: number): AnchorSpec => (BLADE.class === "stake" ? { ...BLADE, lengthM } : BLADE);
+    expect(tandemSpacingM(longer(0.2), longer(0.16))).toBeCloseTo(0.1, 10);
+    expect(tandemSpacingM(longer(0.16), longer(0.3))).toBeCloseTo(0.15, 10);
+    expect(tandemSpacingM(longer(0.31), longer(0.3))).toBeCloseTo(0.2, 10);
+    expect(tandemSpacingM(longer(0.1), longer(0.1))).toBeCloseTo(0.1, 10);
+  });
+
+  it("leans stakes within 3 % of the best lean that a search in steps of 1° finds", () => {
+    const anglesDeg = [5, 22, 38, 47, 61, 78];
+    const camp = campOf({
+      shelters: [pitchOf("a", "pyramid", [100], { anglesDeg })],
+      tray: [trayOf("blade", BLADE, 40)],
+    });
+    const leans = new Set<number>();
+    for (const one of results(camp, propose(camp))) {
+      if (one.capacity?.status !== "ok" || !one.placement || one.lineAngleDeg === null)
+        throw new Error("expected a stake");
+      const { line } = camp.shelters[0]?.spec ?? { line: { material: "uhmwpe" as const, diameterMm: 5 } };
+      const rigging = {
+        leanDeg: 0,
+        depthOutM: 0,
+        tandem: null,
+        rockKg: 0,
+        shockCord: false,
+        line,
+        knot: one.placement.knot,
+      };
+      const { capacity } = bestLean({ anchor: BLADE, ground: LOAM, lineAngleDeg: one.lineAngleDeg, rigging });
+      if (capacity.status !== "ok") throw new Error("expected a capacity");
+      expect(one.capacity.dependableN).toBeGreaterThan(0.97 * capacity.dependableN);
+      leans.add(one.placement.leanDeg);
+    }
+    expect(leans.size).toBeGreaterThan(2);
   });
 
   it("puts rocks on the lip only where there are rocks and found things are allowed", () => {
