@@ -27,9 +27,15 @@ export async function startServer(): Promise<void> {
     if (isStopping) return;
     isStopping = true;
     Promise.all([post.stop(), closeWorkers()])
-      .then(checkpointDb)
+      .then(keepCheckpointing)
       .catch((error: unknown) => log.error("stop", error));
   };
   process.once("SIGTERM", stop);
   process.once("SIGINT", stop);
+}
+
+/** Requests in flight may still write: until the process ends, the log goes back into the database file. */
+async function keepCheckpointing(): Promise<void> {
+  await checkpointDb();
+  setTimeout(() => void keepCheckpointing().catch(() => undefined), 50).unref();
 }
