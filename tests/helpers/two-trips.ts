@@ -1,0 +1,190 @@
+import { Browser } from "./browser";
+import { makeCast, makePerson, makeTrip, makeUser, type TestUser } from "./actors";
+import { makeCampKit, placementOf, shelterOf, windyCamp } from "./camp-kit";
+import { clearLimits, readLinkToken } from "./outbox";
+import { hashPassword } from "better-auth/crypto";
+import { and, eq, isNull } from "drizzle-orm";
+import { getDb } from "@/db/client";
+import { account, outboxMessage, packItem, session, trip } from "@/db/schema";
+import { newId } from "@/lib/domain/ids";
+import { createCamp } from "@/lib/services/camps/create-camp";
+import type { Context } from "@/lib/services/context/context";
+import { createGear } from "@/lib/services/gear/create-gear";
+import { createKitItem } from "@/lib/services/kit/create-kit-item";
+import { savePackItems } from "@/lib/services/pack/save-pack-items";
+import { createPerson } from "@/lib/services/people/create-person";
+import { invitePerson } from "@/lib/services/people/invite-person";
+import { savePlanIntents } from "@/lib/services/plan/save-plan-intents";
+import { createShelter } from "@/lib/services/shelters/create-shelter";
+import { saveSleepers } from "@/lib/services/sleepers/save-sleepers";
+import type { Caller } from "../e2e/role-matrix";
+
+export const PASSWORD = "four pegs in wet sand";
+
+export const cordOf = (name: string) => ({
+  type: "cord" as const,
+  name,
+  material: "polyester" as const,
+  diameterMm: 3,
+  lengthM: 10,
+  massKg: 0.1,
+  count: 2,
+});
+
+/** A trip with one of everything in use, and one of everything to spare. */
+async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
+  const kit = await makeCampKit(ctx, tripId);
+  const { campId: spareCampId } = await createCamp({
+    ctx,
+    input: { tripId, details: windyCamp({ name: "Low Barn" }) },
+  });
+  const { shelterId: spareShelterId } = await createShelter({
+    ctx,
+    input: { tripId, details: shelterOf("pyramid", { name: "Spare pyramid" }) },
+  });
+  const { kitItemId: cordId } = await createKitItem({ ctx, input: { tripId, details: cordOf("Spare cord") } });
+  const placement = placementOf(kit.pitchId, "ridge-front", kit.bladeId);
+  await savePlanIntents({
+    ctx,
+    input: {
+      tripId,
+      campId: kit.campId,
+      intents: [{ intentId: newId(), baseVersion: 0, change: { type: "place", placement } }],
+    },
+  });
+  await saveSleepers({
+    ctx,
+    input: { tripId, campId: kit.campId, sleepers: [{ personId: sleeperId, pitchId: kit.pitchId }] },
+  });
+  const line = { id: null, name: "Mug", isGroupThing: false, massKg: 0.1 };
+  await savePackItems({ ctx, input: { tripId, personId: null, items: [line] } });
+  const [item] = await getDb()
+    .select({ id: packItem.id })
+    .from(packItem)
+    .where(and(eq(packItem.tripId, tripId), isNull(packItem.personId)));
+  const waitingEmail = `waiting-${tripId.toLowerCase()}@example.test`;
+  const { personId: waitingId } = await createPerson({
+    ctx,
+    input: { tripId, name: "Wanda Waiting", email: waitingEmail, role: "participant" },
+  });
+  const messageId = newId();
+  const now = new Date();
+  await getDb()
+    .insert(outboxMessage)
+    .values({
+      id: messageId,
+      tripId,
+      kind: "papers",
+      requestId: newId(),
+      toName: "Wanda Waiting",
+      toAddress: `failed-${waitingEmail}`,
+      subject: "Cards",
+      text: "Cards",
+      html: "<p>Cards</p>",
+      messageId: `<${messageId}@leestead.test>`,
+      state: "failed",
+      nextAttemptAt: now,
+      createdAt: now,
+    });
+  const { gearId } = await createGear({ ctx, input: { details: { type: "anchor", anchor: cordOf("Own cord") } } });
+  return {
+    ...kit,
+    spareCampId,
+    spareShelterId,
+    cordId,
+    packItemId: item?.id ?? "",
+    waitingId,
+    waitingEmail,
+    messageId,
+    gearId,
+  };
+}
+
+export type FilledTrip = Awaited<ReturnType<typeof fillTrip>> & { readonly tripId: string };
+
+let passwordHash: Promise<string> | undefined;
+
+async function signInAs(who: TestUser): Promise<Browser> {
+  await clearLimits();
+  const browser = new Browser();
+  const response = await browser.call("/sign-in/email", { email: who.email, password: PASSWORD });
+  if (response.status !== 200) throw new Error(`Nobody could sign in as ${who.email}: ${response.status}`);
+  return browser;
+}
+
+async function givePassword(who: TestUser): Promise<void> {
+  passwordHash ??= hashPassword(PASSWORD);
+  const now = new Date();
+  const row = { userId: who.id, accountId: who.id, providerId: "credential", createdAt: now, updatedAt: now };
+  await getDb()
+    .insert(account)
+    .values({ ...row, id: newId(), password: await passwordHash });
+}
+
+/** Two trips with leaders of their own, everybody signed in with a real session, and open links of each kind. */
+export async function makeTwoTrips() {
+  const cast = await makeCast();
+  const users: Record<Exclude<Caller, "nobody">, TestUser> = {
+    stranger: cast.stranger,
+    participant: cast.participant,
+    coLeader: cast.coLeader,
+    leader: cast.leader,
+    otherLeader: cast.otherLeader,
+  };
+  for (const who of Object.values(users)) await givePassword(who);
+  // With somebody else on it, so that its leader can't just go.
+  const companion = await makeUser();
+  const companionId = await makePerson(cast.otherTripId, "participant", companion);
+  await getDb().update(trip).set({ name: "Hidden valley" }).where(eq(trip.id, cast.tripId));
+
+  const a: FilledTrip = {
+    tripId: cast.tripId,
+    ...(await fillTrip(cast.leader.ctx, cast.tripId, cast.personIds.participant)),
+  };
+  const b: FilledTrip = {
+    tripId: cast.otherTripId,
+    ...(await fillTrip(cast.otherLeader.ctx, cast.otherTripId, companionId)),
+  };
+
+  const browsers = {
+    nobody: new Browser(),
+    stranger: await signInAs(users.stranger),
+    participant: await signInAs(users.participant),
+    coLeader: await signInAs(users.coLeader),
+    leader: await signInAs(users.leader),
+    otherLeader: await signInAs(users.otherLeader),
+  } satisfies Record<Caller, Browser>;
+  await signInAs(users.leader);
+  const ownSessions = await getDb().select().from(session).where(eq(session.userId, users.leader.id));
+  const currentToken = decodeURIComponent(browsers.leader.cookie).split("session_token=")[1]?.split(".")[0];
+  const otherSession = ownSessions.find((one) => one.token !== currentToken);
+
+  const thirdTripId = await makeTrip({ name: "Third trip" });
+  const thirdLeader = await makeUser();
+  await makePerson(thirdTripId, "leader", thirdLeader);
+  const { name, email } = users.stranger;
+  const personId = await makePerson(thirdTripId, "participant", { name, email });
+  await invitePerson({ ctx: thirdLeader.ctx, input: { tripId: thirdTripId, personId } });
+
+  const newcomer = { name: "Nils New", email: "newcomer@example.test", password: PASSWORD };
+  await new Browser().call("/sign-up/email", newcomer);
+  await new Browser().call("/request-password-reset", { email: users.coLeader.email });
+  return {
+    a,
+    b,
+    users,
+    browsers,
+    personIds: cast.personIds,
+    otherPersonId: cast.otherPersonId,
+    companionId,
+    leaderSessionId: otherSession?.id ?? "",
+    tokens: {
+      invitation: await readLinkToken(a.waitingEmail),
+      invitationOfStranger: await readLinkToken(email),
+      verification: await readLinkToken(newcomer.email),
+      reset: await readLinkToken(users.coLeader.email),
+    },
+  };
+}
+
+export type TwoTrips = Awaited<ReturnType<typeof makeTwoTrips>>;

@@ -1,0 +1,136 @@
+import type { TwoTrips } from "../../helpers/two-trips";
+import { cordOf, PASSWORD } from "../../helpers/two-trips";
+import { shelterOf, windyCamp } from "../../helpers/camp-kit";
+import { newId } from "@/lib/domain/ids";
+
+type Value = string | number | boolean | object | null;
+
+/** As a form sends it: numbers and switches by their suffix, everything nested as JSON. */
+export function formOf(values: Readonly<Record<string, Value>>): FormData {
+  const form = new FormData();
+  for (const [name, value] of Object.entries(values)) {
+    if (typeof value === "string") form.append(name, value);
+    else if (typeof value === "number") form.append(`${name}:number`, String(value));
+    else if (typeof value === "boolean") form.append(`${name}:boolean`, String(value));
+    else form.append(`${name}:json`, JSON.stringify(value));
+  }
+  return form;
+}
+
+/** Typed in grams, as the form of a cord does. */
+const typedCord = (name: string, count = 2) => ({ ...cordOf(name), massKg: 100, count });
+const NEW_PASSWORD = "two hitches on a cold ridge";
+
+/** For each server action what a person who may do it would send, on the first trip. */
+export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Record<string, Value>>>> {
+  const { a, users, tokens, leaderSessionId } = given;
+  const { tripId, campId } = a;
+  const camp = { tripId, campId };
+  return {
+    "(auth)#signInAction": { email: users.leader.email, password: PASSWORD, next: "/trips" },
+    "(auth)#signUpAction": { name: "Ada Moss", email: "ada@example.test", password: PASSWORD },
+    "(auth)#requestResetAction": { email: users.leader.email },
+    "(auth)#resetPasswordAction": { token: tokens.reset, password: NEW_PASSWORD },
+    "(auth)#verifyAction": { token: tokens.verification },
+    "(auth)#signOutAction": {},
+    "(auth)#signUpWithInvitationAction": { token: tokens.invitation, name: "Wanda Waiting", password: PASSWORD },
+    "(auth)#acceptInvitationAction": { token: tokens.invitationOfStranger },
+    "account#saveNameAction": { name: "Another Name" },
+    "account#changePasswordAction": { currentPassword: PASSWORD, newPassword: NEW_PASSWORD },
+    "account#savePreferencesAction": { speedUnit: "knots", forceUnit: "N", lengthUnit: "m", paperSize: "A4" },
+    "account#signOutAction": {},
+    "account#endSessionAction": { sessionId: leaderSessionId },
+    "account#deleteAccountAction": { password: PASSWORD },
+    "gear#createGearAction": { details: { type: "anchor", anchor: typedCord("My cord") } },
+    "gear#updateGearAction": {
+      gearId: a.gearId,
+      version: 1,
+      details: { type: "anchor", anchor: typedCord("My cord") },
+    },
+    "gear#deleteGearAction": { gearId: a.gearId },
+    "trips#createTripAction": { name: "New trip", startDate: "2027-08-01", timeZone: "Europe/Oslo", notes: "" },
+    "trips#copyTripAction": { tripId, name: "Same again", startDate: "2027-09-01", withPeople: true },
+    "trips/[tripId]/settings#updateTripAction": {
+      tripId,
+      version: 1,
+      name: "Hidden valley, later",
+      startDate: "2027-06-08",
+      timeZone: "Europe/Oslo",
+      notes: "",
+      contacts: [{ name: "Warden", phone: "+99 000 01 42", note: "" }],
+    },
+    "trips/[tripId]/settings#deleteTripAction": { tripId, confirmName: "Hidden valley" },
+    "trips/[tripId]/camps#createCampAction": { tripId, details: { name: "New camp", nights: 1 } },
+    "trips/[tripId]/camps#updateCampAction": { ...camp, version: 1, details: windyCamp({ name: "Otter Flat, lower" }) },
+    "trips/[tripId]/camps#copyCampAction": { ...camp, withSleepers: true },
+    "trips/[tripId]/camps#reorderCampsAction": { tripId, campIds: [a.spareCampId, campId] },
+    "trips/[tripId]/camps#deleteCampAction": { ...camp, confirmed: true },
+    "trips/[tripId]/camps/[campId]/shelters#createPitchAction": { ...camp, shelterId: a.spareShelterId },
+    "trips/[tripId]/camps/[campId]/shelters#updatePitchAction": {
+      ...camp,
+      pitchId: a.pitchId,
+      version: 1,
+      details: { headingDeg: 10, patch: "main", dimensions: {}, lineLengthsM: {} },
+    },
+    "trips/[tripId]/camps/[campId]/shelters#deletePitchAction": { ...camp, pitchId: a.pitchId, confirmed: true },
+    "trips/[tripId]/camps/[campId]/shelters#saveSleepersAction": {
+      ...camp,
+      sleepers: [{ personId: given.personIds.leader, pitchId: a.pitchId }],
+    },
+    "trips/[tripId]/shelters#createShelterAction": { tripId, details: shelterOf("dome", { name: "Dome" }) },
+    "trips/[tripId]/shelters#updateShelterAction": {
+      tripId,
+      shelterId: a.shelterId,
+      version: 1,
+      details: shelterOf("ridge-tarp", { name: "Wide tarp" }),
+    },
+    "trips/[tripId]/shelters#copyShelterAction": { tripId, shelterId: a.shelterId },
+    "trips/[tripId]/shelters#deleteShelterAction": { tripId, shelterId: a.shelterId, confirmed: true },
+    "trips/[tripId]/kit#createKitItemAction": { tripId, details: typedCord("More cord") },
+    "trips/[tripId]/kit#addKitItemAction": { tripId, details: cordOf("More cord") },
+    "trips/[tripId]/kit#updateKitItemAction": {
+      tripId,
+      kitItemId: a.cordId,
+      version: 1,
+      details: typedCord("Cord", 3),
+    },
+    "trips/[tripId]/kit#countKitItemAction": { tripId, kitItemId: a.cordId, version: 1, count: 5 },
+    "trips/[tripId]/kit#deleteKitItemAction": { tripId, kitItemId: a.bladeId, confirmed: true },
+    "trips/[tripId]/people#createPersonAction": {
+      tripId,
+      name: "Bo Byr",
+      email: "bo@example.test",
+      role: "participant",
+    },
+    "trips/[tripId]/people#updatePersonAction": {
+      tripId,
+      personId: a.waitingId,
+      name: "Wanda W",
+      role: "co-leader",
+      version: 1,
+    },
+    "trips/[tripId]/people#invitePersonAction": { tripId, personId: a.waitingId },
+    "trips/[tripId]/people#deletePersonAction": { tripId, personId: a.waitingId, confirmed: true },
+    "trips/[tripId]/people/packing#savePackItemsAction": {
+      tripId,
+      personId: given.personIds.participant,
+      items: [{ id: null, name: "Map", isGroupThing: true, massKg: 0.1 }],
+    },
+    "trips/[tripId]/people/packing#assignCarryAction": {
+      tripId,
+      carries: [{ type: "kit", personId: given.personIds.leader, kitItemId: a.cordId, count: 2 }],
+    },
+    "trips/[tripId]/people/packing#shareOutEvenlyAction": { tripId },
+    "trips/[tripId]/mine#tickPackItemAction": { tripId, key: `item:${a.packItemId}`, isTicked: true },
+    "trips/[tripId]/papers#sendPapersAction": {
+      tripId,
+      requestId: newId(),
+      personIds: [given.personIds.participant],
+      pieces: ["pack-list"],
+      subject: "Your cards",
+      message: "",
+      paperSize: "A4",
+    },
+    "trips/[tripId]/post#retryMessageAction": { tripId, messageId: a.messageId },
+  };
+}
