@@ -5,6 +5,7 @@ import { designAnalysisRequest, evaluateCamp, evaluatePlacements, prepareCamp } 
 import { proposePlan, proposePreparedPlan } from "@/lib/calc/plan";
 import { weightedMargin } from "@/lib/calc/plan-score";
 import { quickMends } from "@/lib/calc/mend";
+import { isKnownTieOut } from "@/lib/calc/prepare-camp";
 import { rigAtBestLean } from "@/lib/calc/rig-anchor";
 import { defaultShelterSpec } from "@/lib/calc/shelter-kinds";
 import { BUILT_IN_ANCHORS } from "@/lib/calc/tables/anchors";
@@ -88,18 +89,20 @@ const both = ({ medianMs, fastestMs }: Timing): string => `${inMs(medianMs)} (fa
 /** The allocation that the proposal solves, margins in steps of `step` so that HiGHS has a countable number of levels. */
 function allocationOf(camp: CampInput, step: number): GroupedProblem {
   const prepared = prepareCamp(camp);
-  const rows = prepared.shelters.flatMap((shelter) => shelter.tieOuts.map((tieOut) => ({ shelter, tieOut })));
-  const largest = Math.max(...rows.map((row) => row.tieOut.weightN ?? 0));
+  const rows = prepared.shelters.flatMap((shelter) =>
+    shelter.tieOuts.filter(isKnownTieOut).map((tieOut) => ({ shelter, tieOut })),
+  );
+  const largest = Math.max(...rows.map((row) => row.tieOut.weightN));
   const inSteps = (value: number) => Math.round(value / step);
   return {
     values: rows.map(({ shelter, tieOut }) =>
       camp.tray.map((anchor) => {
         const rigged = rigAtBestLean(prepared, shelter, tieOut, anchor, null);
-        return rigged ? inSteps(weightedMargin(rigged.strength.dependableN, tieOut.weightN ?? 0, largest)) : null;
+        return rigged ? inSteps(weightedMargin(rigged.strength.dependableN, tieOut.weightN, largest)) : null;
       }),
     ),
     counts: camp.tray.map((anchor) => anchor.count),
-    emptyValues: rows.map(({ tieOut }) => inSteps(weightedMargin(null, tieOut.weightN ?? 0, largest))),
+    emptyValues: rows.map(({ tieOut }) => inSteps(weightedMargin(null, tieOut.weightN, largest))),
     costs: camp.tray.map((anchor) => [Math.round(anchor.massKg * 10_000)]),
   };
 }
