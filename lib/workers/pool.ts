@@ -68,6 +68,8 @@ export class WorkerPool {
     if (this.threadCount >= this.options.threads) return undefined;
     this.threadCount += 1;
     const thread = new Worker(/* turbopackIgnore: true */ this.script, {
+      // Conditions and loaders of this process are not those that the bundle was made for.
+      execArgv: [],
       resourceLimits: { maxOldGenerationSizeMb: this.options.memoryMb },
     });
     // A thread that waits for work must not keep the process from ending.
