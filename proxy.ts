@@ -30,8 +30,15 @@ function contentSecurityPolicy(nonce: string): string {
 }
 
 /** Data, not pages: nothing in it may run or be framed. */
-const API_POLICY =
-  "default-src 'none'; style-src 'unsafe-inline'; base-uri 'none'; form-action 'none'; frame-ancestors 'none'";
+const API_POLICY = "default-src 'none'; base-uri 'none'; form-action 'none'; frame-ancestors 'none'";
+
+/** A browser's own viewer of PDFs needs room for its parts; the type of the answer keeps it from being a page. */
+const PAPER_POLICY = "base-uri 'none'; form-action 'none'; frame-ancestors 'none'";
+
+function choosePolicy(pathname: string, nonce: string): string {
+  if (!pathname.startsWith("/api/")) return contentSecurityPolicy(nonce);
+  return pathname.endsWith("/papers") ? PAPER_POLICY : API_POLICY;
+}
 
 /** A form of another site, whatever the browser or a proxy header says about it. */
 function isForeignChange(request: NextRequest): boolean {
@@ -42,9 +49,8 @@ function isForeignChange(request: NextRequest): boolean {
 
 export function proxy(request: NextRequest): NextResponse {
   const requestId = newId();
-  const isApi = request.nextUrl.pathname.startsWith("/api/");
   const nonce = makeNonce();
-  const policy = isApi ? API_POLICY : contentSecurityPolicy(nonce);
+  const policy = choosePolicy(request.nextUrl.pathname, nonce);
   const headers = new Headers(request.headers);
   headers.set("x-request-id", requestId);
   headers.set("x-leestead-path", `${request.nextUrl.pathname}${request.nextUrl.search}`);

@@ -73,7 +73,7 @@ else {
 }
 if (isFresh) removeDatabase();
 run(npm, ["run", "--silent", "db:migrate"], { cwd: root, env });
-run(npm, ["run", "--silent", "db:seed"], { cwd: root, env });
+run(npm, ["run", "--silent", "db:seed"], { cwd: root, env, stdio: ["ignore", "ignore", "inherit"] });
 
 const server = spawn(
   process.execPath,
