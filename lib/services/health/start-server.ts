@@ -26,15 +26,13 @@ export async function startServer(): Promise<void> {
   const stop = () => {
     if (isStopping) return;
     isStopping = true;
-    Promise.all([post.stop(), closeWorkers()])
-      .then(keepCheckpointing)
-      .catch((error: unknown) => log.error("stop", error));
+    Promise.all([keepCheckpointing(), post.stop(), closeWorkers()]).catch((error: unknown) => log.error("stop", error));
   };
   process.once("SIGTERM", stop);
   process.once("SIGINT", stop);
 }
 
-/** Requests in flight may still write: until the process ends, the log goes back into the database file. */
+/** At once, since the process may end in the next moment, and again while requests in flight still write. */
 async function keepCheckpointing(): Promise<void> {
   await checkpointDb();
   setTimeout(() => void keepCheckpointing().catch(() => undefined), 50).unref();
