@@ -8,9 +8,10 @@ const USUAL_KNOT = "taut-line-hitch";
 /** Leans are looked for at line angles this far apart, degrees: the best lean changes little in between. */
 const LINE_ANGLE_STEP_DEG = 5;
 /** Leans that are tried first, degrees, and how far to either side of the best of them: what an eye can set. */
-const COARSE_LEANS_DEG: readonly number[] = [0, 10, 20, 30, 40, -10];
+const COARSE_LEANS_DEG: readonly number[] = [0, 10, 20, 30, 40];
 const LEAN_STEP_DEG = 5;
-const LEAST_LEAN_DEG = -10;
+/** Never towards the pull: what is gained there rests on plane wedges, which overstate it (judgement). */
+const LEAST_LEAN_DEG = 0;
 /** A line that never breaks, so that the lean is that of the stake in the ground. */
 const STRONG_LINE: Rigging["line"] = { material: "uhmwpe", diameterMm: 20 };
 
@@ -91,7 +92,7 @@ export function rigAtBestLean(
 
 const isLeanIdle = ({ mode }: Strength): boolean => mode === "line-breaks" || mode === "head-gives" || mode === "rated";
 
-/** The best lean of a stake in a ground, −10…45° in steps of 5°; among equals the nearest to upright. */
+/** The best lean of a stake in a ground, 0…45° in steps of 5°; among equals the nearest to upright. */
 function recallBestLean(
   prepared: PreparedCamp,
   shelter: PreparedShelter,
