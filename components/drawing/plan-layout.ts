@@ -105,7 +105,7 @@ export function layoutPlan(input: PlanLayoutInput): PlanLayout {
       pullDeg: point.outwardDeg + 180,
       state: [x, isAbove ? y + NUMBER_SIZE / 2 : y - NUMBER_SIZE / 2] as Point,
       numberAt: [x, isAbove ? y - STATE_SIZE / 2 : y + STATE_SIZE / 2 + 1] as Point,
-      noteAt: noteBeside(middle, point.anchor, point.outwardDeg, [...labelBoxes, ...taken, cloth], width, height),
+      noteAt: noteBeside(middle, point.anchor, point.outwardDeg, [...labelBoxes, ...taken], cloth, width, height),
     };
   });
   const bar = scaleBar(fit.scale, isSmall ? 80 : 110);
@@ -210,7 +210,8 @@ function noteBeside(
   middle: Point,
   anchor: Point,
   outwardDeg: number,
-  busy: readonly Box[],
+  marks: readonly Box[],
+  cloth: Box,
   width: number,
   height: number,
 ): Point {
@@ -229,7 +230,9 @@ function noteBeside(
   const cost = ([x, y]: Point) => {
     const box = boxAt(x, y, 92, 20);
     const outside = x < 50 || x > width - 50 || y < 14 || y > height - 14 ? 1000 : 0;
-    return outside + busy.reduce((sum, other) => sum + overlap(box, other), 0);
+    // A mark must stay readable; on the cloth the note only looks worse.
+    const onMarks = marks.reduce((sum, other) => sum + overlap(box, other), 0);
+    return outside + 4 * onMarks + 0.2 * overlap(box, cloth);
   };
   return options.reduce((best, option) => (cost(option) < cost(best) ? option : best));
 }

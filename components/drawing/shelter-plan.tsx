@@ -102,7 +102,7 @@ export function ShelterPlan({
         return <circle key={`${x} ${y}`} cx={x} cy={y} r={4} className="fill-ink stroke-sheet" strokeWidth={1.2} />;
       })}
       {wind && <WindOnPlan layout={layout} />}
-      {layout.tieOuts.map((spot) => (
+      {withLast(layout.tieOuts, selectedTieOutId).map((spot) => (
         <TieOutDrawing
           key={spot.tieOutId}
           spot={spot}
@@ -115,6 +115,12 @@ export function ShelterPlan({
       <ScaleBar at={layout.scale.at} length={layout.scale.length} lengthM={layout.scale.lengthM} />
     </svg>
   );
+}
+
+/** The selected one is drawn over its neighbours. */
+function withLast(spots: PlanLayout["tieOuts"], lastId: string | null): PlanLayout["tieOuts"] {
+  const isLast = (spot: PlanLayout["tieOuts"][number]) => Number(spot.tieOutId === lastId);
+  return spots.toSorted((a, b) => isLast(a) - isLast(b));
 }
 
 export function doubledOf(marks: Readonly<Record<string, TieOutMarks>>): ReadonlySet<string> {
