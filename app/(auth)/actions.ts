@@ -10,6 +10,7 @@ import {
   newPasswordFormSchema,
   signInFormSchema,
   signUpFormSchema,
+  signUpWithInvitationFormSchema,
   tokenFormSchema,
 } from "@/lib/domain/account/schema";
 import { action } from "@/lib/http/action";
@@ -54,8 +55,8 @@ export const acceptInvitationAction = action(async ({ ctx, input }) => {
 });
 
 export const signUpWithInvitationAction = publicAction(async ({ input }) => {
-  const form = newPasswordFormSchema.parse(input);
-  const { tripId, email } = await signUpWithInvitation({ input: { ...form, name: String(input.name ?? "") } });
+  const form = signUpWithInvitationFormSchema.parse(input);
+  const { tripId, email } = await signUpWithInvitation({ input: form });
   await callAuth("/sign-in/email", { body: { email, password: form.password } });
   redirect(`/trips/${tripId}`);
 });

@@ -13,7 +13,7 @@ export function publicAction(
   return async (_state: ActionState<null>, form: FormData): Promise<ActionState<null>> => {
     const requestId = (await headers()).get(REQUEST_ID_HEADER) ?? newId();
     try {
-      const { message } = await handler({ input: readFormData(form) });
+      const { message } = await handler({ input: form instanceof FormData ? readFormData(form) : {} });
       return { status: "done", message, data: null };
     } catch (error) {
       return toRefusedState(error, requestId);

@@ -3,7 +3,12 @@
 import { revalidatePath } from "next/cache";
 import { redirect } from "next/navigation";
 import { callAuth } from "@/lib/auth/call-auth";
-import { changePasswordFormSchema, deleteAccountFormSchema, nameFormSchema } from "@/lib/domain/account/schema";
+import {
+  changePasswordFormSchema,
+  deleteAccountFormSchema,
+  nameFormSchema,
+  sessionRefInput,
+} from "@/lib/domain/account/schema";
 import { preferencesSchema } from "@/lib/domain/preferences";
 import { action } from "@/lib/http/action";
 import { endSession } from "@/lib/services/account/end-session";
@@ -28,7 +33,7 @@ export const savePreferencesAction = action(async ({ ctx, input }) => {
 });
 
 export const endSessionAction = action(async ({ ctx, input }) => {
-  await endSession({ ctx, input: { sessionId: String(input.sessionId) } });
+  await endSession({ ctx, input: sessionRefInput.parse(input) });
   revalidatePath("/account");
   return { message: "That device is signed out." };
 });

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { idSchema } from "../ids";
 import { personNameSchema } from "../person/schema";
 import { emailSchema } from "../text";
 
@@ -20,6 +21,8 @@ export const signUpFormSchema = z.object({ name: personNameSchema, email: emailS
 export const emailFormSchema = z.object({ email: emailSchema });
 export const tokenFormSchema = z.object({ token: tokenSchema });
 export const newPasswordFormSchema = z.object({ token: tokenSchema, password: newPasswordSchema });
+export const signUpWithInvitationFormSchema = newPasswordFormSchema.extend({ name: personNameSchema });
+export const sessionRefInput = z.object({ sessionId: idSchema });
 export const nameFormSchema = z.object({ name: personNameSchema });
 export const changePasswordFormSchema = z.object({ currentPassword: passwordSchema, newPassword: newPasswordSchema });
 export const deleteAccountFormSchema = z.object({ password: passwordSchema });

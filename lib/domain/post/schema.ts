@@ -16,6 +16,8 @@ export const PIECES = [
 export const PIECE_KEYS = PIECES.map((piece) => piece.key);
 export type PieceKey = (typeof PIECES)[number]["key"];
 
+export const messageRefInput = z.object({ tripId: idSchema, messageId: idSchema });
+
 export const sendInput = z.object({
   tripId: idSchema,
   /** Made by the client: a double click has one effect. */

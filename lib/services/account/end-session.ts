@@ -1,13 +1,11 @@
 import { and, eq } from "drizzle-orm";
-import { z } from "zod";
+import type { z } from "zod";
 import { withTransaction } from "@/db/client";
 import { session } from "@/db/schema";
-import { idSchema } from "@/lib/domain/ids";
+import { sessionRefInput } from "@/lib/domain/account/schema";
 import { AppError } from "@/lib/errors";
 import type { Context } from "@/lib/services/context/context";
 import { parseInput } from "../trips/parse-input";
-
-const endSessionInput = z.object({ sessionId: idSchema });
 
 /** Signs one of your own devices out, at once. */
 export async function endSession({
@@ -15,9 +13,9 @@ export async function endSession({
   input,
 }: {
   ctx: Context;
-  input: z.input<typeof endSessionInput>;
+  input: z.input<typeof sessionRefInput>;
 }): Promise<void> {
-  const { sessionId } = parseInput(endSessionInput, input);
+  const { sessionId } = parseInput(sessionRefInput, input);
   const ended = await withTransaction((tx) =>
     tx
       .delete(session)

@@ -29,7 +29,7 @@ interface Desk {
 }
 
 /** Own list and the cards of shelters one sleeps in; whatever else there may be reads as not there. */
-function requireOwn(paper: Paper, { state, standing }: Desk): void {
+function requireOwn(paper: Paper, state: TripState, standing: Standing): void {
   if (isAllowed(standing.role, "paper.all")) return;
   const isOwn =
     (paper.kind === "pack-list" && paper.personId === standing.personId) ||
@@ -40,6 +40,29 @@ function requireOwn(paper: Paper, { state, standing }: Desk): void {
           sleepers.some((one) => one.personId === standing.personId && one.pitchId === paper.pitchId),
       ));
   if (!isOwn) throw new AppError("not-found", "There is no such paper.");
+}
+
+function requireThere(paper: Paper, state: TripState): void {
+  if (paper.kind === "pack-list" && !state.people.some((one) => one.id === paper.personId)) {
+    throw new AppError("not-found", "There is no such person on this trip.");
+  }
+  if (paper.kind !== "field-card" && paper.kind !== "pitch-card") return;
+  const { pitches } = findCampState(state, paper.campId);
+  if (paper.kind === "pitch-card" && !pitches.some((one) => one.id === paper.pitchId)) {
+    throw new AppError("not-found", "That shelter is not pitched at this camp.");
+  }
+}
+
+/** The trip as it is printed. Looked at twice: who may not print, or prints what isn't there, leaves no mark. */
+async function loadPrinted(ctx: Context, paper: Paper, tripId: string, standing: Standing): Promise<TripState> {
+  const seen = await loadTripState(getDb(), tripId);
+  requireOwn(paper, seen, standing);
+  requireThere(paper, seen);
+  await markHandedOut(ctx, tripId);
+  const state = await loadTripState(getDb(), tripId);
+  requireOwn(paper, state, standing);
+  requireThere(paper, state);
+  return state;
 }
 
 /** "3 of 5", or "3–4 of 5" for two nights. */
@@ -92,12 +115,10 @@ export async function getPaperDocument({
 }): Promise<PaperDocument> {
   const { tripId, paper } = parseInput(getPaperDocumentInput, input);
   const standing = await requirePermission(ctx, tripId, "paper.own");
-  await markHandedOut(ctx, tripId);
   const db = getDb();
-  const state = await loadTripState(db, tripId);
+  const state = await loadPrinted(ctx, paper, tripId, standing);
   const { speedUnit } = await getPreferences({ ctx });
   const desk: Desk = { state, standing, speedUnit };
-  requireOwn(paper, desk);
   const header = writeHeader(desk, paper);
   const { contacts } = state.trip;
   switch (paper.kind) {
@@ -107,9 +128,6 @@ export async function getPaperDocument({
     }
     case "pitch-card": {
       const own = findCampState(state, paper.campId);
-      if (!own.pitches.some((one) => one.id === paper.pitchId)) {
-        throw new AppError("not-found", "That shelter is not pitched at this camp.");
-      }
       const camp = await toPaperCamp(desk, own, paper.pitchId);
       return { kind: "pitch-card", header, contacts, camp, pitchIds: [paper.pitchId] };
     }

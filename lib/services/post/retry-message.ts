@@ -1,14 +1,12 @@
 import { and, eq } from "drizzle-orm";
-import { z } from "zod";
+import type { z } from "zod";
 import { withTransaction } from "@/db/client";
 import { outboxMessage } from "@/db/schema";
 import { requirePermission } from "@/lib/auth/permission";
-import { idSchema } from "@/lib/domain/ids";
+import { messageRefInput } from "@/lib/domain/post/schema";
 import { AppError } from "@/lib/errors";
 import type { Context } from "@/lib/services/context/context";
 import { parseInput } from "../trips/parse-input";
-
-const retryMessageInput = z.object({ tripId: idSchema, messageId: idSchema });
 
 /** Tries a message again now: one that failed, or one that waits for its next turn. */
 export async function retryMessage({
@@ -16,9 +14,9 @@ export async function retryMessage({
   input,
 }: {
   ctx: Context;
-  input: z.input<typeof retryMessageInput>;
+  input: z.input<typeof messageRefInput>;
 }): Promise<void> {
-  const { tripId, messageId } = parseInput(retryMessageInput, input);
+  const { tripId, messageId } = parseInput(messageRefInput, input);
   await withTransaction(async (tx) => {
     await requirePermission(ctx, tripId, "post.send", tx);
     const scope = and(eq(outboxMessage.id, messageId), eq(outboxMessage.tripId, tripId));

@@ -3,6 +3,7 @@
 import { revalidatePath } from "next/cache";
 import { redirect } from "next/navigation";
 import { kitItemCreateInput, kitItemDeleteInput, kitItemUpdateInput } from "@/lib/domain/kit/schema";
+import { tripRefInput } from "@/lib/domain/trip/schema";
 import { AppError } from "@/lib/errors";
 import { action } from "@/lib/http/action";
 import { createKitItem } from "@/lib/services/kit/create-kit-item";
@@ -37,7 +38,7 @@ export const updateKitItemAction = action(async ({ ctx, input }) => {
 });
 
 export const countKitItemAction = action<{ readonly version: number }>(async ({ ctx, input }) => {
-  const kit = await listKit({ ctx, input: { tripId: String(input.tripId) } });
+  const kit = await listKit({ ctx, input: tripRefInput.parse(input) });
   const item = kit.find((one) => one.id === input.kitItemId);
   if (!item) throw new AppError("not-found", "It is no longer in the kit. Load the page again.");
   const details = { ...item.details, count: input.count };
