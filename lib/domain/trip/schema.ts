@@ -11,8 +11,13 @@ export const timeZoneSchema = z
   .string({ error: "Choose a time zone." })
   .refine((zone) => TIME_ZONES.includes(zone), "Choose a time zone from the list.");
 
-/** A calendar day without a time, yyyy-mm-dd. */
-export const daySchema = z.iso.date({ error: "Enter a date." });
+const FIRST_DAY = "1970-01-01";
+const LAST_DAY = "2199-12-31";
+
+/** A calendar day without a time, yyyy-mm-dd; the nights after it still have years of four digits. */
+export const daySchema = z.iso
+  .date({ error: "Enter a date." })
+  .refine((day) => day >= FIRST_DAY && day <= LAST_DAY, "Enter a date between 1970 and 2199.");
 
 export const contactSchema = z.object({
   name: lineText("a name", 80),
