@@ -50,7 +50,6 @@ if (step("build", "npm", ["run", "build"], { NODE_ENV: "production" })) {
     ["test", "--config", "tests/helpers/playwright.config.ts"],
     {
       CHROMIUM: chromium,
-      PLAYWRIGHT_JSON_OUTPUT_NAME: playwrightReport,
     },
   );
 }

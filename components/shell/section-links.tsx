@@ -18,7 +18,7 @@ export function SectionLinks({ label, links }: { readonly label: string; readonl
     .toSorted((a, b) => b.href.length - a.href.length)[0];
   return (
     <nav aria-label={label}>
-      <ul className="flex flex-wrap gap-x-5">
+      <ul className="flex gap-x-5 overflow-x-auto whitespace-nowrap lg:flex-wrap">
         {links.map((link) => (
           <li key={link.href}>
             <Link

@@ -15,9 +15,10 @@ export default defineConfig({
   retries: 0,
   timeout: 120_000,
   expect: { timeout: 15_000 },
-  reporter: [["list"], ["json"]],
+  reporter: [["list"], ["json", { outputFile: `${root}test-results/playwright.json` }]],
   use: {
     baseURL: `http://localhost:${PORT}`,
+    actionTimeout: 10_000,
     locale: "en-GB",
     timezoneId: "Europe/London",
     screenshot: "only-on-failure",
@@ -41,7 +42,8 @@ export default defineConfig({
     url: `http://localhost:${PORT}/readyz`,
     env: { E2E_PORT: String(PORT) },
     timeout: 180_000,
-    reuseExistingServer: false,
+    // By hand: E2E_PORT of a server that already runs.
+    reuseExistingServer: process.env.E2E_REUSE === "1",
     gracefulShutdown: { signal: "SIGTERM", timeout: 5000 },
     stdout: "ignore",
     stderr: "pipe",
