@@ -120,6 +120,18 @@ export function capacityNumbers(input: CapacityInput): {
   };
 }
 
+/**
+ * Median tension at which the ground gives, whatever the stake's bending, its head and the line would do: what a pull
+ * test is held against. Null where no ground is tested (weights, trees, fixings) or the anchor can't be used here.
+ * Input, @throws and sources as `anchorCapacity`.
+ */
+export function groundMedianN(input: CapacityInput): number | null {
+  const isInGround = ["stake", "screw-in", "deadman", "snow-plate"].includes(input.anchor.class);
+  const result = isInGround ? evaluate(input) : null;
+  // Limits stand in the order in which they were found: the ground's own is always the first.
+  return result?.status === "ok" ? (result.limits[0]?.medianN ?? null) : null;
+}
+
 /** How it gives, for people. */
 export function capacitySentence(mode: CapacityMode, anchor: AnchorSpec): string {
   switch (mode) {

@@ -5,6 +5,7 @@
 import { readFileSync, writeFileSync } from "node:fs";
 import { fileURLToPath } from "node:url";
 import { PUBLISHED_CASES } from "../fixtures/published-cases";
+import { PUBLISHED_LEARNING_CASES } from "../fixtures/published-cases-learning";
 import { PUBLISHED_STRUCTURE_CASES } from "../fixtures/published-cases-structure";
 
 const FILE = fileURLToPath(new URL("../../DEVELOPERS.md", import.meta.url));
@@ -25,7 +26,7 @@ function cell(text: string): string {
 }
 
 export function checksTable(): string {
-  const rows = [...PUBLISHED_CASES, ...PUBLISHED_STRUCTURE_CASES].map((row) => {
+  const rows = [...PUBLISHED_CASES, ...PUBLISHED_STRUCTURE_CASES, ...PUBLISHED_LEARNING_CASES].map((row) => {
     const ours = row.ours();
     const numbers = [`${figure(row.published)} ${row.unit}`, figure(ours), difference(row.published, ours)];
     return `| ${[row.section, row.what, row.source, ...numbers].map((text) => cell(text.trim())).join(" | ")} |`;
