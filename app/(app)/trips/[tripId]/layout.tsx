@@ -59,9 +59,9 @@ export default async function TripLayout({ params, children }: TripLayoutProps) 
       <div className="no-print border-b border-hair px-4 sm:px-6">
         <SectionLinks label="Trip" links={links} />
         {hasRail && (
-          <div className="border-t border-hair py-1 lg:hidden">
+          <nav aria-label="Nights" className="border-t border-hair py-1 lg:hidden">
             <NightsStrip {...nights} />
-          </div>
+          </nav>
         )}
       </div>
       <div className={hasRail ? "lg:grid lg:grid-cols-[16rem_minmax(0,1fr)]" : ""}>
