@@ -43,7 +43,7 @@ export function PersonChip({ personId, name, placeId, places, isPicked, onPick, 
         aria-label={`Where ${name} sleeps`}
         value={placeId}
         onChange={(event) => onMove(personId, event.target.value)}
-        className="min-h-11 w-26 min-w-0 shrink-0 rounded-field bg-transparent px-2 text-13 text-pencil"
+        className="min-h-11 w-32 min-w-0 shrink-0 rounded-field bg-transparent px-2 text-13 text-pencil"
       >
         {places.map((place) => (
           <option key={place.id} value={place.id}>

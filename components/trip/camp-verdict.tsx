@@ -6,7 +6,7 @@ import { formatHoldsTo } from "@/lib/format/speeds";
 type SpeedUnit = Preferences["speedUnit"];
 
 /** "thin: holds to 71 km/h", "gives way at 62 km/h", "no gust yet". */
-export function describeVerdict(camp: CampSummary, unit: SpeedUnit): string {
+function describeVerdict(camp: CampSummary, unit: SpeedUnit): string {
   const holdsTo = camp.holdsToGustMs === null ? null : formatHoldsTo(camp.holdsToGustMs, unit);
   switch (camp.verdict) {
     case "holds":
@@ -34,11 +34,11 @@ function describeUnknown(camp: CampSummary): string {
   return found?.[1] ?? (camp.gaps.length > 0 ? "something is missing" : "not planned yet");
 }
 
-export function CampVerdict({ camp, unit, text }: { camp: CampSummary; unit: SpeedUnit; text?: string }) {
+export function CampVerdict({ camp, unit }: { readonly camp: CampSummary; readonly unit: SpeedUnit }) {
   return (
     <span className={`inline-flex items-baseline gap-2 ${STATE_TONES[camp.verdict]}`}>
       <StateMark verdict={camp.verdict} isDecorative className="translate-y-[3px]" />
-      <span className={camp.verdict === "gives-way" ? "font-bold" : ""}>{text ?? describeVerdict(camp, unit)}</span>
+      <span className={camp.verdict === "gives-way" ? "font-bold" : ""}>{describeVerdict(camp, unit)}</span>
     </span>
   );
 }

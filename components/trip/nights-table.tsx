@@ -4,7 +4,7 @@ import type { CampSummary } from "@/lib/domain/views";
 import { formatDayShort } from "@/lib/format/days";
 import { formatAltitude } from "@/lib/format/lengths";
 import { formatSpeed } from "@/lib/format/speeds";
-import { CampVerdict, describeVerdict } from "./camp-verdict";
+import { CampVerdict } from "./camp-verdict";
 
 const NTH = ["", "second night", "third night", "fourth night", "fifth night", "sixth night", "seventh night"];
 
@@ -69,11 +69,7 @@ export function NightsTable({
               )}
             </td>
             <td className="col-start-2 text-15 sm:w-56">
-              <CampVerdict
-                camp={camp}
-                unit={speedUnit}
-                text={index > 0 ? `the same: ${describeVerdict(camp, speedUnit)}` : undefined}
-              />
+              <CampVerdict camp={camp} unit={speedUnit} />
             </td>
           </tr>
         ))}

@@ -7,7 +7,7 @@ import { BEAUFORT } from "@/lib/calc/tables/beaufort";
 import { EXPOSURES } from "@/lib/calc/tables/exposure";
 import type { CampDetails } from "@/lib/domain/camp/schema";
 import type { Preferences } from "@/lib/domain/preferences";
-import { formatSpeed, speedInUnit } from "@/lib/format/speeds";
+import { speedInUnit } from "@/lib/format/speeds";
 
 type SpeedUnit = Exclude<Preferences["speedUnit"], "Beaufort">;
 const SPEED_OPTIONS = (["km/h", "m/s", "mph", "knots"] as const).map((unit) => ({ value: unit, label: unit }));
@@ -88,11 +88,4 @@ export function WindFields({
       />
     </div>
   );
-}
-
-/** For a summary line: "gust 75 km/h". */
-export function describeStrength(wind: CampDetails["wind"], unit: Preferences["speedUnit"]): string | null {
-  if (!wind) return null;
-  if (wind.kind === "beaufort") return `Beaufort ${wind.number}`;
-  return `${wind.kind} ${formatSpeed(wind.speedMs, unit)}`;
 }

@@ -48,7 +48,7 @@ async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView
     <>
       <PageHeading
         title={`Cards and lists, version ${trip.paperVersion}`}
-        lead="Every change that is printed makes a new version. Look at a piece before you send it."
+        lead="A change after cards have gone out makes a new version. Look at a piece before you send it."
       >
         {maySend && <LinkButton href="#send">Preview and send</LinkButton>}
       </PageHeading>

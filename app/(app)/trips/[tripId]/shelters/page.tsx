@@ -44,6 +44,7 @@ export default async function SheltersPage({ params }: { readonly params: Promis
       >
         {addButton}
       </PageHeading>
+      <h2 className="sr-only">Shelters of the trip</h2>
       <ShelterGrid>
         {shelters.map((shelter) => {
           const { name } = shelter.details;
@@ -66,7 +67,7 @@ export default async function SheltersPage({ params }: { readonly params: Promis
                 {can("shelter.edit") && (
                   <>
                     <OneButtonForm action={copyShelterAction} values={ids}>
-                      Copy{" "}<span className="sr-only">{name}</span>
+                      Copy <span className="sr-only">{name}</span>
                     </OneButtonForm>
                     <DeleteButton name={name} action={deleteShelterAction} values={ids}>
                       The shelter leaves the trip. Your own gear stays as it is.

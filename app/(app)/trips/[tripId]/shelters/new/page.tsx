@@ -34,7 +34,7 @@ export default async function NewShelterPage({ params, searchParams }: NewShelte
                 <li key={one.id}>
                   <ShelterCard details={one.details}>
                     <LinkButton href={`${here}?gear=${one.id}`}>
-                      Take{" "}<span className="sr-only">{one.details.name}</span>
+                      Take <span className="sr-only">{one.details.name}</span>
                     </LinkButton>
                   </ShelterCard>
                 </li>
