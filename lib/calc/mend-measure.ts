@@ -1,4 +1,4 @@
-import { evaluateTieOut, marginOf } from "./camp";
+import { evaluatePlacements, evaluateTieOut, marginOf } from "./camp";
 import { isKnownTieOut, prepareCamp, type KnownTieOut, type PreparedCamp, type PreparedShelter } from "./prepare-camp";
 import { isDriven, readPlan, rigAtBestLean } from "./rig-anchor";
 import { spotKey } from "./tie-out-strength";
@@ -108,7 +108,14 @@ export function measurePitchChange(one: MendCase, pitch: PitchedShelter, draft: 
   if (then < before * (1 - LEAST_GAIN / 2)) return null;
   const placement = placements.find((other) => other.tieOutId === one.tieOut.tieOut.id) ?? null;
   const result = evaluateTieOut(after.prepared, after.shelter, after.tieOut, placement);
-  return asMend(one.now, { ...draft, placements: moved }, result);
+  const mend = asMend(one.now, { ...draft, placements: moved }, result);
+  if (!mend) return null;
+  // Every tie-out of the shelter pulls otherwise now: what the whole shelter holds to is what counts.
+  const others = input.placements.filter((other) => other.pitchId !== pitch.pitchId);
+  const whole = evaluatePlacements(after.prepared, [...others, ...placements]).shelters.find(
+    (shelter) => shelter.pitchId === pitch.pitchId,
+  );
+  return { ...mend, holdsToGustMs: Math.min(mend.holdsToGustMs, whole?.holdsToGustMs ?? mend.holdsToGustMs) };
 }
 
 /** The single stakes of the shelter that another lean now makes better; pins stay. */

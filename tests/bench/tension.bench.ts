@@ -15,7 +15,8 @@ export interface TensionFigures {
 const DIRECTIONS = Array.from({ length: 24 }, (_, index) => index * 15);
 const PRESSURE_PA = 200;
 
-const median = (values: readonly number[]): number => [...values].sort((a, b) => a - b)[values.length >> 1] ?? Number.NaN;
+const median = (values: readonly number[]): number =>
+  [...values].sort((a, b) => a - b)[values.length >> 1] ?? Number.NaN;
 
 export function benchTension(): TensionFigures[] {
   return SHELTER_KINDS.map(({ kind }) => {

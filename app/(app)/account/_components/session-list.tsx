@@ -25,7 +25,7 @@ export function SessionList({ sessions, currentId }: SessionListProps) {
             <ActionForm action={endSessionAction}>
               <input type="hidden" name="sessionId" value={one.id} />
               <SubmitButton look="quiet">
-                Sign out{" "}<span className="sr-only">{one.device}</span>
+                Sign out <span className="sr-only">{one.device}</span>
               </SubmitButton>
             </ActionForm>
           )}
