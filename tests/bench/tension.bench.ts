@@ -52,3 +52,20 @@ export function benchTension(): TensionFigures[] {
     };
   });
 }
+
+export default async function bench(report: (row: { name: string; value: string; target?: string }) => void) {
+  const figures = benchTension();
+  for (const { kind, nodes, tieOuts, medianCaseMs, designAndKnockOutsMs, wholeAnalysisMs } of figures) {
+    report({
+      name: `${kind}, ${nodes} nodes: one case, median`,
+      value: `${medianCaseMs.toFixed(2)} ms`,
+      target: "≤ 5 ms",
+    });
+    report({
+      name: `${kind}, ${tieOuts} tie-outs: all cases and knock-outs`,
+      value: `${designAndKnockOutsMs.toFixed(0)} ms`,
+      target: "≤ 500 ms",
+    });
+    report({ name: `${kind}: whole analysis with levels`, value: `${wholeAnalysisMs.toFixed(0)} ms` });
+  }
+}
