@@ -11,16 +11,14 @@ export const MAX_SWEEP_STEPS = 91;
 /** One angle, or a sweep from one to another. */
 function angleOrSweep(what: string, min: number, max: number) {
   const one = numberBetween(what, min, max, "°");
-  return z.union([
-    one,
-    z
-      .object({ from: one, to: one, step: numberBetween("the step", 1, 90, "°") })
-      .refine((sweep) => sweep.to >= sweep.from, { path: ["to"], error: "The end has to be at or after the start." })
-      .refine((sweep) => (sweep.to - sweep.from) / sweep.step < MAX_SWEEP_STEPS, {
-        path: ["step"],
-        error: `At most ${MAX_SWEEP_STEPS} steps.`,
-      }),
-  ]);
+  const sweep = z
+    .object({ from: one, to: one, step: numberBetween("the step", 1, 90, "°") })
+    .refine(({ from, to }) => to >= from, { path: ["to"], error: "The end has to be at or after the start." })
+    .refine(({ from, to, step }) => (to - from) / step < MAX_SWEEP_STEPS, {
+      path: ["step"],
+      error: `At most ${MAX_SWEEP_STEPS} steps.`,
+    });
+  return z.union([one, sweep], { error: `Give ${what} as a number, or as { from, to, step }.` });
 }
 
 const groundStateSchema: z.ZodType<GroundState> = z.object({
@@ -37,16 +35,20 @@ const groundStateSchema: z.ZodType<GroundState> = z.object({
 
 const builtInIdSchema = z.string().regex(/^[a-z0-9-]{3,64}$/, "Unknown anchor.");
 
+const anchorSchema = z.union([builtInIdSchema, anchorSpecSchema], {
+  error: "Give the id of a built-in anchor, or the anchor's measures.",
+});
+
 /** One anchor, one ground, one line. `anchor` is the id of a built-in anchor or an anchor's own measures. */
 export const quickCheckInput = z.object({
-  anchor: z.union([builtInIdSchema, anchorSpecSchema]),
+  anchor: anchorSchema,
   ground: groundStateSchema,
   lineAngleDeg: angleOrSweep("the line angle", 0, 90),
   leanDeg: angleOrSweep("the lean", -10, 60).default(0),
   depthOutM: numberBetween("the length left out of the ground", 0, 1.5, "m").default(0),
   tandem: z
     .object({
-      anchor: z.union([builtInIdSchema, anchorSpecSchema]),
+      anchor: anchorSchema,
       spacingM: numberBetween("the distance in line", 0.02, 3, "m"),
     })
     .nullable()
