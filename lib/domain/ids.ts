@@ -5,7 +5,5 @@ export { newId } from "./new-id";
 
 /** An identifier as it may arrive from outside: ours, or better-auth's (letters and digits). */
 export const idSchema = z
-  .string()
-  .min(16)
-  .max(64)
-  .regex(/^[0-9A-Za-z]+$/, "That is not an identifier of ours.");
+  .string({ error: "That is not an identifier of ours." })
+  .regex(/^[0-9A-Za-z]{16,64}$/, "That is not an identifier of ours.");

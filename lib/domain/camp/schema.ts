@@ -30,11 +30,15 @@ export const groundPatchSchema = z.object({
 });
 export type GroundPatch = z.infer<typeof groundPatchSchema>;
 
-export const windStrengthSchema = z.discriminatedUnion("kind", [
-  z.object({ kind: z.literal("gust"), speedMs: numberBetween("the gust", 0, 90, "m/s") }),
-  z.object({ kind: z.literal("mean"), speedMs: numberBetween("the mean wind", 0, 60, "m/s") }),
-  z.object({ kind: z.literal("beaufort"), number: numberBetween("the Beaufort number", 0, 12).int() }),
-]);
+export const windStrengthSchema = z.discriminatedUnion(
+  "kind",
+  [
+    z.object({ kind: z.literal("gust"), speedMs: numberBetween("the gust", 0, 90, "m/s") }),
+    z.object({ kind: z.literal("mean"), speedMs: numberBetween("the mean wind", 0, 60, "m/s") }),
+    z.object({ kind: z.literal("beaufort"), number: numberBetween("the Beaufort number", 0, 12).int() }),
+  ],
+  { error: "Choose gust, mean wind or Beaufort number." },
+);
 
 export const hillSchema = z.object({
   shape: z.enum(["hill", "cliff"]),

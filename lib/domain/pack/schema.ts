@@ -32,15 +32,19 @@ export const carrySaveInput = z.object({
   tripId: idSchema,
   carries: z
     .array(
-      z.discriminatedUnion("type", [
-        z.object({ type: z.literal("shelter"), personId: idSchema, shelterId: idSchema }),
-        z.object({
-          type: z.literal("kit"),
-          personId: idSchema,
-          kitItemId: idSchema,
-          count: numberBetween("the count", 1, 500).int(),
-        }),
-      ]),
+      z.discriminatedUnion(
+        "type",
+        [
+          z.object({ type: z.literal("shelter"), personId: idSchema, shelterId: idSchema }),
+          z.object({
+            type: z.literal("kit"),
+            personId: idSchema,
+            kitItemId: idSchema,
+            count: numberBetween("the count", 1, 500).int(),
+          }),
+        ],
+        { error: "Give a shelter or a thing of the kit." },
+      ),
     )
     .max(500),
 });

@@ -5,11 +5,15 @@ export const PAPER_SIZES = ["A4", "LETTER"] as const;
 export type PaperSize = (typeof PAPER_SIZES)[number];
 
 /** A piece of paper. `personId` of a pack list is whose it is. */
-export const paperSchema = z.discriminatedUnion("kind", [
-  z.object({ kind: z.literal("field-card"), campId: idSchema }),
-  z.object({ kind: z.literal("pitch-card"), campId: idSchema, pitchId: idSchema }),
-  z.object({ kind: z.literal("pack-list"), personId: idSchema }),
-  z.object({ kind: z.literal("booklet") }),
-]);
+export const paperSchema = z.discriminatedUnion(
+  "kind",
+  [
+    z.object({ kind: z.literal("field-card"), campId: idSchema }),
+    z.object({ kind: z.literal("pitch-card"), campId: idSchema, pitchId: idSchema }),
+    z.object({ kind: z.literal("pack-list"), personId: idSchema }),
+    z.object({ kind: z.literal("booklet") }),
+  ],
+  { error: "Say which paper: field-card, pitch-card, pack-list or booklet." },
+);
 export type Paper = z.infer<typeof paperSchema>;
 export const paperSizeSchema = z.enum(PAPER_SIZES).default("A4");

@@ -37,16 +37,20 @@ export const placementSchema = z.object({
 const spot = { pitchId: idSchema, tieOutId: tieOutIdSchema };
 
 /** What somebody meant to do to a staking plan. Small, so that it can be queued, repeated and replayed. */
-export const planChangeSchema = z.discriminatedUnion("type", [
-  /** Put an anchor at a tie-out, with its rigging; replaces what is there. */
-  z.object({ type: z.literal("place"), placement: placementSchema }),
-  /** Back to the tray. */
-  z.object({ type: z.literal("lift"), ...spot }),
-  /** From one tie-out to another; what was there goes to the first. */
-  z.object({ type: z.literal("swap"), from: z.object(spot), to: z.object(spot) }),
-  /** The whole plan at once: an accepted proposal, an undo, a chosen version after a conflict. */
-  z.object({ type: z.literal("replace"), placements: z.array(placementSchema).max(600) }),
-]);
+export const planChangeSchema = z.discriminatedUnion(
+  "type",
+  [
+    /** Put an anchor at a tie-out, with its rigging; replaces what is there. */
+    z.object({ type: z.literal("place"), placement: placementSchema }),
+    /** Back to the tray. */
+    z.object({ type: z.literal("lift"), ...spot }),
+    /** From one tie-out to another; what was there goes to the first. */
+    z.object({ type: z.literal("swap"), from: z.object(spot), to: z.object(spot) }),
+    /** The whole plan at once: an accepted proposal, an undo, a chosen version after a conflict. */
+    z.object({ type: z.literal("replace"), placements: z.array(placementSchema).max(600) }),
+  ],
+  { error: "That is no change of a staking plan." },
+);
 export type PlanChange = z.infer<typeof planChangeSchema>;
 
 export const planIntentInput = z.object({
