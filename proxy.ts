@@ -47,6 +47,28 @@ function isForeignChange(request: NextRequest): boolean {
   return origin !== null && origin !== env.appUrl;
 }
 
+/** An address whose percent signs spell no text names nothing; the router itself would fail over it. */
+function isReadable(pathname: string): boolean {
+  try {
+    decodeURIComponent(pathname);
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+function refuse(status: 403 | 404, sentence: string): NextResponse {
+  return new NextResponse(sentence, { status, headers: { "Content-Type": "text/plain; charset=utf-8" } });
+}
+
+function answer(request: NextRequest, headers: Headers): NextResponse {
+  if (!isReadable(request.nextUrl.pathname)) return refuse(404, "There is nothing at this address.");
+  if (isForeignChange(request)) {
+    return refuse(403, `This request came from another address. Open ${env.appUrl} and try again.`);
+  }
+  return NextResponse.next({ request: { headers } });
+}
+
 export function proxy(request: NextRequest): NextResponse {
   const requestId = newId();
   const nonce = makeNonce();
@@ -59,12 +81,7 @@ export function proxy(request: NextRequest): NextResponse {
   // Nothing in front of this server is trusted to rename it.
   headers.delete("x-forwarded-host");
 
-  const response = isForeignChange(request)
-    ? new NextResponse(`This request came from another address. Open ${env.appUrl} and try again.`, {
-        status: 403,
-        headers: { "Content-Type": "text/plain; charset=utf-8" },
-      })
-    : NextResponse.next({ request: { headers } });
+  const response = answer(request, headers);
   response.headers.set("Content-Security-Policy", policy);
   response.headers.set("x-request-id", requestId);
   response.headers.set("Cache-Control", "private, no-store");

@@ -198,7 +198,7 @@ async function callRoute(name: string, when: string | undefined, caller: Caller)
     case "GET /api/trips/[tripId]/papers": {
       const [paper = "", whose] = (when ?? "").split(" of the ");
       const personId = people[whose === "participant" ? "Kirsi Lindqvist" : "Runa Amsel"] ?? "";
-      return request.get(api, { params: { paper, campId: ids.campId ?? "", personId } });
+      return request.get(api, { params: { paper, campId: ids.campId ?? "", personId }, timeout: 60_000 });
     }
     case "GET /demo/mail/[id]/[n]": {
       // The demo's first mails carry no file: then it is the same "not there" for everybody.
@@ -241,7 +241,7 @@ test("a route has no other methods", async () => {
   }
 });
 
-test("odd addresses are not found, and tell nothing", async () => {
+test("odd addresses are not found, and tell nothing", async ({ baseURL }) => {
   const trip = `/trips/${ids.tripId}`;
   const camp = `${trip}/camps/${ids.campId}`;
   const odd = [
@@ -251,7 +251,6 @@ test("odd addresses are not found, and tell nothing", async () => {
     "/trips/%00",
     "/trips/%E0%A4%A",
     "/trips/..%2f..%2fetc%2fpasswd",
-    "/trips/%2e%2e/%2e%2e",
     `${trip}/camps/x`,
     `${trip}/camps/x/place`,
     `${trip}/kit/x`,
@@ -281,7 +280,7 @@ test("odd addresses are not found, and tell nothing", async () => {
     for (const way of [
       `${path}.rsc`,
       `${path}.segments/_tree.segment.rsc`,
-      `/${path}`,
+      `${baseURL}/${path}`,
       `${path}/%2e`,
       `${path}?_rsc=1`,
     ]) {
