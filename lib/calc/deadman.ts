@@ -1,5 +1,6 @@
 import { requireInRange } from "./constants";
 import type { GroundNumbers } from "./ground";
+import { itemAt } from "./indexed";
 import { radiansFromDegrees } from "./units";
 
 /** Backfill over a buried body is disturbed: share of cohesive strength that it keeps (judgement). */
@@ -26,8 +27,8 @@ function interpolateShape(frictionAngleDeg: number): { readonly m: number; reado
     1,
     MEYERHOF_ADAMS.findIndex(([phi]) => phi >= clamped),
   );
-  const [phi0, m0, c0] = MEYERHOF_ADAMS[upper - 1] ?? [20, 0.05, 2.5];
-  const [phi1, m1, c1] = MEYERHOF_ADAMS[upper] ?? [45, 0.5, 9];
+  const [phi0, m0, c0] = itemAt(MEYERHOF_ADAMS, upper - 1);
+  const [phi1, m1, c1] = itemAt(MEYERHOF_ADAMS, upper);
   const share = (clamped - phi0) / (phi1 - phi0);
   return { m: m0 + (m1 - m0) * share, criticalRatio: c0 + (c1 - c0) * share };
 }

@@ -1,3 +1,4 @@
+import { itemAt } from "./indexed";
 import type { TieOut, TieOutKind, Vec3 } from "./types";
 import { bearingDeg } from "./vectors";
 
@@ -25,9 +26,9 @@ const turn = (degrees: number): number => ((degrees % 360) + 360) % 360;
 
 /** Name of a compass direction, to 45° (8 points) or 22.5° (16 points). */
 export function compassPoint(deg: number, points: 8 | 16 = 8): string {
-  if (points === 8) return POINTS_8[Math.round(turn(deg) / 45) % 8] ?? "north";
+  if (points === 8) return itemAt(POINTS_8, Math.round(turn(deg) / 45) % 8);
   const index = Math.round(turn(deg) / 22.5) % 16;
-  return (index % 2 === 0 ? POINTS_8[index / 2] : BETWEEN_8[(index - 1) / 2]) ?? "north";
+  return index % 2 === 0 ? itemAt(POINTS_8, index / 2) : itemAt(BETWEEN_8, (index - 1) / 2);
 }
 
 /**

@@ -1,4 +1,5 @@
 import { marginOf } from "./camp";
+import { itemAt } from "./indexed";
 import { proposePreparedPlan, type PlanOptions } from "./plan";
 import { prepareCamp } from "./prepare-camp";
 import { readPlan } from "./rig-anchor";
@@ -51,7 +52,7 @@ export function compareKits(
   const compared = kits.map((counts): KitComparison => {
     const weakestByCamp = prepared.map((camp) => {
       if (!camp.isComplete) return null;
-      const tray = choices.map((choice, index) => ({ ...choice, count: counts[index] ?? 0, found: false }));
+      const tray = choices.map((choice, index) => ({ ...choice, count: itemAt(counts, index), found: false }));
       // Only the counts differ between kits, so everything that was computed for the camp stays good.
       const { placements } = proposePreparedPlan({ ...camp, input: { ...camp.input, tray } }, options, []);
       const margins = readPlan(camp, placements).map(({ tieOut, strength }) =>
@@ -62,7 +63,7 @@ export function compareKits(
     const known = weakestByCamp.filter((margin) => margin !== null);
     return {
       counts,
-      massKg: choices.reduce((sum, choice, index) => sum + choice.massKg * (counts[index] ?? 0), 0),
+      massKg: choices.reduce((sum, choice, index) => sum + choice.massKg * itemAt(counts, index), 0),
       weakestByCamp,
       weakest: known.length === camps.length && camps.length > 0 ? Math.min(...known) : null,
     };

@@ -1,6 +1,7 @@
 /** What pull tests teach of a ground: the posterior of its strength factor, and how well each reading fits. */
 
 import { FIVE_PERCENT_QUANTILE, requireInRange } from "./constants";
+import { itemAt } from "./indexed";
 import { normalDistribution, normalQuantile } from "./statistics";
 
 /** One pull, as the natural logarithm of force ÷ the model's median for the ground. */
@@ -94,7 +95,7 @@ function smearedLogs(grid: readonly number[], weights: readonly number[], sigma:
     let sum = 0;
     grid.forEach((y, i) => {
       const z = (x - y) / sigma;
-      sum += (weights[i] ?? 0) * Math.exp(-0.5 * z * z);
+      sum += itemAt(weights, i) * Math.exp(-0.5 * z * z);
     });
     return Math.log(Math.max(sum, 1e-300));
   });
@@ -124,17 +125,17 @@ function priorLogs(input: LearnInput, grid: readonly number[], within: number, b
   for (const readings of places) {
     const data = gather(readings);
     const likelihood = normalised(grid.map((g) => logLikelihood(data, g, within)));
-    smearedLogs(grid, likelihood, local).forEach((log, i) => (common[i] = (common[i] ?? 0) + log));
+    smearedLogs(grid, likelihood, local).forEach((log, i) => (common[i] = itemAt(common, i) + log));
   }
   return smearedLogs(grid, normalised(common), local);
 }
 
 function interpolate(grid: readonly number[], values: readonly number[], x: number): number {
-  const first = grid[0] ?? 0;
-  const step = (grid[1] ?? 1) - first;
+  const first = itemAt(grid, 0);
+  const step = itemAt(grid, 1) - first;
   const at = Math.min(Math.max((x - first) / step, 0), grid.length - 1.000001);
   const i = Math.floor(at);
-  return (values[i] ?? 0) + (at - i) * ((values[i + 1] ?? 0) - (values[i] ?? 0));
+  return itemAt(values, i) + (at - i) * (itemAt(values, i + 1) - itemAt(values, i));
 }
 
 /**
@@ -161,7 +162,7 @@ export function groundPosterior(input: LearnInput): GroundPosterior {
     const first = weights.findIndex((one) => one > top * 1e-14);
     const last = weights.findLastIndex((one) => one > top * 1e-14);
     if (last - first > GRID_HALF / 4) break;
-    grid = evenGrid(grid[Math.max(0, first - 2)] ?? 0, grid[Math.min(grid.length - 1, last + 2)] ?? 0);
+    grid = evenGrid(itemAt(grid, Math.max(0, first - 2)), itemAt(grid, Math.min(grid.length - 1, last + 2)));
     weights = at(grid);
   }
   return { grid, weights, within, between };
@@ -169,20 +170,20 @@ export function groundPosterior(input: LearnInput): GroundPosterior {
 
 /** Share of the posterior, smeared by `sigma` (0 = the ground's factor itself), that lies below `x`. */
 export function shareBelow({ grid, weights }: GroundPosterior, x: number, sigma: number): number {
-  const step = (grid[1] ?? 1) - (grid[0] ?? 0);
+  const step = itemAt(grid, 1) - itemAt(grid, 0);
   let sum = 0;
   grid.forEach((g, i) => {
     // Without a smear each grid point stands for the strip about it.
     const share = sigma > 0 ? normalDistribution((x - g) / sigma) : Math.min(1, Math.max(0, (x - g) / step + 0.5));
-    sum += (weights[i] ?? 0) * share;
+    sum += itemAt(weights, i) * share;
   });
   return sum;
 }
 
 function quantile(posterior: GroundPosterior, p: number, sigma: number): number {
   const { grid } = posterior;
-  let low = (grid[0] ?? 0) - 8 * sigma;
-  let high = (grid[grid.length - 1] ?? 0) + 8 * sigma;
+  let low = itemAt(grid, 0) - 8 * sigma;
+  let high = itemAt(grid, grid.length - 1) + 8 * sigma;
   for (let i = 0; i < 48; i++) {
     const middle = (low + high) / 2;
     if (shareBelow(posterior, middle, sigma) < p) low = middle;
@@ -195,8 +196,8 @@ function quantile(posterior: GroundPosterior, p: number, sigma: number): number 
 export function learnGround(input: LearnInput): LearnedGround {
   const posterior = groundPosterior(input);
   const { grid, weights, within } = posterior;
-  const mean = grid.reduce((sum, g, i) => sum + g * (weights[i] ?? 0), 0);
-  const variance = grid.reduce((sum, g, i) => sum + (g - mean) ** 2 * (weights[i] ?? 0), 0);
+  const mean = grid.reduce((sum, g, i) => sum + g * itemAt(weights, i), 0);
+  const variance = grid.reduce((sum, g, i) => sum + (g - mean) ** 2 * itemAt(weights, i), 0);
   // The next pull scatters about the ground's factor: its median and 5 % value are what margins stand on.
   const median = quantile(posterior, 0.5, within);
   const fifth = quantile(posterior, 0.05, within);
@@ -270,7 +271,7 @@ export function fitCensoredLognormal(readings: readonly PullReading[]): Lognorma
     held.forEach((y, i) => {
       const z = (y - mean) / deviation;
       const hazard = Math.exp(-0.5 * z * z - 0.5 * Math.log(2 * Math.PI) - logNormalDistribution(-z));
-      second += (tails[i] ?? 0) + (mean + deviation * hazard - next) ** 2;
+      second += itemAt(tails, i) + (mean + deviation * hazard - next) ** 2;
     });
     const nextDeviation = Math.sqrt(second / n);
     const step = Math.abs(next - mean) + Math.abs(nextDeviation - deviation);
@@ -287,9 +288,9 @@ export function learningCurve(
   points: number,
 ): readonly { readonly logFactor: number; readonly before: number; readonly after: number }[] {
   const { grid, weights, between } = groundPosterior(input);
-  const step = (grid[1] ?? 1) - (grid[0] ?? 0);
+  const step = itemAt(grid, 1) - itemAt(grid, 0);
   const density = weights.map((one) => one / step);
-  const [low, high] = [grid[0] ?? 0, grid[grid.length - 1] ?? 0];
+  const [low, high] = [itemAt(grid, 0), itemAt(grid, grid.length - 1)];
   return Array.from({ length: points }, (_, i) => {
     const logFactor = normalQuantile(0.0005) * between + (i / (points - 1)) * 2 * normalQuantile(0.9995) * between;
     const z = logFactor / between;

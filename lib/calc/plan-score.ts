@@ -1,4 +1,5 @@
 import { marginOf } from "./camp";
+import { itemAt } from "./indexed";
 import type { PreparedCamp } from "./prepare-camp";
 import { readPlan } from "./rig-anchor";
 import { Stock } from "./stock";
@@ -47,7 +48,7 @@ export function scorePlan(prepared: PreparedCamp, placements: readonly Placement
 
 /** Lexicographic in the weighted margins, worst first, then lighter. Both of the same camp. */
 export function isBetter(a: PlanScore, b: PlanScore): boolean {
-  const differences = a.values.map((value, index) => value - (b.values[index] ?? value));
+  const differences = a.values.map((value, index) => value - itemAt(b.values, index));
   const first = differences.find((difference) => Math.abs(difference) > MARGIN_STEP / 2);
   return first === undefined ? a.mass < b.mass : first > 0;
 }

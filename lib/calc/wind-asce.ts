@@ -1,4 +1,5 @@
 import { requireInRange } from "./constants";
+import { itemAt } from "./indexed";
 
 /**
  * Wind relations of ASCE/SEI 7-16: the independent comparison for wind.ts. Not used for results.
@@ -77,8 +78,8 @@ export const DURST: readonly (readonly [number, number])[] = [
 export function durstRatio(seconds: number): number {
   requireInRange("seconds", seconds, 1, 3600);
   for (let i = 1; i < DURST.length; i += 1) {
-    const [t1, r1] = DURST[i] ?? [3600, 1];
-    const [t0, r0] = DURST[i - 1] ?? [1, 1.57];
+    const [t1, r1] = itemAt(DURST, i);
+    const [t0, r0] = itemAt(DURST, i - 1);
     if (seconds <= t1) return r0 + ((r1 - r0) * Math.log(seconds / t0)) / Math.log(t1 / t0);
   }
   return 1;

@@ -1,4 +1,5 @@
 import { requireInRange } from "./constants";
+import { itemAt } from "./indexed";
 import { BEAUFORT } from "./tables/beaufort";
 import { EXPOSURES, type ExposureRow } from "./tables/exposure";
 import { WINDBREAK_DISTANCES_H, WINDBREAKS } from "./tables/windbreaks";
@@ -169,16 +170,16 @@ export function windbreakSpeedRatio(windbreak: Windbreak, referenceHeightM: numb
 }
 
 function tableSpeedRatio(speedRatios: readonly number[], heights: number): number {
-  const first = speedRatios[0] ?? 1;
+  const first = itemAt(speedRatios, 0);
   if (heights <= 1) return 1 - (1 - first) * heights;
-  const firstDistance = WINDBREAK_DISTANCES_H[0] ?? 5;
+  const firstDistance = itemAt(WINDBREAK_DISTANCES_H, 0);
   if (heights <= firstDistance) return first;
   for (let i = 1; i < WINDBREAK_DISTANCES_H.length; i += 1) {
-    const x1 = WINDBREAK_DISTANCES_H[i] ?? 30;
+    const x1 = itemAt(WINDBREAK_DISTANCES_H, i);
     if (heights > x1) continue;
-    const x0 = WINDBREAK_DISTANCES_H[i - 1] ?? 5;
-    const y0 = speedRatios[i - 1] ?? 1;
-    const y1 = speedRatios[i] ?? 1;
+    const x0 = itemAt(WINDBREAK_DISTANCES_H, i - 1);
+    const y0 = itemAt(speedRatios, i - 1);
+    const y1 = itemAt(speedRatios, i);
     return y0 + ((y1 - y0) * (heights - x0)) / (x1 - x0);
   }
   return 1;

@@ -17,7 +17,12 @@ export default defineConfig({
   root,
   ...shared,
   test: {
-    coverage: { provider: "v8", include: ["lib/calc/**/*.ts"], reporter: ["text-summary", "json-summary"] },
+    coverage: {
+      provider: "v8",
+      include: ["lib/calc/**/*.ts"],
+      reporter: ["text-summary", "json-summary"],
+      thresholds: { branches: 95, lines: 99 },
+    },
     projects: [
       {
         ...shared,
