@@ -3,3 +3,4 @@ export * from "./trip";
 export * from "./shelter";
 export * from "./plan";
 export * from "./post";
+export * from "./pull-test";

@@ -23,6 +23,8 @@ export const PERMISSIONS = {
   "kit.edit": { sentence: "change the kit", roles: ["leader", "co-leader"] },
   "plan.read": { sentence: "see staking plans", roles: ["leader", "co-leader"] },
   "plan.edit": { sentence: "change staking plans", roles: ["leader", "co-leader"] },
+  "pull-test.read": { sentence: "see pull tests and what they teach", roles: ["leader", "co-leader"] },
+  "pull-test.edit": { sentence: "log and change pull tests", roles: ["leader", "co-leader"] },
   "paper.all": { sentence: "print every card and list", roles: ["leader", "co-leader"] },
   "paper.own": { sentence: "print your own cards and list", roles: ["leader", "co-leader", "participant"] },
   "pack.edit": { sentence: "change what people bring and carry", roles: ["leader", "co-leader"] },

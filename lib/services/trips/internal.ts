@@ -38,7 +38,8 @@ export function toTripView(row: TripRow, role: Role, nights: number): TripView {
 interface Change {
   readonly tripId: string;
   readonly action: "create" | "update" | "delete" | "copy" | "reorder" | "hand-out";
-  readonly entity: "trip" | "camp" | "shelter" | "pitch" | "sleepers" | "kit" | "plan" | "pack" | "person" | "post";
+  readonly entity:
+    "trip" | "camp" | "shelter" | "pitch" | "sleepers" | "kit" | "plan" | "pack" | "person" | "post" | "pull-test";
   readonly entityId: string;
   /** For people: "Otter Flat: ground and wind". */
   readonly summary: string;
