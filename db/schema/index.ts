@@ -4,3 +4,5 @@ export * from "./shelter";
 export * from "./plan";
 export * from "./post";
 export * from "./pull-test";
+export * from "./people";
+export * from "./messages";

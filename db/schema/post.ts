@@ -31,6 +31,8 @@ export const outboxMessage = sqliteTable(
     lastError: text("last_error"),
     createdAt: instant("created_at").notNull(),
     sentAt: instant("sent_at"),
+    /** When the person said themselves that they have read it. */
+    readAt: instant("read_at"),
   },
   (table) => [
     uniqueIndex("outbox_request_address").on(table.requestId, table.toAddress),

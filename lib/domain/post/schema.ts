@@ -18,10 +18,7 @@ export type PieceKey = (typeof PIECES)[number]["key"];
 
 export const messageRefInput = z.object({ tripId: idSchema, messageId: idSchema });
 
-export const sendInput = z.object({
-  tripId: idSchema,
-  /** Made by the client: a double click has one effect. */
-  requestId: idSchema,
+const sendContent = z.object({
   personIds: z
     .array(idSchema)
     .min(1, "Choose at least one person.")
@@ -32,4 +29,14 @@ export const sendInput = z.object({
   message: blockText("the message", 4000),
   paperSize: z.enum(PAPER_SIZES),
 });
+export type SendContent = z.infer<typeof sendContent>;
+
+export const sendInput = sendContent.extend({
+  tripId: idSchema,
+  /** Made by the client: a double click has one effect. */
+  requestId: idSchema,
+});
 export type SendInput = z.infer<typeof sendInput>;
+
+export const PLANNED_SEND_STATES = ["planned", "sent", "cancelled", "failed"] as const;
+export type PlannedSendState = (typeof PLANNED_SEND_STATES)[number];
