@@ -6,3 +6,4 @@ export * from "./post";
 export * from "./pull-test";
 export * from "./people";
 export * from "./messages";
+export * from "./paper";

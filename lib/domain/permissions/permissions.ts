@@ -29,6 +29,9 @@ export const PERMISSIONS = {
   "paper.own": { sentence: "print your own cards and list", roles: ["leader", "co-leader", "participant"] },
   "pack.edit": { sentence: "change what people bring and carry", roles: ["leader", "co-leader"] },
   "pack.tick": { sentence: "tick off your own pack list", roles: ["leader", "co-leader", "participant"] },
+  "history.read": { sentence: "see who changed what", roles: ["leader", "co-leader"] },
+  "comment.read": { sentence: "read comments on camps and shelters", roles: ["leader", "co-leader"] },
+  "comment.write": { sentence: "write comments on camps and shelters", roles: ["leader", "co-leader"] },
   "post.read": { sentence: "see messages and their state", roles: ["leader"] },
   "post.send": { sentence: "send cards and lists by e-mail", roles: ["leader"] },
 } as const satisfies Record<string, { sentence: string; roles: readonly Role[] }>;
