@@ -1,14 +1,23 @@
 import { itemAt } from "./indexed";
 import { buildShelter } from "./shelter-kinds";
-import { describeShelterWorkings } from "./shelter-workings";
+import { describeShelterWorkings, HOOP_GUY_ALLOWANCE } from "./shelter-workings";
 import { compileShelter, panelPressures, solveShelterNet, type ShelterEquilibrium, type ShelterNet } from "./tension";
-import type { LoadCase, ShelterAnalysis, ShelterResponse, ShelterSpec, TieOutConsequence, TieOutDemand } from "./types";
+import type {
+  LoadCase,
+  ShelterAnalysis,
+  ShelterModel,
+  ShelterResponse,
+  ShelterSpec,
+  TieOut,
+  TieOutConsequence,
+  TieOutDemand,
+} from "./types";
 
 export { demandAt, interpolateDemand, standsToPa } from "./demand";
 export { describeCase } from "./shelter-workings";
 
 /** Part of every cache key: goes up whenever any analysis could come out differently. */
-export const CALC_VERSION = 1;
+export const CALC_VERSION = 2;
 
 /** Pressures at which the response is worked out, as multiples of the design pressure. */
 const LEVELS: readonly number[] = [0, 0.1, 0.25, 0.5, 0.75, 1, 1.5, 2.25, 3.5, 5];
@@ -39,6 +48,9 @@ interface SolvedCase extends WindCase {
   readonly panelPressurePa: Float64Array;
   readonly equilibrium: ShelterEquilibrium;
 }
+
+const meshAllowance = ({ hoops }: ShelterModel, { kind }: TieOut): number =>
+  hoops.length > 0 && kind === "guy" ? HOOP_GUY_ALLOWANCE : 1;
 
 /** Key under which an analysis may be kept: same key, same result. Rounds far below what can matter. */
 export function analysisKey(
@@ -216,7 +228,7 @@ function envelope(
     const now = itemAt(one.equilibrium.tieOuts, index);
     const demand: TieOutDemand = {
       tieOutId: tieOut.id,
-      pullN: one.equilibrium.settled ? now.pullN : 0,
+      pullN: one.equilibrium.settled ? now.pullN * meshAllowance(model, tieOut) : 0,
       lineAngleDeg: now.lineAngleDeg,
       relativeWindDeg: one.relativeWindDeg,
       loadCase: one.loadCase,

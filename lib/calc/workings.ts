@@ -10,6 +10,7 @@ export const KNOWN_WEAK_SPOTS: readonly string[] = [
   "Ground is the largest unknown. The same loam can hold half or twice as much ten steps away. Pull an anchor with a scale where it matters.",
   "The gust is a forecast over open ground. Gusts at a camp in hills can be a third stronger or weaker than the number that was entered.",
   "Pressure on tarps and tents is taken from tables for canopies and roofs of buildings. Small soft shelters were not measured for them.",
+  "A tent on bent poles is calculated on a coarse mesh: a peg in the middle of a hem comes out up to a quarter too high, and its guys carry a factor of 1.4 because a finer mesh sways more.",
   "The wind is taken as steady in each case. Flapping, snatching lines and a shelter that swings are not calculated.",
   "What a leaning stake holds rests on a simple wedge of soil; published pull tests of leaning stakes disagree with each other.",
   "Loosening in a long windy night is taken from tests of piles under repeated load, not of tent stakes.",
