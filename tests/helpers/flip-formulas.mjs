@@ -12,7 +12,7 @@ import path from "node:path";
 const ANCHOR_TESTS = ["published", "wind", "stake", "capacity"].map((name) => `tests/unit/calc/${name}.test.ts`);
 
 /** Each `find` must occur in the file; its first occurrence is replaced. */
-const FLIPS = [
+const ANCHOR_FLIPS = [
   ["wind.ts", "0.5 * densityKgM3", "0.6 * densityKgM3"],
   ["wind.ts", "0.19 * (exposureRow", "0.17 * (exposureRow"],
   ["wind.ts", "/ 0.05) ** 0.07", "/ 0.05) ** 0.08"],
@@ -61,7 +61,55 @@ const FLIPS = [
   ["constants.ts", "Math.exp(-FIVE", "Math.exp(FIVE"],
   ["capacity.ts", "limit.medianN + share *", "limit.medianN - share *"],
   ["line.ts", "Math.min(knotRow(knot).efficiency", "Math.max(knotRow(knot).efficiency"],
-].map(([file, find, replace]) => ({ file: `lib/calc/${file}`, find, replace, tests: ANCHOR_TESTS }));
+];
+
+const STRUCTURE_FLIPS = [
+  ["net-motion.ts", "const half = -0.5 * p", "const half = 0.5 * p"],
+  ["net-motion.ts", "const half = -0.5 * p", "const half = -0.6 * p"],
+  ["net-motion.ts", "(length <= rest", "(length <= 0.5 * rest"],
+  ["net-motion.ts", "(rest - length)) / rest", "(rest + length)) / rest"],
+  ["net-motion.ts", "force[b] = (force[b] as number) - pull * dx", "force[b] = (force[b] as number) + pull * dx"],
+  ["net-motion.ts", "(turn - (bendRestRad", "(turn + (bendRestRad"],
+  [
+    "pressure-coefficients.ts",
+    "square * (cosine >= 0 ? wall.windward : wall.lee)",
+    "square * (cosine < 0 ? wall.windward : wall.lee)",
+  ],
+  ["pressure-coefficients.ts", "GEAR_BLOCKAGE = 0.2", "GEAR_BLOCKAGE = 0.9"],
+  ["shelter-workings.ts", "HOOP_GUY_ALLOWANCE = 1.4", "HOOP_GUY_ALLOWANCE = 1"],
+  ["analyse-shelter.ts", "Math.min(2, Math.max(1, ratio))", "Math.min(1, Math.max(1, ratio))"],
+  ["analyse-shelter.ts", "pullN <= bestPullN", "pullN >= bestPullN"],
+  ["demand.ts", "(to.pullN - from.pullN) * share", "(to.pullN + from.pullN) * share"],
+  ["statics.ts", "lineAngleDeg - leanDeg", "lineAngleDeg + leanDeg"],
+];
+
+const PLAN_FLIPS = [
+  ["verdict.ts", "Math.log(medianN / demandN)", "Math.log(demandN / medianN)"],
+  ["verdict.ts", "medianN >= demandN", "medianN <= demandN"],
+  ["plan-score.ts", "MARGIN_CAP = 3", "MARGIN_CAP = 1"],
+  ["camp.ts", "dependableN / demandN", "demandN / dependableN"],
+  ["assignment.ts", "gained < 0", "gained > 0"],
+  ["statistics.ts", "fraction = z + k / fraction", "fraction = z - k / fraction"],
+];
+
+const LEARNING_FLIPS = [
+  ["learning.ts", "(-0.5 * data.count * (data.mean - g) ** 2)", "(0.5 * data.count * (data.mean - g) ** 2)"],
+  ["learning.ts", "logNormalDistribution((g - at) / within)", "logNormalDistribution((at - g) / within)"],
+  ["learning.ts", "WITHIN_SHARE = 0.6", "WITHIN_SHARE = 0.9"],
+  ["learning.ts", "(median - fifth) / FIVE_PERCENT_QUANTILE", "(median + fifth) / FIVE_PERCENT_QUANTILE"],
+  ["learning.ts", "1 + z * hazard - hazard * hazard", "1 + z * hazard + hazard * hazard"],
+];
+
+const testsOf = (...names) => names.map((name) => `tests/unit/calc/${name}.test.ts`);
+
+const FLIPS = [
+  [ANCHOR_FLIPS, ANCHOR_TESTS],
+  [STRUCTURE_FLIPS, testsOf("tension", "analyse", "published")],
+  [PLAN_FLIPS, testsOf("verdict", "plan", "camp", "assignment", "statistics")],
+  [LEARNING_FLIPS, testsOf("learning", "published")],
+].flatMap(([flips, tests]) =>
+  flips.map(([file, find, replace]) => ({ file: `lib/calc/${file}`, find, replace, tests })),
+);
 
 const root = process.cwd();
 const copy = mkdtempSync(path.join(tmpdir(), "flip-"));

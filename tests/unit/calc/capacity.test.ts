@@ -100,6 +100,14 @@ describe("a practitioner's scale readings", () => {
     const leaning = (angle: number) => hold(BLADE, groundOf("firm-moist-loam"), angle, { leanDeg: 20 }).medianN;
     expect(leaning(20)).toBeGreaterThan(leaning(60));
   });
+  it("a steep line needs depth: half as long again, an upright rod under 60° holds more than half as much again", () => {
+    const steep = (id: string) => hold(builtInAnchor(id).spec, groundOf("firm-moist-loam"), 60).medianN;
+    expect(steep("steel-pin-450") / steep("steel-rod-300")).toBeGreaterThan(1.5);
+    // The steeper the line, the more of the pull is along the stake: only skin friction is left of a smooth one.
+    const along = (angle: number) => hold(builtInAnchor("steel-pin-450").spec, groundOf("firm-moist-loam"), angle);
+    expect(along(60).mode).toBe("pulls-out");
+    expect(along(10).mode).toBe("tips-over");
+  });
   it("a night of gusts works a stake loose, and elastic cord stops most of it", () => {
     const loam = groundOf("firm-moist-loam");
     const pullCycles = pullCyclesInNight(8);
