@@ -7,3 +7,4 @@ export * from "./pull-test";
 export * from "./people";
 export * from "./messages";
 export * from "./paper";
+export * from "./forecast";

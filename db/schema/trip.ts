@@ -1,5 +1,5 @@
 import { sql } from "drizzle-orm";
-import { index, integer, real, sqliteTable, text, uniqueIndex } from "drizzle-orm/sqlite-core";
+import { index, integer, real, sqliteTable, text, uniqueIndex, type AnySQLiteColumn } from "drizzle-orm/sqlite-core";
 import type { CampDetails } from "@/lib/domain/camp/schema";
 import type { Role } from "@/lib/domain/permissions/permissions";
 import type { Contact } from "@/lib/domain/trip/schema";
@@ -73,6 +73,11 @@ export const camp = sqliteTable(
       .notNull()
       .references(() => trip.id, { onDelete: "cascade" }),
     position: integer("position").notNull(),
+    /**
+     * Null: it is in the line of nights. Otherwise the camp in whose place it stands by, in bad weather; it has that
+     * camp's nights and days, and no list of the trip counts it.
+     */
+    alternativeToId: text("alternative_to_id").references((): AnySQLiteColumn => camp.id, { onDelete: "cascade" }),
     name: text("name").notNull(),
     nights: integer("nights").notNull().default(1),
     latitude: real("latitude"),
@@ -94,13 +99,16 @@ export const camp = sqliteTable(
     hasTrees: flag("has_trees").notNull().default(false),
     hasSticks: flag("has_sticks").notNull().default(false),
     water: text("water").notNull().default(""),
+    waterDistanceM: real("water_distance_m"),
+    wayOut: text("way_out").notNull().default(""),
+    meetingPoint: text("meeting_point").notNull().default(""),
     notes: text("notes").notNull().default(""),
     hazards: text("hazards", { mode: "json" }).$type<CampDetails["hazards"]>().notNull().default([]),
     version: versionColumn(),
     createdAt: instant("created_at").notNull(),
     updatedAt: instant("updated_at").notNull(),
   },
-  (table) => [index("camp_trip").on(table.tripId, table.position)],
+  (table) => [index("camp_trip").on(table.tripId, table.position), index("camp_alternative").on(table.alternativeToId)],
 );
 
 /** Who changed what on a trip; written in the transaction of the change. */

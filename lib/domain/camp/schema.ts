@@ -91,6 +91,9 @@ export const campDetailsSchema = z
     hasTrees: z.boolean(),
     hasSticks: z.boolean(),
     water: blockText("the note on water", 500),
+    waterDistanceM: numberBetween("the distance to water", 0, 20000, "m").nullable(),
+    wayOut: blockText("the way out", 500),
+    meetingPoint: blockText("the meeting point", 500),
     notes: blockText("the notes", 4000),
     hazards: z.array(z.enum(HAZARD_KEYS)).max(HAZARD_KEYS.length),
   })
@@ -142,6 +145,9 @@ export function blankCamp(name: string): CampDetails {
     hasTrees: false,
     hasSticks: false,
     water: "",
+    waterDistanceM: null,
+    wayOut: "",
+    meetingPoint: "",
     notes: "",
     hazards: [],
   };

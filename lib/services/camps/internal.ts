@@ -1,4 +1,4 @@
-import { and, asc, eq } from "drizzle-orm";
+import { and, asc, eq, isNotNull, isNull } from "drizzle-orm";
 import { camp } from "@/db/schema";
 import type { CampDetails } from "@/lib/domain/camp/schema";
 import { MAX_NIGHTS } from "@/lib/domain/trip/schema";
@@ -9,8 +9,33 @@ import type { Reader } from "../trips/internal";
 
 export type CampRow = typeof camp.$inferSelect;
 
+/** What every list of camps asks for: an alternative is kept beside, in no night, count or paper of the trip. */
+export const isInLine = isNull(camp.alternativeToId);
+
+/** The line of nights. Alternatives are not in it. */
 export async function listCampRows(reader: Reader, tripId: string): Promise<CampRow[]> {
-  return reader.select().from(camp).where(eq(camp.tripId, tripId)).orderBy(asc(camp.position), asc(camp.id));
+  return reader
+    .select()
+    .from(camp)
+    .where(and(eq(camp.tripId, tripId), isInLine))
+    .orderBy(asc(camp.position), asc(camp.id));
+}
+
+export async function listAlternativeRows(reader: Reader, tripId: string): Promise<CampRow[]> {
+  return reader
+    .select()
+    .from(camp)
+    .where(and(eq(camp.tripId, tripId), isNotNull(camp.alternativeToId)))
+    .orderBy(asc(camp.createdAt), asc(camp.id));
+}
+
+/** Names of all camps by id, with what an alternative is: for sentences about what uses a thing. */
+export async function nameCamps(reader: Reader, tripId: string): Promise<ReadonlyMap<string, string>> {
+  const rows = await reader
+    .select({ id: camp.id, name: camp.name, alternativeToId: camp.alternativeToId })
+    .from(camp)
+    .where(eq(camp.tripId, tripId));
+  return new Map(rows.map((row) => [row.id, row.alternativeToId === null ? row.name : `${row.name} (alternative)`]));
 }
 
 export async function loadCampRow(reader: Reader, tripId: string, campId: string): Promise<CampRow> {
@@ -57,6 +82,9 @@ export function toCampDetails(row: CampRow): CampDetails {
     hasTrees: row.hasTrees,
     hasSticks: row.hasSticks,
     water: row.water,
+    waterDistanceM: row.waterDistanceM,
+    wayOut: row.wayOut,
+    meetingPoint: row.meetingPoint,
     notes: row.notes,
     hazards: row.hazards,
   };

@@ -1,4 +1,4 @@
-import { eq } from "drizzle-orm";
+import { and, eq } from "drizzle-orm";
 import { createHash, randomBytes } from "node:crypto";
 import type { Transaction } from "@/db/client";
 import { camp, invitation } from "@/db/schema";
@@ -7,6 +7,7 @@ import { renderAddedMail, renderInvitationMail } from "@/lib/email/templates/tri
 import { env } from "@/lib/env";
 import { addDays, formatDayRange } from "@/lib/format/days";
 import type { Context } from "@/lib/services/context/context";
+import { isInLine } from "../camps/internal";
 import { voidInvitations, type PersonRow } from "../people/internal";
 import { enqueueMessage } from "../post/enqueue-message";
 import type { TripRow } from "../trips/internal";
@@ -18,7 +19,10 @@ export function hashToken(token: string): string {
 }
 
 async function readMailView(tx: Transaction, ctx: Context, trip: TripRow, person: PersonRow) {
-  const camps = await tx.select({ nights: camp.nights }).from(camp).where(eq(camp.tripId, trip.id));
+  const camps = await tx
+    .select({ nights: camp.nights })
+    .from(camp)
+    .where(and(eq(camp.tripId, trip.id), isInLine));
   const nights = camps.reduce((sum, one) => sum + one.nights, 0);
   return {
     name: person.name,

@@ -6,7 +6,7 @@ import { kitItemRefInput } from "@/lib/domain/kit/schema";
 import { plural } from "@/lib/format/words";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
-import { listCampRows } from "../camps/internal";
+import { nameCamps } from "../camps/internal";
 import { listPlacementRows } from "../plan/internal";
 import type { Reader } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
@@ -18,7 +18,7 @@ import { countShockCords } from "./to-tray";
 export async function listKitItemDependents(reader: Reader, tripId: string, kitItemId: string): Promise<string[]> {
   const row = await loadKitRow(reader, tripId, kitItemId);
   const placements = await listPlacementRows(reader, tripId);
-  const names = new Map((await listCampRows(reader, tripId)).map((camp) => [camp.id, camp.name]));
+  const names = await nameCamps(reader, tripId);
   const sentences = countUses(placements, kitItemId).map(
     (use) =>
       `${plural(use.tieOuts, "tie-out")} at ${names.get(use.campId) ?? "a camp"} ${use.tieOuts === 1 ? "uses" : "use"} it.`,

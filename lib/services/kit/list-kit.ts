@@ -20,8 +20,9 @@ export async function listKit({
   const { tripId } = parseInput(tripRefInput, input);
   await requirePermission(ctx, tripId, "camp.read");
   const db = getDb();
-  const placements = await listPlacementRows(db, tripId);
   const camps = await listCampRows(db, tripId);
+  const inLine = new Set(camps.map((camp) => camp.id));
+  const placements = (await listPlacementRows(db, tripId)).filter((one) => inLine.has(one.campId));
   return (await listKitRows(db, tripId)).map((row) => {
     const uses = countUses(placements, row.id);
     const usedAt = new Set(uses.map((use) => use.campId));

@@ -7,7 +7,7 @@ import { AppError } from "@/lib/errors";
 import { plural } from "@/lib/format/words";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
-import { listCampRows } from "../camps/internal";
+import { nameCamps } from "../camps/internal";
 import { listPlacementRows } from "../plan/internal";
 import { loadTripRow, recordChange, refuseStale } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
@@ -22,7 +22,7 @@ function refuseField(field: string, message: string): never {
 /** A count can't fall below what a plan has placed already. */
 async function requireEnough(tx: Transaction, tripId: string, before: KitRow, details: KitItemDetails): Promise<void> {
   const placements = await listPlacementRows(tx, tripId);
-  const names = new Map((await listCampRows(tx, tripId)).map((camp) => [camp.id, camp.name]));
+  const names = await nameCamps(tx, tripId);
   for (const use of countUses(placements, before.id)) {
     const place = names.get(use.campId) ?? "a camp";
     if (details.type !== "anchor") {

@@ -3,6 +3,7 @@ import { getDb } from "@/db/client";
 import { camp, pitch, sleeper } from "@/db/schema";
 import type { Paper } from "@/lib/domain/paper/schema";
 import type { PieceKey } from "@/lib/domain/post/schema";
+import { isInLine } from "../camps/internal";
 
 /** Papers that become one file, with a key under which an equal file is rendered once for everybody. */
 export interface PaperBundle {
@@ -21,14 +22,14 @@ export async function loadTripPlaces(tripId: string): Promise<TripPlaces> {
   const camps = await getDb()
     .select({ id: camp.id })
     .from(camp)
-    .where(eq(camp.tripId, tripId))
+    .where(and(eq(camp.tripId, tripId), isInLine))
     .orderBy(asc(camp.position));
   const pitches = await getDb()
     .select({ personId: sleeper.personId, campId: sleeper.campId, pitchId: pitch.id })
     .from(sleeper)
     .innerJoin(pitch, eq(pitch.id, sleeper.pitchId))
     .innerJoin(camp, eq(camp.id, sleeper.campId))
-    .where(and(eq(sleeper.tripId, tripId), eq(pitch.tripId, tripId)))
+    .where(and(eq(sleeper.tripId, tripId), eq(pitch.tripId, tripId), isInLine))
     .orderBy(asc(camp.position), asc(pitch.position));
   return { campIds: camps.map((one) => one.id), pitches };
 }

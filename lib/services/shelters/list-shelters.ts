@@ -1,4 +1,4 @@
-import { eq } from "drizzle-orm";
+import { and, eq } from "drizzle-orm";
 import type { z } from "zod";
 import { getDb } from "@/db/client";
 import { camp, pitch } from "@/db/schema";
@@ -6,6 +6,7 @@ import { tripRefInput } from "@/lib/domain/trip/schema";
 import type { ShelterView } from "@/lib/domain/views";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
+import { isInLine } from "../camps/internal";
 import { parseInput } from "../trips/parse-input";
 import { listShelterRows, toShelterDetails } from "./internal";
 
@@ -23,7 +24,7 @@ export async function listShelters({
     .select({ shelterId: pitch.shelterId, campName: camp.name })
     .from(pitch)
     .innerJoin(camp, eq(camp.id, pitch.campId))
-    .where(eq(pitch.tripId, tripId))
+    .where(and(eq(pitch.tripId, tripId), isInLine))
     .orderBy(camp.position);
   return (await listShelterRows(db, tripId)).map((row) => ({
     id: row.id,

@@ -1,4 +1,4 @@
-import { eq, sum } from "drizzle-orm";
+import { and, eq, sum } from "drizzle-orm";
 import type { z } from "zod";
 import { getDb } from "@/db/client";
 import { camp } from "@/db/schema";
@@ -6,6 +6,7 @@ import { tripRefInput } from "@/lib/domain/trip/schema";
 import type { TripView } from "@/lib/domain/views";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
+import { isInLine } from "../camps/internal";
 import { loadTripRow, toTripView } from "./internal";
 import { parseInput } from "./parse-input";
 
@@ -23,6 +24,6 @@ export async function getTrip({
   const [total] = await db
     .select({ nights: sum(camp.nights).mapWith(Number) })
     .from(camp)
-    .where(eq(camp.tripId, tripId));
+    .where(and(eq(camp.tripId, tripId), isInLine));
   return toTripView(row, role, total?.nights ?? 0);
 }

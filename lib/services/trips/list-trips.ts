@@ -1,9 +1,10 @@
-import { asc, count, desc, eq, inArray, sum } from "drizzle-orm";
+import { and, asc, count, desc, eq, inArray, sum } from "drizzle-orm";
 import { getDb } from "@/db/client";
 import { camp, person, trip } from "@/db/schema";
 import type { TripListItem } from "@/lib/domain/views";
 import { addDays } from "@/lib/format/days";
 import type { Context } from "@/lib/services/context/context";
+import { isInLine } from "../camps/internal";
 
 const MAX_LISTED = 200;
 
@@ -22,7 +23,7 @@ export async function listTrips({ ctx }: { ctx: Context }): Promise<TripListItem
   const camps = await db
     .select({ tripId: camp.tripId, campCount: count(), nights: sum(camp.nights).mapWith(Number) })
     .from(camp)
-    .where(inArray(camp.tripId, ids))
+    .where(and(inArray(camp.tripId, ids), isInLine))
     .groupBy(camp.tripId);
   const people = await db
     .select({ tripId: person.tripId, peopleCount: count() })
