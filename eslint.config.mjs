@@ -68,6 +68,30 @@ const config = [
     },
   },
   forbid(["lib/domain/**/*.ts"], [APP, DB, SERVER, [["@/components/*"], "Rules know nothing of the screen."]]),
+  forbid(
+    ["lib/places/**/*.ts", "lib/gpx/**/*.ts"],
+    [
+      APP,
+      DB,
+      SERVER,
+      [["@/components/*", "react", "zod"], "Places and GPX files are read and measured here, nothing else."],
+    ],
+  ),
+  {
+    files: ["**/*.{ts,tsx}"],
+    ignores: ["lib/places/**", "lib/gpx/**", "tests/**"],
+    rules: {
+      "@typescript-eslint/no-restricted-imports": [
+        "error",
+        {
+          paths: ["suncalc", "geomagnetism", "geographiclib-geodesic"].map((name) => ({
+            name,
+            message: "Only lib/places uses it; import its wrapper.",
+          })),
+        },
+      ],
+    },
+  },
   forbid(["lib/format/**/*.ts"], [APP, DB, SERVER, [["@/components/*"], "Formatting knows nothing of the screen."]]),
   forbid(
     ["lib/pdf/**/*.{ts,tsx}", "lib/email/**/*.{ts,tsx}"],

@@ -8,3 +8,4 @@ export * from "./people";
 export * from "./messages";
 export * from "./paper";
 export * from "./forecast";
+export * from "./route";

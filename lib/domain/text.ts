@@ -1,20 +1,12 @@
 import { z } from "zod";
-
-/** Control characters (but line breaks and tabs) and marks that turn the reading direction round. */
-const UNPRINTABLE = /[\p{Cc}\u202A-\u202E\u2066-\u2069\u200B\uFEFF]/gu;
-
-function clean(text: string, keepsLines: boolean): string {
-  const kept = text.normalize("NFC").replace(/\r\n?/g, "\n");
-  const cleaned = kept.replace(UNPRINTABLE, (mark) => (keepsLines && (mark === "\n" || mark === "\t") ? mark : ""));
-  return cleaned.trim();
-}
+import { cleanText } from "./clean-text";
 
 /** One line of text: normalised, without control characters, 1…max characters. */
 export function lineText(what: string, max: number) {
   return z
     .string({ error: `Enter ${what}.` })
     .max(max * 4, `${capitalise(what)} is too long: at most ${max} characters.`)
-    .transform((text) => clean(text, false))
+    .transform((text) => cleanText(text, false))
     .pipe(
       z
         .string()
@@ -28,7 +20,7 @@ export function blockText(what: string, max: number) {
   return z
     .string({ error: `${capitalise(what)} has to be text.` })
     .max(max * 2, `${capitalise(what)} is too long: at most ${max} characters.`)
-    .transform((text) => clean(text, true))
+    .transform((text) => cleanText(text, true))
     .pipe(z.string().max(max, `${capitalise(what)} is too long: at most ${max} characters.`));
 }
 

@@ -56,3 +56,10 @@ export function formatTime(instant: Date | string, timeZone: string): string {
 export function dayOf(instant: Date | string, timeZone: string): string {
   return format(new Date(instant), "yyyy-MM-dd", { in: tz(timeZone) });
 }
+
+/** The instant at which a clock of the zone shows so many minutes after midnight of a day. */
+export function instantOf(day: string, minuteOfDay: number, timeZone: string): Date {
+  const [year = 1970, month = 1, date = 1] = day.split("-").map(Number);
+  const local = new TZDate(year, month - 1, date, Math.floor(minuteOfDay / 60), minuteOfDay % 60, timeZone);
+  return new Date(local.getTime());
+}

@@ -18,6 +18,8 @@ export const PERMISSIONS = {
   "camp.read": { sentence: "see a camp's ground, wind and shelters", roles: ["leader", "co-leader"] },
   "camp.arrange": { sentence: "add, order, copy and delete camps", roles: ["leader"] },
   "camp.edit": { sentence: "change a camp's ground and wind", roles: ["leader", "co-leader"] },
+  "route.read": { sentence: "see the route and its days", roles: ["leader", "co-leader"] },
+  "route.edit": { sentence: "change the route and how the group walks", roles: ["leader"] },
   "shelter.edit": { sentence: "add and change shelters", roles: ["leader", "co-leader"] },
   "shelter.pitch": { sentence: "pitch shelters and place sleepers", roles: ["leader", "co-leader"] },
   "kit.edit": { sentence: "change the kit", roles: ["leader", "co-leader"] },

@@ -39,7 +39,6 @@ interface Change {
   readonly tripId: string;
   readonly action: "create" | "update" | "delete" | "copy" | "reorder" | "hand-out";
   readonly entity:
-    "trip" | "camp" | "shelter" | "pitch" | "sleepers" | "kit" | "plan" | "pack" | "person" | "post" | "pull-test";
   readonly entityId: string;
   /** For people: "Otter Flat: ground and wind". */
   readonly summary: string;
