@@ -39,6 +39,18 @@ interface Change {
   readonly tripId: string;
   readonly action: "create" | "update" | "delete" | "copy" | "reorder" | "hand-out";
   readonly entity:
+    | "trip"
+    | "camp"
+    | "route"
+    | "shelter"
+    | "pitch"
+    | "sleepers"
+    | "kit"
+    | "plan"
+    | "pack"
+    | "person"
+    | "post"
+    | "pull-test";
   readonly entityId: string;
   /** For people: "Otter Flat: ground and wind". */
   readonly summary: string;
