@@ -1,6 +1,9 @@
 "use server";
 
+import { revalidatePath } from "next/cache";
 import { redirect } from "next/navigation";
+import { invitationAnswerInput } from "@/lib/domain/answer/schema";
+import { answerInvitation } from "@/lib/services/answers/answer-invitation";
 import { acceptInvitation } from "@/lib/services/invitations/accept-invitation";
 import { signUpWithInvitation } from "@/lib/services/invitations/sign-up-with-invitation";
 import { callAuth } from "@/lib/auth/call-auth";
@@ -20,6 +23,17 @@ export const signInAction = publicAction(async ({ input }) => {
   const { email, password } = signInFormSchema.parse(input);
   await callAuth("/sign-in/email", { body: { email, password } });
   redirect(toOwnPath(input.next));
+});
+
+export const requestSignInLinkAction = publicAction(async ({ input }) => {
+  await callAuth("/sign-in/magic-link", { body: emailFormSchema.parse(input) });
+  redirect("/check-mail?for=link");
+});
+
+export const signInByLinkAction = publicAction(async ({ input }) => {
+  const { token } = tokenFormSchema.parse(input);
+  await callAuth(`/magic-link/verify?token=${encodeURIComponent(token)}`, { method: "GET" });
+  redirect("/trips");
 });
 
 export const signUpAction = publicAction(async ({ input }) => {
@@ -54,9 +68,20 @@ export const acceptInvitationAction = action(async ({ ctx, input }) => {
   redirect(`/trips/${tripId}`);
 });
 
+export const answerInvitationAction = publicAction(async ({ input }) => {
+  const { token, value, note } = invitationAnswerInput.parse(input);
+  await answerInvitation({ input: { token, value, note } });
+  revalidatePath(`/invitation/${token}`);
+  return { message: "Thank you. The leader sees your answer." };
+});
+
 export const signUpWithInvitationAction = publicAction(async ({ input }) => {
   const form = signUpWithInvitationFormSchema.parse(input);
   const { tripId, email } = await signUpWithInvitation({ input: form });
+  if (form.password === "") {
+    await callAuth("/sign-in/magic-link", { body: { email } });
+    redirect("/check-mail?for=link");
+  }
   await callAuth("/sign-in/email", { body: { email, password: form.password } });
   redirect(`/trips/${tripId}`);
 });

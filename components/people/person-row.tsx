@@ -10,10 +10,16 @@ import type { PersonView } from "@/lib/domain/views";
 
 const STATES: Readonly<Record<PersonView["state"], string>> = {
   joined: "has joined",
-  invited: "invited, has not answered",
+  invited: "invited, has not joined",
   expired: "invitation has expired",
   none: "not invited yet",
 };
+
+function describeAnswer({ answer, role }: PersonView): string {
+  if (!answer) return role === "participant" ? "no answer yet" : "";
+  if (answer.isWaiting) return "yes, on the waiting list";
+  return { yes: "comes along", maybe: "may come along", no: "does not come" }[answer.value];
+}
 
 interface PersonRowProps {
   readonly tripId: string;
@@ -41,10 +47,12 @@ export function PersonRow({ tripId, person, roleName, roles, actions }: PersonRo
             {person.isSelf && <span className="font-normal text-pencil"> (you)</span>}
           </p>
           <p className="text-13 break-all text-pencil">{person.email}</p>
+          {person.answer?.note && <p className="mt-1 text-13 break-words">“{person.answer.note}”</p>}
         </div>
         <div>
           <p className="text-15">{roleName}</p>
           <p className={`text-13 ${isOpen ? "font-semibold text-ember" : "text-pencil"}`}>{STATES[person.state]}</p>
+          <p className="text-13">{describeAnswer(person)}</p>
         </div>
         {actions && (
           <div className="-ml-4 flex flex-wrap gap-1 sm:col-span-2 lg:col-span-1 lg:ml-0 lg:justify-end">

@@ -44,6 +44,11 @@ export const beforeAuth = createAuthMiddleware(async (ctx) => {
 });
 
 export const afterAuth = createAuthMiddleware(async (ctx) => {
+  if (ctx.path === "/magic-link/verify") {
+    const userId = ctx.context.newSession?.user.id;
+    if (userId) log.info("signed in", { userId });
+    else log.warn("sign-in refused");
+  }
   if (ctx.path !== "/sign-in/email") return;
   const email = textOf(readBody(ctx.body).email);
   const userId = ctx.context.newSession?.user.id;

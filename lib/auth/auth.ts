@@ -2,6 +2,8 @@ import "server-only";
 import { betterAuth } from "better-auth";
 import { APIError } from "better-auth/api";
 import { drizzleAdapter } from "better-auth/adapters/drizzle";
+import { magicLink } from "better-auth/plugins/magic-link";
+import { and, eq } from "drizzle-orm";
 import { getDb, withTransaction } from "@/db/client";
 import * as schema from "@/db/schema";
 import { newId } from "@/lib/domain/ids";
@@ -11,6 +13,7 @@ import type { RenderedMail } from "@/lib/email/letter";
 import {
   renderExistingAccountMail,
   renderResetMail,
+  renderSignInLinkMail,
   renderVerificationMail,
 } from "@/lib/email/templates/account-mails";
 import { env } from "@/lib/env";
@@ -48,6 +51,19 @@ function cleanUser<User extends { name?: string | undefined; email?: string | un
     }
   }
   return { ...user, ...(name ? { name: name.data } : {}), ...(email ? { email: email.data } : {}), image: null };
+}
+
+/** Only to who has shown that the address is theirs; the answer on the screen is the same for everybody. */
+async function postSignInLink(address: string, token: string): Promise<void> {
+  const email = emailSchema.safeParse(address);
+  if (!email.success) return;
+  const [known] = await getDb()
+    .select({ name: schema.user.name, email: schema.user.email })
+    .from(schema.user)
+    .where(and(eq(schema.user.email, email.data), eq(schema.user.emailVerified, true)));
+  if (!known) return;
+  const mail = renderSignInLinkMail({ name: known.name, url: pageUrl("/sign-in/by-link", { token }) });
+  await post("sign-in-link", known, mail);
 }
 
 async function letAccountGo(userId: string): Promise<void> {
@@ -118,6 +134,8 @@ function createAuth() {
         "/sign-up/email": limit(60, 5, 60),
         "/request-password-reset": limit(60, 3, 30),
         "/send-verification-email": limit(60, 3, 30),
+        "/sign-in/magic-link": limit(60, 3, 30),
+        "/magic-link/verify": limit(60, 10, 100),
         "/change-password": limit(10, 3, 60),
         "/delete-user": limit(10, 3, 60),
         "/get-session": false,
@@ -139,6 +157,14 @@ function createAuth() {
       },
     },
     hooks: { before: beforeAuth, after: afterAuth },
+    plugins: [
+      magicLink({
+        disableSignUp: true,
+        storeToken: "hashed",
+        expiresIn: 15 * 60,
+        sendMagicLink: ({ email, token }) => postSignInLink(email, token),
+      }),
+    ],
   });
 }
 

@@ -18,6 +18,7 @@ const SENTENCES: Readonly<Record<string, string>> = {
   EMAIL_NOT_VERIFIED: "Confirm your address first: a new mail with the link is on its way.",
   INVALID_TOKEN: "This link does not work any more. Ask for a new one.",
   TOKEN_EXPIRED: "This link has run out. Ask for a new one.",
+  new_user_signup_disabled: "This link does not work any more. Ask for a new one.",
   INVALID_PASSWORD: "That is not your password.",
   SESSION_EXPIRED: "Sign in again.",
 };
@@ -57,7 +58,10 @@ export async function callAuth(path: string, { method = "POST", body, passwordFi
 
 function toRefusal(response: Response, answer: unknown, passwordField: string | undefined): Error {
   const said = typeof answer === "object" && answer !== null ? (answer as Record<string, unknown>) : {};
-  const code = typeof said.code === "string" ? said.code : "";
+  // Where a link is refused, the answer is a way back with the reason in it.
+  const back = response.headers.get("location");
+  const reason = back && URL.canParse(back) ? new URL(back).searchParams.get("error") : null;
+  const code = typeof said.code === "string" ? said.code : (reason ?? "");
   const message = typeof said.message === "string" ? said.message : "";
   if (response.status === 429) {
     const seconds = Number(response.headers.get("x-retry-after") ?? response.headers.get("retry-after") ?? 60);

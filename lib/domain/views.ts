@@ -3,6 +3,7 @@ import type { CampResult, Gap, Placement, ShelterAnalysis, ShelterSpec, TrayAnch
 import type { CampDetails } from "./camp/schema";
 import type { GearDetails } from "./gear/schema";
 import type { KitItemDetails } from "./kit/schema";
+import type { AnswerView } from "./people-views";
 import type { Role } from "./permissions/permissions";
 import type { MessageState } from "./post/schema";
 import type { PitchDetails, ShelterDetails } from "./shelter/schema";
@@ -51,6 +52,8 @@ export interface PersonView {
   /** "joined" has an account here; "invited" has an open link; "expired" needs a new one; "none" was never invited. */
   readonly state: "joined" | "invited" | "expired" | "none";
   readonly isSelf: boolean;
+  /** Null while they have not answered. */
+  readonly answer: AnswerView | null;
 }
 
 export interface ShelterView {

@@ -59,6 +59,7 @@ const PAGE_LEADER = by("sign-in", NONE, NONE, NONE, YES, NONE);
 export const PAGE_ROWS: readonly Row[] = [
   row("/", ENTRANCE),
   row("/sign-in", ENTRANCE),
+  row("/sign-in/by-link", EVERYBODY),
   row("/sign-up", ENTRANCE),
   row("/forgot-password", EVERYBODY),
   row("/reset-password", EVERYBODY),
@@ -77,6 +78,7 @@ export const PAGE_ROWS: readonly Row[] = [
   row("/gear/[gearId]", by("sign-in", NONE, NONE, NONE, YES, NONE), "gear of the leader"),
   row("/trips/[tripId]", by("sign-in", NONE, "to-mine", YES, YES, NONE)),
   row("/trips/[tripId]/mine", PAGE_ON_TRIP),
+  row("/trips/[tripId]/details", PAGE_ON_TRIP),
   row("/trips/[tripId]/settings", PAGE_LEADER),
   row("/trips/[tripId]/camps", PAGE_LEADER),
   row("/trips/[tripId]/camps/new", PAGE_LEADER),
@@ -98,6 +100,7 @@ export const PAGE_ROWS: readonly Row[] = [
 
 const ROUTE_SIGNED_IN = by("signed-out", YES, YES, YES, YES, YES);
 const ROUTE_LEADERS = by("signed-out", NONE, "forbidden", YES, YES, NONE);
+const ROUTE_LEADER = by("signed-out", NONE, "forbidden", "forbidden", YES, NONE);
 
 /** A participant may print their own papers; others read as not there. */
 const PAPER_OF_LEADERS = by("signed-out", NONE, NONE, YES, YES, NONE);
@@ -114,6 +117,7 @@ export const ROUTE_ROWS: readonly Row[] = [
   row("POST /api/trips/[tripId]/camps/[campId]/plan", ROUTE_LEADERS),
   row("POST /api/trips/[tripId]/camps/[campId]/analyses", ROUTE_LEADERS),
   row("PATCH /api/trips/[tripId]/camps/[campId]/pitches/[pitchId]", ROUTE_LEADERS),
+  row("GET /api/trips/[tripId]/people", ROUTE_LEADER),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "field-card"),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "booklet"),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "pack-list of the leader"),
@@ -133,6 +137,9 @@ export const ACTION_ROWS: readonly Row[] = [
   row("(auth)#resetPasswordAction", EVERYBODY),
   row("(auth)#verifyAction", EVERYBODY),
   row("(auth)#signOutAction", EVERYBODY),
+  row("(auth)#requestSignInLinkAction", EVERYBODY),
+  row("(auth)#signInByLinkAction", EVERYBODY),
+  row("(auth)#answerInvitationAction", EVERYBODY),
   row("(auth)#signUpWithInvitationAction", EVERYBODY),
   row(
     "(auth)#acceptInvitationAction",
@@ -174,6 +181,10 @@ export const ACTION_ROWS: readonly Row[] = [
   row("trips/[tripId]/people#createPersonAction", ACTION_LEADER),
   row("trips/[tripId]/people#updatePersonAction", ACTION_LEADER),
   row("trips/[tripId]/people#invitePersonAction", ACTION_LEADER),
+  row("trips/[tripId]/people#updateRosterAction", ACTION_LEADER),
+  row("trips/[tripId]/people#remindNowAction", ACTION_LEADER),
+  row("trips/[tripId]/people#importPeopleAction", ACTION_LEADER),
+  row("trips/[tripId]/details#saveAnswerAction", ACTION_ON_TRIP),
   row("trips/[tripId]/people#deletePersonAction", ACTION_LEADER),
   row("trips/[tripId]/people/packing#savePackItemsAction", ACTION_LEADERS),
   row("trips/[tripId]/people/packing#assignCarryAction", ACTION_LEADERS),

@@ -169,6 +169,7 @@ export async function makeTwoTrips() {
   const newcomer = { name: "Nils New", email: "newcomer@example.test", password: PASSWORD };
   await new Browser().call("/sign-up/email", newcomer);
   await new Browser().call("/request-password-reset", { email: users.coLeader.email });
+  await new Browser().call("/sign-in/magic-link", { email: users.participant.email });
   return {
     a,
     b,
@@ -182,6 +183,7 @@ export async function makeTwoTrips() {
       invitation: await readLinkToken(a.waitingEmail),
       invitationOfStranger: await readLinkToken(email),
       verification: await readLinkToken(newcomer.email),
+      signInLink: await readLinkToken(users.participant.email),
       reset: await readLinkToken(users.coLeader.email),
     },
   };

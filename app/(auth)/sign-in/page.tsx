@@ -43,6 +43,9 @@ export default async function SignInPage({ searchParams }: SignInPageProps) {
         <SubmitButton>Sign in</SubmitButton>
       </ActionForm>
       <p className="mt-6 flex flex-wrap gap-x-6">
+        <Link href="/sign-in/by-link" className="inline-flex min-h-11 items-center text-spruce underline">
+          Sign in by a link
+        </Link>
         <Link href="/forgot-password" className="inline-flex min-h-11 items-center text-spruce underline">
           Forgotten your password?
         </Link>

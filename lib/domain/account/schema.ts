@@ -21,8 +21,15 @@ export const signUpFormSchema = z.object({ name: personNameSchema, email: emailS
 export const emailFormSchema = z.object({ email: emailSchema });
 export const tokenFormSchema = z.object({ token: tokenSchema });
 export const newPasswordFormSchema = z.object({ token: tokenSchema, password: newPasswordSchema });
-export const signUpWithInvitationFormSchema = newPasswordFormSchema.extend({ name: personNameSchema });
+/** Without a password one signs in by links sent to one's address. */
+export const signUpWithInvitationFormSchema = z.object({
+  token: tokenSchema,
+  name: personNameSchema,
+  password: z.union([z.literal(""), newPasswordSchema]).default(""),
+});
 export const sessionRefInput = z.object({ sessionId: idSchema });
 export const nameFormSchema = z.object({ name: personNameSchema });
 export const changePasswordFormSchema = z.object({ currentPassword: passwordSchema, newPassword: newPasswordSchema });
 export const deleteAccountFormSchema = z.object({ password: passwordSchema });
+/** Who signs in by links has no password to type. */
+export const deleteAccountWithoutPasswordSchema = z.object({});

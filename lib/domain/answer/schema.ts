@@ -2,15 +2,9 @@ import { z } from "zod";
 import { idSchema } from "../ids";
 import { invitationTokenSchema } from "../person/schema";
 import { blockText } from "../text";
+import { ANSWER_VALUES } from "./names";
 
-export const ANSWER_VALUES = ["yes", "maybe", "no"] as const;
-export type AnswerValue = (typeof ANSWER_VALUES)[number];
-
-export const ANSWER_NAMES: Readonly<Record<AnswerValue, string>> = {
-  yes: "Yes, I come",
-  maybe: "Maybe",
-  no: "No, I can't",
-};
+export { ANSWER_NAMES, ANSWER_VALUES, type AnswerValue } from "./names";
 
 const answerFields = {
   value: z.enum(ANSWER_VALUES, { error: "Say yes, maybe or no." }),

@@ -23,3 +23,13 @@ export const personDeleteInput = personRefInput.extend({ confirmed: z.boolean().
 
 /** The secret part of an invitation link: 256 random bits. */
 export const invitationTokenSchema = z.string().regex(/^[A-Za-z0-9_-]{43}$/, "This is not a link of an invitation.");
+
+const MAX_CSV = 100_000;
+export const peopleImportInput = z.object({
+  tripId: idSchema,
+  csv: z
+    .string({ error: "Choose a file, or paste its lines." })
+    .max(MAX_CSV, "That is too much: at most 100 kB.")
+    .refine((text) => text.trim() !== "", "Choose a file, or paste its lines."),
+  isTrial: z.boolean().default(false),
+});

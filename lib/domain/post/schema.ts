@@ -16,6 +16,8 @@ export const PIECES = [
 export const PIECE_KEYS = PIECES.map((piece) => piece.key);
 export type PieceKey = (typeof PIECES)[number]["key"];
 
+/** Something to be done once, however often the button is pressed. */
+export const requestInput = z.object({ tripId: idSchema, requestId: idSchema });
 export const messageRefInput = z.object({ tripId: idSchema, messageId: idSchema });
 
 const sendContent = z.object({

@@ -42,3 +42,13 @@ export function renderExistingAccountMail({ name, url }: ToPerson): RenderedMail
     footnotes: ["If it was not you, do nothing: nothing has changed."],
   });
 }
+
+export function renderSignInLinkMail({ name, url }: ToPerson): RenderedMail {
+  return renderLetter({
+    subject: "Your link to sign in to Leestead",
+    greeting: `Hello ${name},`,
+    paragraphs: ["you asked for a link to sign in. Open it on the device that you want to use."],
+    link: { label: "Sign in", url },
+    footnotes: ["The link works for 15 minutes and once. If you did not ask, do nothing: nobody is signed in."],
+  });
+}

@@ -16,7 +16,8 @@ export async function hashNewPassword(password: string, email: string): Promise<
 interface VerifiedAccount {
   readonly name: string;
   readonly email: string;
-  readonly passwordHash: string;
+  /** Null: signs in by links. */
+  readonly passwordHash: string | null;
 }
 
 /**
@@ -40,6 +41,7 @@ export async function insertVerifiedAccount(
   } else {
     await tx.insert(user).values({ id: userId, name, email, emailVerified: true, createdAt: now, updatedAt: now });
   }
+  if (passwordHash === null) return userId;
   await tx.insert(account).values({
     id: newId(),
     userId,

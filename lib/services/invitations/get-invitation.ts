@@ -3,7 +3,11 @@ import { z } from "zod";
 import { getDb } from "@/db/client";
 import { user } from "@/db/schema";
 import { invitationTokenSchema } from "@/lib/domain/person/schema";
+import type { OwnAnswerView } from "@/lib/domain/people-views";
 import { AppError } from "@/lib/errors";
+import { formatDayRange } from "@/lib/format/days";
+import { findLastDay, toOwnAnswer } from "../answers/internal";
+import { loadTripRow } from "../trips/internal";
 import { loadOpenInvitation } from "./internal";
 
 const getInvitationInput = z.object({ token: invitationTokenSchema });
@@ -13,6 +17,9 @@ export interface InvitationView {
   readonly personName: string;
   readonly email: string;
   readonly hasAccount: boolean;
+  /** "12–18 June" */
+  readonly dates: string;
+  readonly own: OwnAnswerView;
 }
 
 /** For whoever holds the link; they need no account. */
@@ -24,10 +31,13 @@ export async function getInvitation({ input }: { input: z.input<typeof getInvita
     .select({ id: user.id })
     .from(user)
     .where(and(eq(user.email, row.person.email), eq(user.emailVerified, true)));
+  const trip = await loadTripRow(getDb(), row.person.tripId);
   return {
     tripName: row.tripName,
     personName: row.person.name,
     email: row.person.email,
     hasAccount: account !== undefined,
+    dates: formatDayRange(trip.startDate, await findLastDay(getDb(), trip)),
+    own: await toOwnAnswer(getDb(), trip, row.person),
   };
 }

@@ -32,23 +32,28 @@ async function readMailView(tx: Transaction, ctx: Context, trip: TripRow, person
   };
 }
 
-/** A new link in the outbox; links sent before stop working. Only the token's hash is kept. */
-export async function issueInvitation(tx: Transaction, ctx: Context, trip: TripRow, person: PersonRow): Promise<void> {
+/** A new link to somebody's invitation; links sent before stop working. Only the token's hash is kept. */
+export async function openInvitation(tx: Transaction, person: Pick<PersonRow, "id" | "tripId">): Promise<string> {
   await voidInvitations(tx, [person.id]);
   const token = randomBytes(32).toString("base64url");
-  const id = newId();
   const now = Date.now();
   await tx.insert(invitation).values({
-    id,
-    tripId: trip.id,
+    id: newId(),
+    tripId: person.tripId,
     personId: person.id,
     tokenHash: hashToken(token),
     expiresAt: new Date(now + INVITATION_DAYS * 86_400_000),
     createdAt: new Date(now),
   });
+  return token;
+}
+
+/** The invitation in the outbox. */
+export async function issueInvitation(tx: Transaction, ctx: Context, trip: TripRow, person: PersonRow): Promise<void> {
+  const token = await openInvitation(tx, person);
   await enqueueMessage(tx, {
     kind: "invitation",
-    requestId: id,
+    requestId: newId(),
     tripId: trip.id,
     personId: person.id,
     to: { name: person.name, address: person.email },

@@ -10,6 +10,7 @@ import { loadOpenInvitation, spendInvitation } from "./internal";
 const signUpWithInvitationInput = z.object({
   token: invitationTokenSchema,
   name: personNameSchema,
+  /** Empty: none, they sign in by links. */
   password: z.string({ error: "Enter a password." }),
 });
 
@@ -21,7 +22,7 @@ export async function signUpWithInvitation({
 }): Promise<{ tripId: string; email: string }> {
   const { token, name, password } = parseInput(signUpWithInvitationInput, input);
   const { email } = (await loadOpenInvitation(getDb(), token)).person;
-  const passwordHash = await hashNewPassword(password, email);
+  const passwordHash = password === "" ? null : await hashNewPassword(password, email);
   return withTransaction(async (tx) => {
     const row = await loadOpenInvitation(tx, token);
     const userId = await insertVerifiedAccount(tx, { name, email: row.person.email, passwordHash });

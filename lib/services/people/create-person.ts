@@ -1,17 +1,15 @@
 import { and, eq } from "drizzle-orm";
 import type { z } from "zod";
 import { withTransaction } from "@/db/client";
-import { person, user } from "@/db/schema";
+import { person } from "@/db/schema";
 import { requirePermission } from "@/lib/auth/permission";
-import { newId } from "@/lib/domain/ids";
 import { personCreateInput } from "@/lib/domain/person/schema";
 import { AppError } from "@/lib/errors";
 import type { Context } from "@/lib/services/context/context";
-import { issueInvitation, tellAdded } from "../invitations/issue-invitation";
 import { consumeQuota } from "../quota/consume-quota";
-import { loadTripRow, recordChange } from "../trips/internal";
+import { loadTripRow } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
-import type { PersonRow } from "./internal";
+import { addPerson } from "./internal-add";
 
 /** Puts somebody on the trip. Who has an account with that address is on it at once; everybody else gets a link. */
 export async function createPerson({
@@ -35,31 +33,6 @@ export async function createPerson({
       const sentence = `${present.name} is on this trip with that address already.`;
       throw new AppError("conflict", sentence, { fieldErrors: { email: [sentence] } });
     }
-    const [account] = await tx
-      .select({ id: user.id })
-      .from(user)
-      .where(and(eq(user.email, email), eq(user.emailVerified, true)));
-    const row: PersonRow = {
-      id: newId(),
-      tripId,
-      userId: account?.id ?? null,
-      name,
-      email,
-      role,
-      version: 1,
-      createdAt: new Date(),
-    };
-    await tx.insert(person).values(row);
-    if (account) await tellAdded(tx, ctx, trip, row);
-    else await issueInvitation(tx, ctx, trip, row);
-    await recordChange(tx, ctx, {
-      tripId,
-      action: "create",
-      entity: "person",
-      entityId: row.id,
-      summary: name,
-      isPrinted: false,
-    });
-    return { personId: row.id, state: account ? "joined" : "invited" };
+    return addPerson(tx, ctx, trip, { name, email, role });
   });
 }

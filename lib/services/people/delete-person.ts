@@ -5,7 +5,8 @@ import { person } from "@/db/schema";
 import { requirePermission } from "@/lib/auth/permission";
 import { personDeleteInput } from "@/lib/domain/person/schema";
 import type { Context } from "@/lib/services/context/context";
-import { recordChange } from "../trips/internal";
+import { fillPlaces } from "../roster/internal";
+import { loadTripRow, recordChange } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
 import { requireConfirmed } from "../trips/require-confirmed";
 import { listPersonDependents, loadPersonRow, requireAnotherLeader } from "./internal";
@@ -33,5 +34,6 @@ export async function deletePerson({
       summary: row.name,
       isPrinted: true,
     });
+    await fillPlaces(tx, await loadTripRow(tx, tripId));
   });
 }

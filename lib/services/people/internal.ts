@@ -1,6 +1,7 @@
 import { and, asc, count, eq, inArray, isNotNull, isNull, ne } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { carry, invitation, person, pitch, sleeper } from "@/db/schema";
+import { answer, carry, invitation, person, pitch, sleeper } from "@/db/schema";
+import type { AnswerView } from "@/lib/domain/people-views";
 import type { PersonView } from "@/lib/domain/views";
 import { AppError } from "@/lib/errors";
 import { plural } from "@/lib/format/words";
@@ -19,7 +20,7 @@ export async function loadPersonRow(reader: Reader, tripId: string, personId: st
 }
 
 /** Which people have a link that still works, and which had one. */
-export async function findInvitationStates(
+async function findInvitationStates(
   reader: Reader,
   tripId: string,
 ): Promise<ReadonlyMap<string, "invited" | "expired">> {
@@ -32,19 +33,40 @@ export async function findInvitationStates(
   return new Map(rows.map((row) => [row.personId, row.expiresAt.getTime() > now ? "invited" : "expired"]));
 }
 
-export function toPersonView(
-  row: PersonRow,
-  selfUserId: string,
-  states: ReadonlyMap<string, "invited" | "expired">,
-): PersonView {
+type Answers = ReadonlyMap<string, AnswerView>;
+
+async function findAnswers(reader: Reader, tripId: string): Promise<Answers> {
+  const rows = await reader.select().from(answer).where(eq(answer.tripId, tripId));
+  return new Map(
+    rows.map(({ personId, value, note, isWaiting, answeredAt }) => [
+      personId,
+      { value, note, isWaiting, answeredAt: answeredAt.toISOString() },
+    ]),
+  );
+}
+
+export interface PeopleStates {
+  readonly invitations: ReadonlyMap<string, "invited" | "expired">;
+  readonly answers: Answers;
+}
+
+export async function findPeopleStates(reader: Reader, tripId: string): Promise<PeopleStates> {
+  return {
+    invitations: await findInvitationStates(reader, tripId),
+    answers: await findAnswers(reader, tripId),
+  };
+}
+
+export function toPersonView(row: PersonRow, selfUserId: string, states: PeopleStates): PersonView {
   return {
     id: row.id,
     name: row.name,
     email: row.email,
     role: row.role,
     version: row.version,
-    state: row.userId ? "joined" : (states.get(row.id) ?? "none"),
+    state: row.userId ? "joined" : (states.invitations.get(row.id) ?? "none"),
     isSelf: row.userId === selfUserId,
+    answer: states.answers.get(row.id) ?? null,
   };
 }
 

@@ -8,7 +8,7 @@ import { ROLES } from "@/lib/domain/permissions/permissions";
 import type { PersonView } from "@/lib/domain/views";
 import type { Context } from "@/lib/services/context/context";
 import { parseInput } from "../trips/parse-input";
-import { findInvitationStates, toPersonView } from "./internal";
+import { findPeopleStates, toPersonView } from "./internal";
 
 const listPeopleInput = z.object({ tripId: idSchema });
 
@@ -23,7 +23,7 @@ export async function listPeople({
   const { tripId } = parseInput(listPeopleInput, input);
   await requirePermission(ctx, tripId, "people.read");
   const rows = await getDb().select().from(person).where(eq(person.tripId, tripId)).orderBy(asc(person.createdAt));
-  const states = await findInvitationStates(getDb(), tripId);
+  const states = await findPeopleStates(getDb(), tripId);
   return rows
     .map((row) => toPersonView(row, ctx.actor.userId, states))
     .sort((a, b) => ROLES.indexOf(a.role) - ROLES.indexOf(b.role) || a.name.localeCompare(b.name, "en"));

@@ -6,9 +6,10 @@ import { requirePermission } from "@/lib/auth/permission";
 import { personUpdateInput } from "@/lib/domain/person/schema";
 import type { PersonView } from "@/lib/domain/views";
 import type { Context } from "@/lib/services/context/context";
+import { fillPlaces } from "../roster/internal";
 import { loadTripRow, recordChange, refuseStale } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
-import { findInvitationStates, loadPersonRow, requireAnotherLeader, toPersonView } from "./internal";
+import { findPeopleStates, loadPersonRow, requireAnotherLeader, toPersonView } from "./internal";
 
 export async function updatePerson({
   ctx,
@@ -21,7 +22,7 @@ export async function updatePerson({
   return withTransaction(async (tx) => {
     await requirePermission(ctx, tripId, "people.edit", tx);
     const row = await loadPersonRow(tx, tripId, personId);
-    const states = await findInvitationStates(tx, tripId);
+    const states = await findPeopleStates(tx, tripId);
     if (row.version !== version) {
       const trip = await loadTripRow(tx, tripId);
       const current = toPersonView(row, ctx.actor.userId, states);
@@ -40,6 +41,7 @@ export async function updatePerson({
       summary: role === row.role ? name : `${name}: ${role}`,
       isPrinted: name !== row.name,
     });
+    if (role !== row.role) await fillPlaces(tx, await loadTripRow(tx, tripId));
     return toPersonView({ ...row, name, role, version: row.version + 1 }, ctx.actor.userId, states);
   });
 }

@@ -18,7 +18,19 @@ export interface MailFile {
 }
 
 export interface NewMessage {
-  readonly kind: "verification" | "reset" | "existing-account" | "invitation" | "papers";
+  readonly kind:
+    | "verification"
+    | "reset"
+    | "existing-account"
+    | "sign-in-link"
+    | "invitation"
+    | "reminder"
+    | "place"
+    | "papers"
+    | "test"
+    | "digest"
+    | "calendar"
+    | "emergency";
   /** The same request never makes two messages to one address. */
   readonly requestId: string;
   readonly tripId?: string;

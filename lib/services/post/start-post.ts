@@ -3,9 +3,11 @@ import { createTransport } from "@/lib/email/transport";
 import { env } from "@/lib/env";
 import { log } from "@/lib/log";
 import { captureMail } from "./capture-mail";
+import { runDue } from "./run-due";
 import { runOutboxOnce } from "./run-outbox";
 
 const PAUSE_MS = 1000;
+const DUE_EVERY_MS = 30_000;
 
 export interface Post {
   /** Finishes the message that is being sent, then rests. */
@@ -19,8 +21,13 @@ export async function startPost(): Promise<Post> {
   let isStopping = false;
   let wake: () => void = () => undefined;
 
+  let dueAt = 0;
   async function work(): Promise<void> {
     while (!isStopping) {
+      if (Date.now() >= dueAt) {
+        await runDue();
+        dueAt = Date.now() + DUE_EVERY_MS;
+      }
       await runOutboxOnce(transport, { isStopping: () => isStopping }).catch((error: unknown) =>
         log.error("outbox", error),
       );

@@ -1,0 +1,17 @@
+import { log } from "@/lib/log";
+import { remindDue } from "../answers/remind";
+
+/** What happens by itself when its time has come. Each is safe to run again, and in two processes at once. */
+const JOBS = { reminders: remindDue } as const satisfies Record<string, (now: Date) => Promise<number>>;
+
+/** One that fails keeps none of the others. */
+export async function runDue(now = new Date()): Promise<void> {
+  for (const [name, run] of Object.entries(JOBS)) {
+    try {
+      const count = await run(now);
+      if (count > 0) log.info("due work done", { name, count });
+    } catch (error) {
+      log.error("due work", error, { name });
+    }
+  }
+}
