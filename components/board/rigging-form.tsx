@@ -1,5 +1,6 @@
 "use client";
 
+import Link from "next/link";
 import { useId, useState } from "react";
 import type { ReactNode } from "react";
 import { KNOTS } from "@/lib/calc/tables/lines";
@@ -105,6 +106,12 @@ export function RiggingForm({ placement, anchor }: { readonly placement: Placeme
             </select>
           )}
         </Field>
+        <Link
+          href={`/knots#${placement.knot}`}
+          className="inline-flex min-h-11 items-center self-end text-15 font-semibold text-spruce hover:underline"
+        >
+          How to tie it
+        </Link>
         {pitch && tieOut && (
           <CommitNumber
             label={`Line, ${preferences.lengthUnit}`}

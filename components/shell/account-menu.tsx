@@ -2,7 +2,7 @@ import Link from "next/link";
 import { ThemeSwitch } from "./theme-switch";
 import type { Theme } from "./themes";
 
-/** Initials that open the account, quick check, own gear and the light. */
+/** Initials that open the account, quick check, knots, own gear and the light. */
 export function AccountMenu({ name, theme }: { readonly name: string; readonly theme: Theme }) {
   const initials = name
     .split(/\s+/)
@@ -26,6 +26,7 @@ export function AccountMenu({ name, theme }: { readonly name: string; readonly t
         {[
           ["/trips", "Trips"],
           ["/quick-check", "Quick check"],
+          ["/knots", "Knots"],
           ["/gear", "Own gear"],
           ["/account", "Account and units"],
         ].map(([href = "", label]) => (

@@ -73,6 +73,7 @@ export const PAGE_ROWS: readonly Row[] = [
   row("/trips/new", PAGE_SIGNED_IN),
   row("/account", PAGE_SIGNED_IN),
   row("/quick-check", PAGE_SIGNED_IN),
+  row("/knots", PAGE_SIGNED_IN),
   row("/gear", PAGE_SIGNED_IN),
   row("/gear/new", PAGE_SIGNED_IN),
   row("/gear/[gearId]", by("sign-in", NONE, NONE, NONE, YES, NONE), "gear of the leader"),
