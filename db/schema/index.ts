@@ -9,3 +9,4 @@ export * from "./messages";
 export * from "./paper";
 export * from "./forecast";
 export * from "./route";
+export * from "./load";

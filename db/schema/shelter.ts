@@ -141,6 +141,11 @@ export const carry = sqliteTable(
       .references(() => person.id, { onDelete: "cascade" }),
     shelterId: text("shelter_id").references(() => shelter.id, { onDelete: "cascade" }),
     kitItemId: text("kit_item_id").references(() => kitItem.id, { onDelete: "cascade" }),
+    groupThingId: text("group_thing_id"),
+    /** Of a shelter: which part; null = all of it. */
+    part: text("part").$type<"fly" | "poles">(),
+    /** Sharing out leaves it where it is. */
+    isFixed: flag("is_fixed").notNull().default(false),
     count: integer("count").notNull().default(1),
   },
   (table) => [index("carry_trip").on(table.tripId)],

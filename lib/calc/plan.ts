@@ -25,7 +25,7 @@ export interface PlanProposal {
 }
 
 /** How much work one is to set, in stakes (judgement); decides only among plans that hold the same and weigh the same. */
-const WORK: Readonly<Record<AnchorSpec["class"], number>> = {
+export const WORK: Readonly<Record<AnchorSpec["class"], number>> = {
   natural: 1,
   fixed: 1,
   stake: 1,
