@@ -7,6 +7,7 @@ import { fileURLToPath } from "node:url";
 import { PUBLISHED_CASES } from "../fixtures/published-cases";
 import { PUBLISHED_LEARNING_CASES } from "../fixtures/published-cases-learning";
 import { PUBLISHED_STRUCTURE_CASES } from "../fixtures/published-cases-structure";
+import { PUBLISHED_WEATHER_CASES } from "../fixtures/published-cases-weather";
 
 const FILE = fileURLToPath(new URL("../../DEVELOPERS.md", import.meta.url));
 const START = "<!-- checks: written by tests/helpers/checks-table.ts -->\n<!-- prettier-ignore-start -->\n";
@@ -26,7 +27,12 @@ function cell(text: string): string {
 }
 
 export function checksTable(): string {
-  const rows = [...PUBLISHED_CASES, ...PUBLISHED_STRUCTURE_CASES, ...PUBLISHED_LEARNING_CASES].map((row) => {
+  const rows = [
+    ...PUBLISHED_CASES,
+    ...PUBLISHED_STRUCTURE_CASES,
+    ...PUBLISHED_LEARNING_CASES,
+    ...PUBLISHED_WEATHER_CASES,
+  ].map((row) => {
     const ours = row.ours();
     const numbers = [`${figure(row.published)} ${row.unit}`, figure(ours), difference(row.published, ours)];
     return `| ${[row.section, row.what, row.source, ...numbers].map((text) => cell(text.trim())).join(" | ")} |`;
