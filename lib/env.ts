@@ -16,6 +16,14 @@ const appUrl = z
   .string()
   .refine((text) => /^https?:\/\//.test(text) && URL.canParse(text), "has to look like https://camp.example.org")
   .transform((text) => new URL(text).origin);
+/** Encrypted, but for a service on this machine. */
+const forecastUrl = z
+  .string()
+  .refine((text) => URL.canParse(text), "has to be an address")
+  .refine(
+    (text) => /^https:\/\//.test(text) || /^http:\/\/(localhost|127\.0\.0\.1|\[::1\])(:\d+)?(\/|$)/.test(text),
+    "has to begin with https://",
+  );
 
 function isDemo(): boolean {
   return process.env.LEESTEAD_DEMO === "1";
@@ -59,6 +67,8 @@ const FIELDS = {
       .transform((text) => text.toLowerCase())
       .optional(),
   },
+  forecastUrl: { key: "FORECAST_URL", schema: forecastUrl.optional() },
+  forecastName: { key: "FORECAST_NAME", schema: z.string().max(80, "has to be short").optional() },
   isDemo: { key: "LEESTEAD_DEMO", schema: flag.default(false) },
   logLevel: {
     key: "LOG_LEVEL",

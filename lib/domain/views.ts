@@ -39,6 +39,8 @@ export interface CampView {
   readonly position: number;
   /** Calendar days of its nights, yyyy-mm-dd. */
   readonly days: readonly string[];
+  /** The camp in whose place it stands by in bad weather, with that camp's days; null: it is in the line of nights. */
+  readonly alternativeTo: { readonly id: string; readonly name: string } | null;
   readonly details: CampDetails;
   readonly version: number;
 }
@@ -170,6 +172,12 @@ export interface CampSummary {
   readonly weakest: string | null;
   readonly altitudeM: number | null;
   readonly groundName: string | null;
+}
+
+/** A camp kept beside the line of nights, for bad weather. */
+export interface AlternativeSummary extends CampSummary {
+  readonly alternativeTo: { readonly id: string; readonly name: string };
+  readonly pitches: readonly { readonly id: string; readonly name: string }[];
 }
 
 export interface TodoItem {

@@ -117,6 +117,7 @@ export const campUpdateInput = z.object({
 export const campReorderInput = z.object({ tripId: idSchema, campIds: z.array(idSchema).min(1).max(60) });
 
 export const campRefInput = z.object({ tripId: idSchema, campId: idSchema });
+export const campAlternativeInput = campRefInput.extend({ name: lineText("a name for the alternative", 80) });
 export const campCopyInput = campRefInput.extend({ withSleepers: z.boolean().default(false) });
 /** Without confirmation, what depends on it is said first and nothing is deleted. */
 export const campDeleteInput = campRefInput.extend({ confirmed: z.boolean().default(false) });

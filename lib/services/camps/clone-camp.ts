@@ -2,6 +2,7 @@ import { and, eq } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { camp, pitch, placement, sleeper } from "@/db/schema";
 import type { Placement } from "@/lib/calc/types";
+import type { CampDetails } from "@/lib/domain/camp/schema";
 import { newId } from "@/lib/domain/ids";
 import type { Context } from "@/lib/services/context/context";
 import { savePlanRow, toPlacement, writeIntent, writePlacements } from "../plan/internal";
@@ -11,6 +12,10 @@ interface Target {
   readonly tripId: string;
   readonly name: string;
   readonly position: number;
+  /** The camp of the target trip for which it stands by; null puts it in the line of nights. */
+  readonly alternativeToId: string | null;
+  /** Laid over what the source says. */
+  readonly details?: Partial<CampDetails>;
   readonly mapShelterId: (id: string) => string | null;
   readonly mapAnchorId: (id: string) => string | null;
   /** Null leaves that person's sleeping place out. */
@@ -27,11 +32,20 @@ function movePlacement(one: Placement, pitchId: string, target: Target): Placeme
 /** A camp with its pitches, plan and sleepers, under new ids, in this trip or another. Returns the new camp's id. */
 export async function cloneCamp(tx: Transaction, ctx: Context, source: CampRow, target: Target): Promise<string> {
   const now = new Date();
-  const { tripId, name, position } = target;
+  const { tripId, name, position, alternativeToId, details } = target;
   const campId = newId();
-  await tx
-    .insert(camp)
-    .values({ ...source, id: campId, tripId, name, position, version: 1, createdAt: now, updatedAt: now });
+  await tx.insert(camp).values({
+    ...source,
+    ...details,
+    id: campId,
+    tripId,
+    name,
+    position,
+    alternativeToId,
+    version: 1,
+    createdAt: now,
+    updatedAt: now,
+  });
 
   const pitches = await tx
     .select()

@@ -26,6 +26,7 @@ export async function copyCamp({
     const copyId = await cloneCamp(tx, ctx, source, {
       tripId,
       name,
+      alternativeToId: null,
       position: Math.max(...camps.map((one) => one.position)) + 1,
       mapShelterId: (id) => id,
       mapAnchorId: (id) => id,

@@ -1,7 +1,7 @@
 import { and, count, eq, isNotNull } from "drizzle-orm";
 import type { z } from "zod";
 import { getDb } from "@/db/client";
-import { pitch, placement, sleeper } from "@/db/schema";
+import { camp, pitch, placement, sleeper } from "@/db/schema";
 import { campRefInput } from "@/lib/domain/camp/schema";
 import { plural } from "@/lib/format/words";
 import { requirePermission } from "@/lib/auth/permission";
@@ -25,13 +25,19 @@ export async function listCampDependents(reader: Reader, tripId: string, campId:
     .select({ count: count() })
     .from(sleeper)
     .where(and(eq(sleeper.tripId, tripId), eq(sleeper.campId, campId), isNotNull(sleeper.pitchId)));
+  const [alternatives] = await reader
+    .select({ count: count() })
+    .from(camp)
+    .where(and(eq(camp.tripId, tripId), eq(camp.alternativeToId, campId)));
   const sentences: string[] = [];
+  const standingBy = alternatives?.count ?? 0;
   const pitched = pitches?.count ?? 0;
   const placed = placements?.count ?? 0;
   const sleeping = sleepers?.count ?? 0;
   if (pitched > 0) sentences.push(`${plural(pitched, "shelter is", "shelters are")} pitched there.`);
   if (placed > 0) sentences.push(`Its staking plan has ${plural(placed, "anchor")} set.`);
   if (sleeping > 0) sentences.push(`${plural(sleeping, "person has", "people have")} a sleeping place there.`);
+  if (standingBy > 0) sentences.push(`${plural(standingBy, "alternative stands", "alternatives stand")} by for it.`);
   return sentences;
 }
 

@@ -7,7 +7,7 @@ import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
 import { loadTripRow } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
-import { listCampRows, toCampViews } from "./internal";
+import { listAlternativeRows, listCampRows, toAlternativeViews, toCampViews } from "./internal";
 
 export async function getCamp({
   ctx,
@@ -20,7 +20,10 @@ export async function getCamp({
   await requirePermission(ctx, tripId, "camp.read");
   const db = getDb();
   const trip = await loadTripRow(db, tripId);
-  const found = toCampViews(trip.startDate, await listCampRows(db, tripId)).find((camp) => camp.id === campId);
+  const rows = await listCampRows(db, tripId);
+  const alternatives = await listAlternativeRows(db, tripId);
+  const views = [...toCampViews(trip.startDate, rows), ...toAlternativeViews(trip.startDate, rows, alternatives)];
+  const found = views.find((camp) => camp.id === campId);
   if (!found) throw new AppError("not-found", "There is no such camp on this trip.");
   return found;
 }

@@ -90,18 +90,39 @@ export function toCampDetails(row: CampRow): CampDetails {
   };
 }
 
+function toCampView(row: CampRow, days: readonly string[], position: number, main: CampRow | null): CampView {
+  return {
+    id: row.id,
+    position,
+    days,
+    alternativeTo: main && { id: main.id, name: main.name },
+    details: toCampDetails(row),
+    version: row.version,
+  };
+}
+
 /** Days follow from the trip's first day and the nights of the camps before. */
 export function toCampViews(startDate: string, rows: readonly CampRow[]): CampView[] {
   let nightsBefore = 0;
   return rows.map((row) => {
     const first = nightsBefore;
     nightsBefore += row.nights;
-    return {
-      id: row.id,
-      position: row.position,
-      days: Array.from({ length: row.nights }, (_, night) => addDays(startDate, first + night)),
-      details: toCampDetails(row),
-      version: row.version,
-    };
+    const days = Array.from({ length: row.nights }, (_, night) => addDays(startDate, first + night));
+    return toCampView(row, days, row.position, null);
+  });
+}
+
+/** Each with nights, days and place in the order of the camp that it stands by for. */
+export function toAlternativeViews(
+  startDate: string,
+  rows: readonly CampRow[],
+  alternatives: readonly CampRow[],
+): CampView[] {
+  const inLine = toCampViews(startDate, rows);
+  return alternatives.flatMap((row) => {
+    const index = rows.findIndex((one) => one.id === row.alternativeToId);
+    const [main, view] = [rows[index], inLine[index]];
+    if (!main || !view) return [];
+    return [toCampView({ ...row, nights: main.nights }, view.days, view.position, main)];
   });
 }

@@ -22,12 +22,15 @@ export async function updateCamp({
   ctx: Context;
   input: z.input<typeof campUpdateInput>;
 }): Promise<{ version: number; lifted: number }> {
-  const { tripId, campId, version, details } = parseInput(campUpdateInput, input);
+  const { tripId, campId, version, details: typed } = parseInput(campUpdateInput, input);
   return withTransaction(async (tx) => {
     await requirePermission(ctx, tripId, "camp.edit", tx);
     const before = await loadCampRow(tx, tripId, campId);
     const others = (await listCampRows(tx, tripId)).filter((one) => one.id !== campId);
-    requireNightsFit(countNights(others) + details.nights);
+    const main = others.find((one) => one.id === before.alternativeToId);
+    // An alternative has the nights of the camp that it stands by for.
+    const details = main ? { ...typed, nights: main.nights } : typed;
+    if (!main) requireNightsFit(countNights(others) + details.nights);
     const [row] = await tx
       .update(camp)
       .set({ ...details, version: version + 1, updatedAt: new Date() })
@@ -41,6 +44,10 @@ export async function updateCamp({
         current: { version: before.version, details: toCampDetails(before) },
       });
     }
+    await tx
+      .update(camp)
+      .set({ nights: details.nights })
+      .where(and(eq(camp.tripId, tripId), eq(camp.alternativeToId, campId)));
     const found = listFoundAnchorIds(details);
     const gone = new Set([...listFoundAnchorIds(toCampDetails(before))].filter((id) => !found.has(id)));
     const lifted = await amendPlacements(tx, ctx, tripId, (placement, placedAt) => {

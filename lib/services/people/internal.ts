@@ -1,10 +1,11 @@
 import { and, asc, count, eq, inArray, isNotNull, isNull, ne } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { answer, carry, invitation, person, pitch, sleeper } from "@/db/schema";
+import { answer, camp, carry, invitation, person, pitch, sleeper } from "@/db/schema";
 import type { AnswerView } from "@/lib/domain/people-views";
 import type { PersonView } from "@/lib/domain/views";
 import { AppError } from "@/lib/errors";
 import { plural } from "@/lib/format/words";
+import { isInLine } from "../camps/internal";
 import type { Reader } from "../trips/internal";
 
 export type PersonRow = typeof person.$inferSelect;
@@ -88,7 +89,8 @@ export async function listPersonDependents(reader: Reader, tripId: string, perso
     .select({ count: count() })
     .from(sleeper)
     .innerJoin(pitch, eq(pitch.id, sleeper.pitchId))
-    .where(and(eq(sleeper.tripId, tripId), eq(sleeper.personId, personId)));
+    .innerJoin(camp, eq(camp.id, sleeper.campId))
+    .where(and(eq(sleeper.tripId, tripId), eq(sleeper.personId, personId), isInLine));
   const carried = await reader
     .select({ count: carry.count })
     .from(carry)

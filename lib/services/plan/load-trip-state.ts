@@ -3,7 +3,7 @@ import { person, pitch, sleeper, stakingPlan } from "@/db/schema";
 import type { Placement, TrayAnchor } from "@/lib/calc/types";
 import type { CampView, PitchView } from "@/lib/domain/views";
 import { AppError } from "@/lib/errors";
-import { listCampRows, toCampViews } from "../camps/internal";
+import { listAlternativeRows, listCampRows, toAlternativeViews, toCampViews } from "../camps/internal";
 import { listKitRows, type KitRow } from "../kit/internal";
 import { countShockCords, toTray } from "../kit/to-tray";
 import { toPitchDetails, toPitchSpec } from "../pitches/internal";
@@ -29,13 +29,17 @@ export interface TripState {
   readonly shelters: readonly ShelterRow[];
   readonly kit: readonly KitRow[];
   readonly shockCordCount: number;
+  /** The line of nights. */
   readonly camps: readonly CampState[];
+  /** Kept beside for bad weather: in no count, list or paper of the trip unless asked for by id. */
+  readonly alternatives: readonly CampState[];
 }
 
 /** Everything of a trip that plans and papers are made of: one query per table, all by the trip's id. */
 export async function loadTripState(reader: Reader, tripId: string): Promise<TripState> {
   const trip = await loadTripRow(reader, tripId);
   const campRows = await listCampRows(reader, tripId);
+  const alternativeRows = await listAlternativeRows(reader, tripId);
   const shelters = await listShelterRows(reader, tripId);
   const kit = await listKitRows(reader, tripId);
   const pitchRows = await reader
@@ -53,7 +57,7 @@ export async function loadTripState(reader: Reader, tripId: string): Promise<Tri
     .orderBy(asc(person.name), asc(person.id));
 
   const shelterById = new Map(shelters.map((row) => [row.id, row]));
-  const camps = toCampViews(trip.startDate, campRows).map((camp): CampState => {
+  const toState = (camp: CampView): CampState => {
     const sleepers = sleeperRows.filter((row) => row.campId === camp.id);
     const pitches = pitchRows.flatMap((row): UnworkedPitch[] => {
       const own = shelterById.get(row.shelterId);
@@ -81,12 +85,21 @@ export async function loadTripState(reader: Reader, tripId: string): Promise<Tri
       plan: planRows.find((row) => row.campId === camp.id) ?? null,
       sleepers: sleepers.map(({ personId, pitchId }) => ({ personId, pitchId })),
     };
-  });
-  return { trip, people, shelters, kit, shockCordCount: countShockCords(kit), camps };
+  };
+  return {
+    trip,
+    people,
+    shelters,
+    kit,
+    shockCordCount: countShockCords(kit),
+    camps: toCampViews(trip.startDate, campRows).map(toState),
+    alternatives: toAlternativeViews(trip.startDate, campRows, alternativeRows).map(toState),
+  };
 }
 
+/** In the line of nights or beside it. */
 export function findCampState(state: TripState, campId: string): CampState {
-  const found = state.camps.find((one) => one.camp.id === campId);
+  const found = [...state.camps, ...state.alternatives].find((one) => one.camp.id === campId);
   if (!found) throw new AppError("not-found", "There is no such camp on this trip.");
   return found;
 }

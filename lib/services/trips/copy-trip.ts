@@ -7,7 +7,7 @@ import { tripCopyInput } from "@/lib/domain/trip/schema";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
 import { cloneCamp } from "../camps/clone-camp";
-import { listCampRows } from "../camps/internal";
+import { listAlternativeRows, listCampRows } from "../camps/internal";
 import { listKitRows } from "../kit/internal";
 import { listShelterRows } from "../shelters/internal";
 import { loadTripRow, recordChange } from "./internal";
@@ -105,16 +105,19 @@ export async function copyTrip({
     const people = await copyPeople(tx, ctx, tripId, copyId, withPeople);
     const gear = await copyGear(tx, tripId, copyId);
     await copyPacking(tx, tripId, copyId, people, gear);
-    for (const camp of await listCampRows(tx, tripId)) {
-      await cloneCamp(tx, ctx, camp, {
+    const camps = new Map<string, string>();
+    for (const camp of [...(await listCampRows(tx, tripId)), ...(await listAlternativeRows(tx, tripId))]) {
+      const campId = await cloneCamp(tx, ctx, camp, {
         tripId: copyId,
         name: camp.name,
         position: camp.position,
+        alternativeToId: (camp.alternativeToId && camps.get(camp.alternativeToId)) ?? null,
         mapShelterId: (id) => gear.shelters.get(id) ?? null,
         // What is found at a camp has the same id everywhere.
         mapAnchorId: (id) => gear.kit.get(id) ?? id,
         mapPersonId: (id) => people.get(id) ?? null,
       });
+      camps.set(camp.id, campId);
     }
     await recordChange(tx, ctx, {
       tripId: copyId,

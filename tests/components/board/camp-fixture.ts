@@ -76,7 +76,7 @@ export function makeView(over: Partial<CampPlanView> = {}, camp: CampDetails = W
       paperVersion: 1,
       role: "leader",
     },
-    camp: { id: CAMP_ID, position: 0, days: ["2026-06-14"], details: camp, version: 1 },
+    camp: { id: CAMP_ID, position: 0, days: ["2026-06-14"], alternativeTo: null, details: camp, version: 1 },
     camps: [],
     pitches: over.pitches ?? [makePitch("ridge-tarp", camp)],
     tray: makeTray(),

@@ -91,7 +91,7 @@ export function paperCamp(requests: readonly PitchRequest[], details: CampDetail
   const { placements } = proposePlan(input, { allowFound: true, allowDoubling: true });
   const result = evaluateCamp({ ...input, placements });
   return {
-    camp: { id, position: 0, days: ["2026-06-14"], details, version: 3 },
+    camp: { id, position: 0, days: ["2026-06-14"], alternativeTo: null, details, version: 3 },
     nightNumbers: "3 of 5",
     pitches,
     tray: TRAY,
