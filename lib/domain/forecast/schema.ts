@@ -33,4 +33,10 @@ export interface ForecastContent {
 }
 
 export const forecastFetchInput = z.object({ tripId: idSchema, campId: idSchema });
-export const forecastAcceptInput = z.object({ tripId: idSchema, campId: idSchema, forecastId: idSchema });
+/** `version` is the camp's, as it was when its verdict under the forecast was shown. */
+export const forecastAcceptInput = z.object({
+  tripId: idSchema,
+  campId: idSchema,
+  forecastId: idSchema,
+  version: z.number().int().min(1),
+});

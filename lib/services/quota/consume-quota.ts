@@ -16,6 +16,7 @@ export const QUOTAS = {
   pdf: { max: 60, windowS: 600, sentence: "At most 60 pieces of paper in ten minutes." },
   mail: { max: 300, windowS: 3600, sentence: "At most 300 messages in an hour." },
   invitation: { max: 60, windowS: 3600, sentence: "At most 60 invitations in an hour." },
+  forecast: { max: 120, windowS: 3600, sentence: "At most 120 forecasts in an hour." },
   "sign-in-failure": { max: 10, windowS: 900, sentence: "Too many wrong passwords for this account." },
 } as const satisfies Record<string, Rule>;
 
