@@ -15,7 +15,7 @@ export interface BoardStart {
 
 export function startBoardView(view: CampPlanView): BoardStart {
   const { details } = view.camp;
-  const result = evaluateCamp(toCampInput(details, view.pitches, view.tray, view.placements));
+  const result = evaluateCamp(toCampInput(details, view.pitches, view.tray, view.placements, view.learned));
   return {
     result: withoutWorkings(result),
     models: Object.fromEntries(view.pitches.map((pitch) => [pitch.id, toDrawnModel(pitch.spec)])),

@@ -73,8 +73,8 @@ export function useStakingBoard(view: CampPlanView, start: BoardStart, userId: s
 
   const [preview, setPreview] = useState<readonly Placement[] | null>(null);
   const prepared = useMemo(
-    () => engine && engine.prepareCamp(toCampInput(view.camp.details, pitches, view.tray, [])),
-    [engine, view.camp.details, pitches, view.tray],
+    () => engine && engine.prepareCamp(toCampInput(view.camp.details, pitches, view.tray, [], view.learned)),
+    [engine, view.camp.details, pitches, view.tray, view.learned],
   );
   const shown = preview ?? state.placements;
   const result = useMemo(
@@ -93,8 +93,8 @@ export function useStakingBoard(view: CampPlanView, start: BoardStart, userId: s
     [isBehind, pitches, pitched.waiting],
   );
   const campInput = useMemo(
-    () => toCampInput(view.camp.details, pitches, view.tray, state.placements),
-    [view.camp.details, pitches, view.tray, state.placements],
+    () => toCampInput(view.camp.details, pitches, view.tray, state.placements, view.learned),
+    [view.camp.details, pitches, view.tray, state.placements, view.learned],
   );
 
   const apply = useCallback(

@@ -27,6 +27,7 @@ export function AccountMenu({ name, theme }: { readonly name: string; readonly t
           ["/trips", "Trips"],
           ["/quick-check", "Quick check"],
           ["/knots", "Knots"],
+          ["/pull-tests", "Practice field"],
           ["/gear", "Own gear"],
           ["/account", "Account and units"],
         ].map(([href = "", label]) => (

@@ -23,6 +23,7 @@ import { saveSleepers } from "@/lib/services/sleepers/save-sleepers";
 import { createTrip } from "@/lib/services/trips/create-trip";
 import { updateTrip } from "@/lib/services/trips/update-trip";
 import { DEMO_PASSWORD, DEMO_PEOPLE, SECOND_LEADER, type DemoPerson } from "./people";
+import { seedCampPulls, seedPractice } from "./pull-tests";
 import { CAMPS, CONTACTS, KIT, SHELTERS, SLEEPS_IN, TRIP } from "./skarn-edge";
 
 /** An account through the front door; its address counts as verified, and the mail that asks for it isn't sent. */
@@ -74,7 +75,7 @@ function weakenOne(
 
 async function planCamp(ctx: Context, tripId: string, campId: string, isWorst: boolean): Promise<void> {
   const plan = await getCampPlan({ ctx, input: { tripId, campId } });
-  const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, []);
+  const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, [], plan.learned);
   const { placements } = proposePlan(input, { allowFound: true, allowDoubling: true });
   const save = async (baseVersion: number, wanted: readonly Placement[]) => {
     const change = { type: "replace" as const, placements: [...wanted] };
@@ -111,8 +112,10 @@ async function createMainTrip(ctx: Context): Promise<string> {
     }));
     await saveSleepers({ ctx, input: { tripId, campId, sleepers } });
     await planCamp(ctx, tripId, campId, details.name === "Skarn Edge");
+    if (details === CAMPS[0]) await seedCampPulls(ctx, tripId, campId);
   }
   await shareOutEvenly({ ctx, input: { tripId } });
+  await seedPractice(ctx);
   return tripId;
 }
 

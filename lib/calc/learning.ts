@@ -89,14 +89,19 @@ function normalised(logs: readonly number[]): number[] {
   return weights.map((one) => one / sum);
 }
 
+/** Weights below this share of the largest add less than 1e-11 to any probability and cost as much as the others. */
+const NEGLIGIBLE = 1e-14;
+
 /** ln of the weights smeared by a normal of deviation `sigma`, on the same grid. */
 function smearedLogs(grid: readonly number[], weights: readonly number[], sigma: number): number[] {
-  return grid.map((x) => {
+  const step = itemAt(grid, 1) - itemAt(grid, 0);
+  // The grid is even: the smear depends on the distance of two points only.
+  const kernel = grid.map((_, distance) => Math.exp(-0.5 * ((distance * step) / sigma) ** 2));
+  const limit = NEGLIGIBLE * weights.reduce((most, one) => Math.max(most, one), 0);
+  const heavy = weights.flatMap((weight, i) => (weight > limit ? [{ weight, i }] : []));
+  return grid.map((_, at) => {
     let sum = 0;
-    grid.forEach((y, i) => {
-      const z = (x - y) / sigma;
-      sum += itemAt(weights, i) * Math.exp(-0.5 * z * z);
-    });
+    for (const { weight, i } of heavy) sum += weight * itemAt(kernel, at < i ? i - at : at - i);
     return Math.log(Math.max(sum, 1e-300));
   });
 }
@@ -180,7 +185,20 @@ export function shareBelow({ grid, weights }: GroundPosterior, x: number, sigma:
   return sum;
 }
 
-function quantile(posterior: GroundPosterior, p: number, sigma: number): number {
+/** The part of a posterior that carries weight. */
+function trimmed(posterior: GroundPosterior): GroundPosterior {
+  const { grid, weights } = posterior;
+  const limit = NEGLIGIBLE * weights.reduce((most, one) => Math.max(most, one), 0);
+  const first = Math.max(
+    0,
+    weights.findIndex((one) => one > limit),
+  );
+  const last = weights.findLastIndex((one) => one > limit);
+  return { ...posterior, grid: grid.slice(first, last + 1), weights: weights.slice(first, last + 1) };
+}
+
+function quantile(whole: GroundPosterior, p: number, sigma: number): number {
+  const posterior = trimmed(whole);
   const { grid } = posterior;
   let low = itemAt(grid, 0) - 8 * sigma;
   let high = itemAt(grid, grid.length - 1) + 8 * sigma;
@@ -212,7 +230,7 @@ export function learnGround(input: LearnInput): LearnedGround {
 }
 
 export interface ReadingInfluence {
-  /** Factor with this reading ÷ factor without it: above 1 it lifts the estimate. */
+  /** Middle of the ground's factor with this reading ÷ without it: above 1 it lifts the estimate. */
   readonly pull: number;
   /** How likely a reading at least as far out was, given all others, 0…1. */
   readonly chance: number;
@@ -222,19 +240,68 @@ export interface ReadingInfluence {
 /** Chance below which a reading is pointed out: both tails beyond 2.5 σ (judgement). */
 const OUTLIER_CHANCE = 0.0124;
 
-/** What one reading of `own` does to the result and how it fits the others; input as `groundPosterior`. */
-export function readingInfluence(input: LearnInput, index: number): ReadingInfluence {
-  const reading = input.own[index];
-  if (reading === undefined) throw new RangeError("There is no such reading.");
-  const rest = { ...input, own: input.own.filter((_, i) => i !== index) };
-  const posterior = groundPosterior(rest);
-  const below = shareBelow(posterior, reading.logRatio, posterior.within);
-  const chance = reading.kind === "exact" ? 2 * Math.min(below, 1 - below) : 1 - below;
-  return {
-    pull: learnGround(input).factor / learnGround(rest).factor,
-    chance,
-    isOutlier: chance < OUTLIER_CHANCE,
-  };
+const meanOf = (grid: readonly number[], weights: readonly number[]) =>
+  grid.reduce((sum, g, i) => sum + g * itemAt(weights, i), 0);
+
+/** Posterior without one reading that it counts: its likelihood is taken out of the product, which is exact. */
+function withoutOne(posterior: GroundPosterior, reading: PullReading): GroundPosterior {
+  const own = gather([reading]);
+  const logs = posterior.weights.map(
+    (one, i) => Math.log(Math.max(one, 1e-300)) - logLikelihood(own, itemAt(posterior.grid, i), posterior.within),
+  );
+  return trimmed({ ...posterior, weights: normalised(logs) });
+}
+
+function chanceOf(reading: PullReading, others: GroundPosterior): number {
+  const below = shareBelow(others, reading.logRatio, others.within);
+  return reading.kind === "exact" ? 2 * Math.min(below, 1 - below) : 1 - below;
+}
+
+/** At most so many readings, and a third of all, are held not to fit: beyond that it is the ground that is odd (judgement). */
+const MOST_OUTLIERS = 8;
+
+/** The worst one is set aside and the others judged without it, until all that are left fit: none hides another. */
+function findOutliers(input: LearnInput, indices: readonly number[]): ReadonlySet<number> {
+  const outliers = new Set<number>();
+  const most = Math.min(MOST_OUTLIERS, Math.max(1, Math.floor(input.own.length / 3)));
+  while (outliers.size < most) {
+    const posterior = groundPosterior({ ...input, own: input.own.filter((_, i) => !outliers.has(i)) });
+    let worst = { index: -1, chance: OUTLIER_CHANCE };
+    for (const index of indices) {
+      if (outliers.has(index)) continue;
+      const reading = itemAt(input.own, index);
+      const chance = chanceOf(reading, withoutOne(posterior, reading));
+      if (chance < worst.chance) worst = { index, chance };
+    }
+    if (worst.index < 0) break;
+    outliers.add(worst.index);
+  }
+  return outliers;
+}
+
+/**
+ * What each of the readings at `indices` of `own` does to the result, and how it fits the others (those that do not
+ * fit left out); a lone reading is held against the table. Input as `groundPosterior`.
+ * @throws RangeError for an index without a reading, and as `groundPosterior`
+ */
+export function readingInfluences(input: LearnInput, indices: readonly number[]): readonly ReadingInfluence[] {
+  for (const index of indices) {
+    if (input.own[index] === undefined) throw new RangeError("There is no such reading.");
+  }
+  const outliers = findOutliers(input, indices);
+  const posterior = groundPosterior(input);
+  const fitting = groundPosterior({ ...input, own: input.own.filter((_, i) => !outliers.has(i)) });
+  const mean = meanOf(posterior.grid, posterior.weights);
+  return indices.map((index) => {
+    const reading = itemAt(input.own, index);
+    const isOutlier = outliers.has(index);
+    const rest = withoutOne(posterior, reading);
+    return {
+      pull: Math.exp(mean - meanOf(rest.grid, rest.weights)),
+      chance: chanceOf(reading, isOutlier ? fitting : withoutOne(fitting, reading)),
+      isOutlier,
+    };
+  });
 }
 
 export interface LognormalFit {

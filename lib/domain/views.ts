@@ -6,6 +6,7 @@ import type { KitItemDetails } from "./kit/schema";
 import type { AnswerView } from "./people-views";
 import type { Role } from "./permissions/permissions";
 import type { MessageState } from "./post/schema";
+import type { LearnedGrounds } from "./pull-test/learned-grounds";
 import type { PitchDetails, ShelterDetails } from "./shelter/schema";
 import type { Contact } from "./trip/schema";
 
@@ -214,6 +215,8 @@ export interface CampPlanView {
   readonly tray: readonly TrayAnchor[];
   readonly shockCordCount: number;
   readonly placements: readonly Placement[];
+  /** What pull tests say of the camp's ground. */
+  readonly learned: LearnedGrounds;
   readonly planVersion: number;
   readonly savedAt: string | null;
   readonly savedByName: string | null;

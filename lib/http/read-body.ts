@@ -1,10 +1,14 @@
 import { AppError } from "@/lib/errors";
 
-/** The body as text, never more than `maxBytes` of it in memory. */
-export async function readText(request: Request, maxBytes: number): Promise<string> {
-  const tooLarge = () => new AppError("too-large", `That is too large: at most ${Math.floor(maxBytes / 1024)} kB.`);
+function describeLimit(maxBytes: number): string {
+  return maxBytes < 1024 * 1024 ? `${Math.floor(maxBytes / 1024)} kB` : `${Math.floor(maxBytes / 1024 / 1024)} MB`;
+}
+
+/** The body as it is, never more than `maxBytes` of it in memory. */
+export async function readBytes(request: Request, maxBytes: number): Promise<Uint8Array> {
+  const tooLarge = () => new AppError("too-large", `That is too large: at most ${describeLimit(maxBytes)}.`);
   if (Number(request.headers.get("content-length") ?? 0) > maxBytes) throw tooLarge();
-  if (!request.body) return "";
+  if (!request.body) return new Uint8Array();
   const parts: Uint8Array[] = [];
   let size = 0;
   const reader = request.body.getReader();
@@ -18,8 +22,14 @@ export async function readText(request: Request, maxBytes: number): Promise<stri
     }
     parts.push(value);
   }
+  return Buffer.concat(parts);
+}
+
+/** The body as text, by the same limit. */
+export async function readText(request: Request, maxBytes: number): Promise<string> {
+  const bytes = await readBytes(request, maxBytes);
   try {
-    return new TextDecoder("utf-8", { fatal: true }).decode(Buffer.concat(parts));
+    return new TextDecoder("utf-8", { fatal: true }).decode(bytes);
   } catch {
     throw new AppError("bad-input", "That is not UTF-8 text.");
   }

@@ -1,5 +1,6 @@
 import { expect, test, type APIRequestContext, type APIResponse } from "@playwright/test";
 import { CO_LEADER, LEADER, openAs, PARTICIPANT, PASSWORD } from "./people";
+import { TINY_PNG } from "../helpers/tiny-png";
 import { CALLERS, PAGE_ROWS, ROUTE_ROWS, type Caller, type Outcome } from "./role-matrix";
 
 /** Every page and route handler over HTTP, as each of the six callers, on the demo's trip. */
@@ -81,6 +82,9 @@ test.beforeAll(async ({ playwright, browser }, { project }) => {
   ids.campId = found(await read(trip), new RegExp(`${trip}/camps/([0-9a-z]{20,})`));
   ids.shelterId = found(await read(`${trip}/shelters`), new RegExp(`${trip}/shelters/([0-9a-z]{20,})`));
   ids.kitItemId = found(await read(`${trip}/kit`), new RegExp(`${trip}/kit/([0-9a-z]{20,})`));
+  const pulls = `${trip}/camps/${ids.campId}/pull-tests`;
+  ids.pullTestId = found(await read(pulls), new RegExp(`${pulls}/([0-9a-z]{20,})`));
+  ids.practicePullId = found(await read("/pull-tests"), /"\/pull-tests\/([0-9a-z]{20,})/);
   const plan = (await (await as.leader.get(`/api${trip}/camps/${ids.campId}/plan`)).json()) as Plan;
   ids.pitchId = plan.placements[0]?.pitchId ?? "";
   ids.tieOutId = plan.placements[0]?.tieOutId ?? "";
@@ -189,6 +193,8 @@ async function callRoute(name: string, when: string | undefined, caller: Caller)
       const intentId = `m${Date.now().toString(36)}${caller.toLowerCase()}`.padEnd(26, "0");
       return request.post(api, { data: { intents: [{ intentId, baseVersion: 0, change }] } });
     }
+    case "PUT /api/pull-tests/[pullTestId]/photo":
+      return request.put(api, { data: Buffer.from(TINY_PNG) });
     case "POST /api/trips/[tripId]/camps/[campId]/analyses":
       return request.post(api, { data: { pitchId: ids.pitchId, details: (await readPitch()).details } });
     case "PATCH /api/trips/[tripId]/camps/[campId]/pitches/[pitchId]": {

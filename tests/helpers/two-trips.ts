@@ -1,6 +1,7 @@
 import { Browser } from "./browser";
 import { makeCast, makePerson, makeTrip, makeUser, type TestUser } from "./actors";
 import { makeCampKit, placementOf, shelterOf, windyCamp } from "./camp-kit";
+import { practicePullOf, pullOf, TINY_PNG } from "./pulls";
 import { clearLimits, readLinkToken } from "./outbox";
 import { hashPassword } from "better-auth/crypto";
 import { and, eq, isNull } from "drizzle-orm";
@@ -15,6 +16,8 @@ import { savePackItems } from "@/lib/services/pack/save-pack-items";
 import { createPerson } from "@/lib/services/people/create-person";
 import { invitePerson } from "@/lib/services/people/invite-person";
 import { savePlanIntents } from "@/lib/services/plan/save-plan-intents";
+import { createCampPullTest, createPracticePullTest } from "@/lib/services/pull-tests/create-pull-test";
+import { savePhoto } from "@/lib/services/pull-tests/photo/save-photo";
 import { createShelter } from "@/lib/services/shelters/create-shelter";
 import { saveSleepers } from "@/lib/services/sleepers/save-sleepers";
 import type { Caller } from "../e2e/role-matrix";
@@ -86,6 +89,11 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
       nextAttemptAt: now,
       createdAt: now,
     });
+  const pullTestId = newId();
+  const practicePullId = newId();
+  await createCampPullTest({ ctx, input: { tripId, campId: kit.campId, ...pullOf(pullTestId) } });
+  await createPracticePullTest({ ctx, input: practicePullOf(practicePullId) });
+  await savePhoto({ ctx, input: { pullTestId, keepsPosition: false, content: TINY_PNG } });
   const { gearId } = await createGear({ ctx, input: { details: { type: "anchor", anchor: cordOf("Own cord") } } });
   return {
     ...kit,
@@ -97,6 +105,8 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
     waitingEmail,
     messageId,
     gearId,
+    pullTestId,
+    practicePullId,
   };
 }
 

@@ -1,9 +1,10 @@
 import type { CampInput, GroundState, Placement, TrayAnchor, WindInput } from "@/lib/calc/types";
 import type { CampDetails, GroundPatch } from "../camp/schema";
+import type { LearnedGrounds } from "../pull-test/learned-grounds";
 import type { PitchView } from "../views";
 
-function toGround(patch: GroundPatch | null, slopeDeg: number): GroundState | null {
-  return patch && { ...patch, slopeDeg, learned: null };
+function toGround(patch: GroundPatch | null, slopeDeg: number, learned: GroundState["learned"]): GroundState | null {
+  return patch && { ...patch, slopeDeg, learned };
 }
 
 export function toWindInput(camp: CampDetails): WindInput {
@@ -26,11 +27,12 @@ export function toCampInput(
   pitches: readonly Pick<PitchView, "id" | "name" | "spec" | "details" | "analysis">[],
   tray: readonly TrayAnchor[],
   placements: readonly Placement[],
+  learned: LearnedGrounds,
 ): CampInput {
   return {
     wind: toWindInput(camp),
-    ground: toGround(camp.ground, camp.slopeDeg),
-    secondGround: toGround(camp.secondGround, camp.slopeDeg),
+    ground: toGround(camp.ground, camp.slopeDeg, learned.main),
+    secondGround: toGround(camp.secondGround, camp.slopeDeg, learned.second),
     strongWindHours: camp.strongWindHours,
     rocksAvailable: camp.hasRocks,
     shelters: pitches.map((pitch) => ({

@@ -28,15 +28,15 @@ async function analysePitch(state: CampState, pitch: UnworkedPitch): Promise<Pit
 
 /** Every margin of a camp as it stands. Remembered by all that goes into it, so that an overview costs little. */
 export async function workOutCamp(state: CampState): Promise<WorkedCamp> {
-  const { camp, pitches, tray, placements } = state;
+  const { camp, pitches, tray, placements, learned } = state;
   const key = createHash("sha256")
-    .update(JSON.stringify([camp.details, pitches, tray, placements]))
+    .update(JSON.stringify([camp.details, pitches, tray, placements, learned]))
     .digest("base64");
   const memory = (store.leesteadCamps ??= new LruCache(MEMORY_ENTRIES));
   const known = memory.get(key);
   if (known) return known;
   const analysed = await Promise.all(pitches.map((pitch) => analysePitch(state, pitch)));
-  const input = toCampInput(camp.details, analysed, tray, placements);
+  const input = toCampInput(camp.details, analysed, tray, placements, learned);
   const prepared = prepareCamp(input);
   const worked = { pitches: analysed, input, prepared, result: evaluatePlacements(prepared, placements) };
   memory.set(key, worked);

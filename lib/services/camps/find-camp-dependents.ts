@@ -1,7 +1,7 @@
 import { and, count, eq, isNotNull } from "drizzle-orm";
 import type { z } from "zod";
 import { getDb } from "@/db/client";
-import { camp, pitch, placement, sleeper } from "@/db/schema";
+import { camp, pitch, placement, pullTest, sleeper } from "@/db/schema";
 import { campRefInput } from "@/lib/domain/camp/schema";
 import { plural } from "@/lib/format/words";
 import { requirePermission } from "@/lib/auth/permission";
@@ -29,6 +29,10 @@ export async function listCampDependents(reader: Reader, tripId: string, campId:
     .select({ count: count() })
     .from(camp)
     .where(and(eq(camp.tripId, tripId), eq(camp.alternativeToId, campId)));
+  const [pulls] = await reader
+    .select({ count: count() })
+    .from(pullTest)
+    .where(and(eq(pullTest.tripId, tripId), eq(pullTest.campId, campId)));
   const sentences: string[] = [];
   const standingBy = alternatives?.count ?? 0;
   const pitched = pitches?.count ?? 0;
@@ -38,6 +42,8 @@ export async function listCampDependents(reader: Reader, tripId: string, campId:
   if (placed > 0) sentences.push(`Its staking plan has ${plural(placed, "anchor")} set.`);
   if (sleeping > 0) sentences.push(`${plural(sleeping, "person has", "people have")} a sleeping place there.`);
   if (standingBy > 0) sentences.push(`${plural(standingBy, "alternative stands", "alternatives stand")} by for it.`);
+  if (pulls && pulls.count > 0)
+    sentences.push(`${plural(pulls.count, "pull test was", "pull tests were")} logged there.`);
   return sentences;
 }
 

@@ -36,6 +36,7 @@ export async function getCampPlan({
     tray: own.tray,
     shockCordCount: state.shockCordCount,
     placements: own.placements,
+    learned: own.learned,
     planVersion: own.plan?.version ?? 0,
     savedAt: own.plan?.updatedAt.toISOString() ?? null,
     savedByName: own.plan?.updatedByName ?? null,

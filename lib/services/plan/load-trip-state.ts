@@ -1,11 +1,18 @@
 import { asc, eq } from "drizzle-orm";
 import { person, pitch, sleeper, stakingPlan } from "@/db/schema";
 import type { Placement, TrayAnchor } from "@/lib/calc/types";
+import type { LearnedGrounds } from "@/lib/domain/pull-test/learned-grounds";
 import type { CampView, PitchView } from "@/lib/domain/views";
 import { AppError } from "@/lib/errors";
 import { listAlternativeRows, listCampRows, toAlternativeViews, toCampViews } from "../camps/internal";
 import { listKitRows, type KitRow } from "../kit/internal";
 import { countShockCords, toTray } from "../kit/to-tray";
+import {
+  loadCampLearnings,
+  NO_LEARNING,
+  toLearnedGrounds,
+  type CampLearning,
+} from "../pull-tests/load-learned-grounds";
 import { toPitchDetails, toPitchSpec } from "../pitches/internal";
 import { listShelterRows, type ShelterRow } from "../shelters/internal";
 import { loadTripRow, type Reader, type TripRow } from "../trips/internal";
@@ -19,6 +26,10 @@ export interface CampState {
   readonly pitches: readonly UnworkedPitch[];
   readonly tray: readonly TrayAnchor[];
   readonly placements: readonly Placement[];
+  /** What pull tests say of its ground. */
+  readonly learned: LearnedGrounds;
+  /** The same with its curve and where it comes from. */
+  readonly learning: CampLearning;
   readonly plan: PlanRow | null;
   readonly sleepers: readonly { readonly personId: string; readonly pitchId: string | null }[];
 }
@@ -57,6 +68,9 @@ export async function loadTripState(reader: Reader, tripId: string): Promise<Tri
     .orderBy(asc(person.name), asc(person.id));
 
   const shelterById = new Map(shelters.map((row) => [row.id, row]));
+  const views = toCampViews(trip.startDate, campRows);
+  const alternativeViews = toAlternativeViews(trip.startDate, campRows, alternativeRows);
+  const learnings = await loadCampLearnings(reader, tripId, [...views, ...alternativeViews]);
   const toState = (camp: CampView): CampState => {
     const sleepers = sleeperRows.filter((row) => row.campId === camp.id);
     const pitches = pitchRows.flatMap((row): UnworkedPitch[] => {
@@ -82,6 +96,8 @@ export async function loadTripState(reader: Reader, tripId: string): Promise<Tri
       pitches,
       tray: toTray(kit, camp.details),
       placements: placementRows.filter((row) => row.campId === camp.id).map(toPlacement),
+      learned: toLearnedGrounds(learnings.get(camp.id)),
+      learning: learnings.get(camp.id) ?? NO_LEARNING,
       plan: planRows.find((row) => row.campId === camp.id) ?? null,
       sleepers: sleepers.map(({ personId, pitchId }) => ({ personId, pitchId })),
     };
@@ -92,8 +108,8 @@ export async function loadTripState(reader: Reader, tripId: string): Promise<Tri
     shelters,
     kit,
     shockCordCount: countShockCords(kit),
-    camps: toCampViews(trip.startDate, campRows).map(toState),
-    alternatives: toAlternativeViews(trip.startDate, campRows, alternativeRows).map(toState),
+    camps: views.map(toState),
+    alternatives: alternativeViews.map(toState),
   };
 }
 

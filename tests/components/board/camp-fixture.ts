@@ -6,6 +6,7 @@ import { builtInAnchor } from "@/lib/calc/tables/anchors";
 import type { Placement, ShelterKind, TrayAnchor } from "@/lib/calc/types";
 import { blankCamp, type CampDetails } from "@/lib/domain/camp/schema";
 import { toWindInput } from "@/lib/domain/plan/to-camp-input";
+import { NOTHING_LEARNED } from "@/lib/domain/pull-test/learned-grounds";
 import type { CampPlanView, PitchView } from "@/lib/domain/views";
 
 export const TRIP_ID = "trip00000000000000000001";
@@ -82,6 +83,7 @@ export function makeView(over: Partial<CampPlanView> = {}, camp: CampDetails = W
     tray: makeTray(),
     shockCordCount: 2,
     placements: [],
+    learned: NOTHING_LEARNED,
     planVersion: 3,
     savedAt: "2026-06-10T09:42:00.000Z",
     savedByName: "Rena Amsel",

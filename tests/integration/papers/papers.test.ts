@@ -30,7 +30,7 @@ beforeAll(async () => {
   const { shelterId } = await createShelter({ ctx, input: one({ details }) });
   otherPitchId = (await createPitch({ ctx, input: one({ campId: kit.campId, shelterId }) })).pitchId;
   const plan = await getCampPlan({ ctx, input: one({ campId: kit.campId }) });
-  const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, []);
+  const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, [], plan.learned);
   const placements = [...proposePlan(input, { allowFound: true, allowDoubling: false }).placements];
   const intents = [{ intentId: newId(), baseVersion: 0, change: { type: "replace" as const, placements } }];
   await savePlanIntents({ ctx, input: one({ campId: kit.campId, intents }) });

@@ -6,6 +6,7 @@ import { BUILT_IN_ANCHORS } from "@/lib/calc/tables/anchors";
 import type { ShelterKind, TrayAnchor } from "@/lib/calc/types";
 import { blankCamp, type CampDetails } from "@/lib/domain/camp/schema";
 import { toCampInput } from "@/lib/domain/plan/to-camp-input";
+import { NOTHING_LEARNED } from "@/lib/domain/pull-test/learned-grounds";
 import type { PackListView, PaperCamp, PaperDocument, PaperHeader, PitchView, TripView } from "@/lib/domain/views";
 
 /** An invented trip, worked out by the real calculation, in the shape that the services hand to the papers. */
@@ -81,13 +82,13 @@ export function paperCamp(requests: readonly PitchRequest[], details: CampDetail
       sleeperIds: [],
     } satisfies PitchView;
   });
-  const blank = toCampInput(details, bare, TRAY, []);
+  const blank = toCampInput(details, bare, TRAY, [], NOTHING_LEARNED);
   const pitches: PitchView[] = bare.map((pitch, index) => {
     const shelter = blank.shelters[index];
     const request = shelter && designAnalysisRequest(blank, shelter);
     return request && "spec" in request ? { ...pitch, analysis: analyseShelter(request) } : pitch;
   });
-  const input = toCampInput(details, pitches, TRAY, []);
+  const input = toCampInput(details, pitches, TRAY, [], NOTHING_LEARNED);
   const { placements } = proposePlan(input, { allowFound: true, allowDoubling: true });
   const result = evaluateCamp({ ...input, placements });
   return {

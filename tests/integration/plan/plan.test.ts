@@ -270,7 +270,7 @@ describe("a proposal", () => {
       "rock-40",
       "tree",
     ]);
-    const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, plan.placements);
+    const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, plan.placements, plan.learned);
     const placements = [...proposePlan(input, { allowFound: true, allowDoubling: true }).placements];
     const saved = await save(ctx, [intent(0, { type: "replace", placements })]);
     expect(saved.outcomes[0]?.outcome).toBe("applied");

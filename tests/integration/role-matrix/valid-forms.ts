@@ -1,5 +1,6 @@
 import type { TwoTrips } from "../../helpers/two-trips";
 import { cordOf, PASSWORD } from "../../helpers/two-trips";
+import { practicePullOf, pullOf } from "../../helpers/pulls";
 import { shelterOf, windyCamp } from "../../helpers/camp-kit";
 import { newId } from "@/lib/domain/ids";
 
@@ -145,6 +146,14 @@ export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Re
       message: "",
       paperSize: "A4",
     },
+    "trips/[tripId]/camps/[campId]/pull-tests#logPullTestAction": { ...camp, ...pullOf(newId()) },
+    "trips/[tripId]/camps/[campId]/pull-tests#updatePullTestAction": { ...camp, ...pullOf(a.pullTestId), version: 1 },
+    "trips/[tripId]/camps/[campId]/pull-tests#chooseElsewhereAction": { ...camp, patch: "main", usesElsewhere: false },
+    "trips/[tripId]/camps/[campId]/pull-tests#startAgainAction": { ...camp, patch: "main" },
+    "pull-tests#logPracticePullAction": practicePullOf(newId()),
+    "pull-tests#updatePracticePullAction": { ...practicePullOf(a.practicePullId), version: 1 },
+    "pull-tests#switchPullTestAction": { pullTestId: a.pullTestId, isOff: true },
+    "pull-tests#deletePullTestAction": { pullTestId: a.pullTestId },
     "trips/[tripId]/post#retryMessageAction": { tripId, messageId: a.messageId },
   };
 }

@@ -66,7 +66,7 @@ describe("the overview", () => {
     const storm = windyCamp({ nights: 2, wind: { kind: "gust", speedMs: 30 } });
     await updateCamp({ ctx, input: { tripId, campId: kit.campId, version, details: storm } });
     const plan = await getCampPlan({ ctx, input: { tripId, campId: kit.campId } });
-    const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, []);
+    const input = toCampInput(plan.camp.details, plan.pitches, plan.tray, [], plan.learned);
     const placements = [...proposePlan(input, { allowFound: false, allowDoubling: false }).placements];
     const change = { type: "replace" as const, placements };
     await savePlanIntents({

@@ -6,7 +6,7 @@ import {
   groundPosterior,
   learnGround,
   logNormalDistribution,
-  readingInfluence,
+  readingInfluences,
   shareBelow,
   WITHIN_SHARE,
   type PullReading,
@@ -123,9 +123,34 @@ describe("the posterior", () => {
 
   it("points out a reading that does not fit, and says how far each one moves the result", () => {
     const own = [exact(0), exact(0.1), exact(-0.1), exact(0.05), exact(-2.2)];
-    const influences = own.map((_, index) => readingInfluence({ tableScatter: 0.5, own, elsewhere: [] }, index));
+    const influences = readingInfluences({ tableScatter: 0.5, own, elsewhere: [] }, [0, 1, 2, 3, 4]);
     expect(influences.map((one) => one.isOutlier)).toEqual([false, false, false, false, true]);
     expect(influences[4]?.pull).toBeLessThan(0.8);
+  });
+
+  it("lets no reading that does not fit hide another, nor cast doubt on those that do", () => {
+    const own = [exact(0), exact(0.06), exact(-0.07), exact(0.02), exact(-2.4), exact(-2.2)];
+    const influences = readingInfluences({ tableScatter: 0.4, own, elsewhere: [] }, [0, 1, 2, 3, 4, 5]);
+    expect(influences.map((one) => one.isOutlier)).toEqual([false, false, false, false, true, true]);
+    // Where readings split into halves, nobody can say which half is right.
+    const split = [exact(0), exact(0.05), exact(-2.2), exact(-2.3)];
+    const both = readingInfluences({ tableScatter: 0.4, own: split, elsewhere: [] }, [0, 1, 2, 3]);
+    expect(both.filter((one) => one.isOutlier).length).toBeLessThanOrEqual(1);
+  });
+
+  it("takes one reading out of the result as if it had never been there", () => {
+    const own = [exact(0.4), held(0.6), exact(-0.2), held(-1)];
+    const elsewhere = [[exact(0.3), held(0.2)]];
+    const influences = readingInfluences({ tableScatter: 0.4, own, elsewhere }, [0, 1, 2, 3]);
+    const { mean } = learnGround({ tableScatter: 0.4, own, elsewhere });
+    own.forEach((reading, index) => {
+      const rest = { tableScatter: 0.4, own: own.filter((_, i) => i !== index), elsewhere };
+      expect(influences[index]?.pull).toBeCloseTo(Math.exp(mean - learnGround(rest).mean), 6);
+      const below = shareBelow(groundPosterior(rest), reading.logRatio, WITHIN_SHARE * 0.4);
+      const chance = reading.kind === "exact" ? 2 * Math.min(below, 1 - below) : 1 - below;
+      expect(influences[index]?.chance).toBeCloseTo(chance, 6);
+    });
+    expect(() => readingInfluences({ tableScatter: 0.4, own, elsewhere }, [4])).toThrow(/no such reading/);
   });
 
   it("refuses a scatter or a ratio that is none", () => {

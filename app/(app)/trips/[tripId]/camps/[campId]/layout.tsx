@@ -24,6 +24,7 @@ export default async function CampLayout({ params, children }: CampLayoutProps) 
             { href: base, label: "Staking plan" },
             { href: `${base}/place`, label: "Ground and wind" },
             { href: `${base}/shelters`, label: "Shelters and sleepers" },
+            { href: `${base}/pull-tests`, label: "Pull tests" },
           ]}
         />
       </div>
