@@ -195,6 +195,13 @@ async function callRoute(name: string, when: string | undefined, caller: Caller)
     }
     case "PUT /api/pull-tests/[pullTestId]/photo":
       return request.put(api, { data: Buffer.from(TINY_PNG) });
+    case "POST /api/trips/[tripId]/kit-search": {
+      // One search a trip: the one before is stopped first.
+      await as.leader.delete(api);
+      const kinds = [{ source: "library", id: "three-blade-200", most: null }];
+      const terms = { foundCampIds: [], spares: 0, workPriceKg: 0, allowDoubling: false };
+      return request.post(api, { data: { settings: { kinds, campIds: [ids.campId], ...terms } } });
+    }
     case "POST /api/trips/[tripId]/camps/[campId]/analyses":
       return request.post(api, { data: { pitchId: ids.pitchId, details: (await readPitch()).details } });
     case "PATCH /api/trips/[tripId]/camps/[campId]/pitches/[pitchId]": {

@@ -6,8 +6,11 @@ import { clearLimits, readLinkToken } from "./outbox";
 import { hashPassword } from "better-auth/crypto";
 import { and, eq, isNull } from "drizzle-orm";
 import { getDb } from "@/db/client";
-import { account, outboxMessage, packItem, session, trip } from "@/db/schema";
+import { account, kitSearch, outboxMessage, packItem, session, trip } from "@/db/schema";
 import { newId } from "@/lib/domain/ids";
+import { builtInAnchor } from "@/lib/calc/tables/anchors";
+import { fingerprint } from "@/lib/services/kit-search/internal";
+import { loadTripState } from "@/lib/services/plan/load-trip-state";
 import { createCamp } from "@/lib/services/camps/create-camp";
 import type { Context } from "@/lib/services/context/context";
 import { createGear } from "@/lib/services/gear/create-gear";
@@ -34,6 +37,35 @@ export const cordOf = (name: string) => ({
   count: 2,
 });
 
+/** A kit that was found and waits to be taken over. */
+async function keepFoundKit(tripId: string, { campId, bladeId }: { campId: string; bladeId: string }) {
+  const settings = {
+    kinds: [{ source: "kit" as const, id: bladeId, most: 6 }],
+    campIds: [campId],
+    foundCampIds: [],
+    spares: 0,
+    workPriceKg: 0,
+    allowDoubling: false,
+  };
+  const { name, spec, massKg } = builtInAnchor("three-blade-200");
+  const outcome = {
+    status: "found" as const,
+    kinds: [{ id: bladeId, name, spec, massKg, count: 5 }],
+    massUnits: 1750,
+    cost: 1750,
+    bound: 1750,
+    gap: 0,
+    spares: 0,
+    camps: [],
+    reasons: [],
+    curve: [],
+    alike: [],
+  };
+  const basis = fingerprint(await loadTripState(getDb(), tripId), settings);
+  const row = { tripId, settings, outcome, basis, foundByName: "Ada", foundAt: new Date() };
+  await getDb().insert(kitSearch).values(row);
+}
+
 /** A trip with one of everything in use, and one of everything to spare. */
 async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
   const kit = await makeCampKit(ctx, tripId);
@@ -59,6 +91,7 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
     ctx,
     input: { tripId, campId: kit.campId, sleepers: [{ personId: sleeperId, pitchId: kit.pitchId }] },
   });
+  await keepFoundKit(tripId, kit);
   const line = { id: null, name: "Mug", isGroupThing: false, massKg: 0.1 };
   await savePackItems({ ctx, input: { tripId, personId: null, items: [line] } });
   const [item] = await getDb()

@@ -5,7 +5,7 @@ import { explainKit, type PieceReason } from "./explain-kit";
 import { explainShortfalls, type ShortCamp } from "./explain-shortfall";
 import { findKit, massOf } from "./find-kit";
 import { supplyAt } from "./match";
-import { readCampForKit, type ReadCamp } from "./read-camp";
+import { readCampForKit, type KitKindChoice, type ReadCamp } from "./read-camp";
 import { inStrongerGust, toProblem, type KitSearch, type Progress } from "./search-input";
 import { stakeCamp } from "./stake-camp";
 import type { ProgramSolver } from "./types";
@@ -29,12 +29,7 @@ export interface CurvePoint {
 
 export interface FoundKit {
   readonly status: "found";
-  readonly kinds: readonly {
-    readonly id: string;
-    readonly name: string;
-    readonly massUnits: number;
-    readonly count: number;
-  }[];
+  readonly kinds: readonly (Omit<KitKindChoice, "most"> & { readonly count: number })[];
   readonly massUnits: number;
   readonly cost: number;
   readonly bound: number;
@@ -98,10 +93,11 @@ export function searchKit(search: KitSearch, solve: ProgramSolver, onProgress: P
   const withZero = [...curve, { extraMs: 0, massUnits, campNames: [] }].sort((a, b) => a.extraMs - b.extraMs);
   return {
     status: "found",
-    kinds: problem.kinds.map(({ id, name, massUnits: each }, at) => ({
+    kinds: search.kinds.map(({ id, name, spec, massKg }, at) => ({
       id,
       name,
-      massUnits: each,
+      spec,
+      massKg,
       count: itemAt(solution.counts, at),
     })),
     massUnits,

@@ -100,6 +100,7 @@ export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Re
     },
     "trips/[tripId]/kit#countKitItemAction": { tripId, kitItemId: a.cordId, version: 1, count: 5 },
     "trips/[tripId]/kit#deleteKitItemAction": { tripId, kitItemId: a.bladeId, confirmed: true },
+    "trips/[tripId]/kit/find#acceptKitAction": { tripId },
     "trips/[tripId]/people#createPersonAction": {
       tripId,
       name: "Bo Byr",

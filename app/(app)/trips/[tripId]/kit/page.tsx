@@ -22,9 +22,12 @@ export default async function KitPage({ params }: { readonly params: Promise<{ t
   const base = `/trips/${trip.id}/kit`;
   const mayEdit = can("kit.edit");
   const addButton = mayEdit && (
-    <LinkButton href={`${base}/new`} look="primary">
-      Add to the kit
-    </LinkButton>
+    <div className="flex flex-wrap gap-3">
+      <LinkButton href={`${base}/new`} look="primary">
+        Add to the kit
+      </LinkButton>
+      <LinkButton href={`${base}/find`}>Find a kit for the whole trip</LinkButton>
+    </div>
   );
   if (kit.length === 0) {
     return (
