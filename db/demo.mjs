@@ -17,14 +17,15 @@ requireNode();
 ensurePackages(root);
 mkdirSync(data, { recursive: true });
 
-/** Made once and kept: a new one would sign everybody out. */
-function readSecret() {
+/** Made once and kept: new ones would sign everybody out, and leave people's own details unreadable. */
+function readSecret(name, make) {
+  if (process.env[name]) return process.env[name];
   const file = path.join(data, "demo.env");
-  if (process.env.AUTH_SECRET) return process.env.AUTH_SECRET;
-  const known = existsSync(file) ? /^AUTH_SECRET=(\S{32,})$/m.exec(readFileSync(file, "utf8"))?.[1] : undefined;
+  const text = existsSync(file) ? readFileSync(file, "utf8") : "";
+  const known = new RegExp(`^${name}=(\\S{32,})$`, "m").exec(text)?.[1];
   if (known) return known;
-  const secret = randomBytes(48).toString("base64url");
-  writeFileSync(file, `AUTH_SECRET=${secret}\n`, { mode: 0o600 });
+  const secret = make();
+  writeFileSync(file, `${text}${name}=${secret}\n`, { mode: 0o600 });
   return secret;
 }
 
@@ -35,7 +36,8 @@ const env = {
   PORT: port,
   APP_URL: process.env.APP_URL || `http://localhost:${port}`,
   DATABASE_URL: databaseUrl,
-  AUTH_SECRET: readSecret(),
+  AUTH_SECRET: readSecret("AUTH_SECRET", () => randomBytes(48).toString("base64url")),
+  DETAILS_KEYS: readSecret("DETAILS_KEYS", () => `k1:${randomBytes(32).toString("base64")}`),
   LOG_LEVEL: process.env.LOG_LEVEL || "warn",
 };
 

@@ -25,6 +25,27 @@ const forecastUrl = z
     "has to begin with https://",
   );
 
+const KEY_BYTES = 32;
+
+/** "id:base64" of 32 random bytes each, separated by commas; the first seals, all open. */
+const detailsKeys = z
+  .string()
+  .transform((text) => text.split(",").map((part) => part.trim()))
+  .refine(
+    (parts) => parts.every((part) => /^[a-z0-9]{1,16}:[A-Za-z0-9+/_-]{43}=?$/.test(part)),
+    "has to look like k1:BASE64 with 32 random bytes; openssl rand -base64 32 makes them",
+  )
+  .transform((parts) =>
+    parts.map((part) => {
+      const [id = "", key = ""] = part.split(":");
+      return { id, key: Buffer.from(key, "base64") };
+    }),
+  )
+  .refine((keys) => keys.every(({ key }) => key.length === KEY_BYTES && new Set(key).size >= 16), {
+    message: "has to be random: openssl rand -base64 32",
+  })
+  .refine((keys) => new Set(keys.map(({ id }) => id)).size === keys.length, "has two keys with the same name");
+
 function isDemo(): boolean {
   return process.env.LEESTEAD_DEMO === "1";
 }
@@ -53,6 +74,7 @@ const FIELDS = {
       .min(32, "has to have at least 32 characters")
       .refine((text) => new Set(text).size >= 10, "has to be random: openssl rand -base64 48"),
   },
+  detailsKeys: { key: "DETAILS_KEYS", schema: detailsKeys },
   smtpUrl: { key: "SMTP_URL", schema: smtpUrl.optional() },
   mailFrom: {
     key: "MAIL_FROM",

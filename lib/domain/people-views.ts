@@ -1,6 +1,9 @@
 /** What the services hand to the screens about answers, own details, the emergency plan and messages. */
 import type { AnswerValue } from "./answer/schema";
+import type { PersonalDetails } from "./details/schema";
+import type { OverdueStep } from "./emergency/schema";
 import type { Role } from "./permissions/permissions";
+import type { Contact } from "./trip/schema";
 
 export interface AnswerView {
   readonly value: AnswerValue;
@@ -37,4 +40,47 @@ export interface OwnAnswerView {
   readonly isFull: boolean;
   /** Their place on the waiting list, from 1. */
   readonly waitingPlace: number | null;
+}
+
+export interface OwnDetailsView {
+  readonly details: PersonalDetails;
+  readonly version: number;
+  /** What one agrees to by saving now. */
+  readonly consentText: string;
+  /** What one has agreed to, and when. */
+  readonly consent: { readonly text: string; readonly at: string } | null;
+}
+
+export interface ContactSheetView {
+  readonly people: readonly {
+    readonly id: string;
+    readonly name: string;
+    readonly role: Role;
+    readonly email: string;
+    /** Null: has written nothing; "unreadable": the key is not there. */
+    readonly details: PersonalDetails | null | "unreadable";
+  }[];
+  readonly contacts: readonly Contact[];
+  readonly meetingPoints: string;
+  readonly wayOut: string;
+  readonly groupPhone: string;
+}
+
+export interface EmergencyPlanView {
+  readonly meetingPoints: string;
+  readonly wayOut: string;
+  readonly groupPhone: string;
+  /** In the trip's time zone; empty while not set. */
+  readonly dueBackDay: string;
+  readonly dueBackTime: string;
+  readonly outsideName: string;
+  readonly outsideEmail: string;
+  readonly outsidePhone: string;
+  readonly steps: readonly (OverdueStep & { readonly at: string | null })[];
+  readonly version: number;
+  readonly sentVersion: number | null;
+  readonly sentAt: string | null;
+  readonly backAt: string | null;
+  /** What has to be there before it can be sent. */
+  readonly missing: readonly string[];
 }

@@ -3,7 +3,7 @@ import type { CampResult, Gap, Placement, ShelterAnalysis, ShelterSpec, TrayAnch
 import type { CampDetails } from "./camp/schema";
 import type { GearDetails } from "./gear/schema";
 import type { KitItemDetails } from "./kit/schema";
-import type { AnswerView } from "./people-views";
+import type { AnswerView, ContactSheetView } from "./people-views";
 import type { Role } from "./permissions/permissions";
 import type { MessageState } from "./post/schema";
 import type { LearnedGrounds } from "./pull-test/learned-grounds";
@@ -322,6 +322,7 @@ export type PaperDocument =
       readonly camp: PaperCamp;
       readonly pitchIds: readonly string[];
     }
+  | { readonly kind: "contact-sheet"; readonly header: PaperHeader; readonly sheet: ContactSheetView }
   | { readonly kind: "pack-list"; readonly header: PaperHeader; readonly list: PackListView }
   | {
       readonly kind: "booklet";

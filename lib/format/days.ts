@@ -63,3 +63,9 @@ export function instantOf(day: string, minuteOfDay: number, timeZone: string): D
   const local = new TZDate(year, month - 1, date, Math.floor(minuteOfDay / 60), minuteOfDay % 60, timeZone);
   return new Date(local.getTime());
 }
+
+/** "18:30" as minutes after midnight. */
+export function minuteOfDay(time: string): number {
+  const [hour = 0, minute = 0] = time.split(":").map(Number);
+  return hour * 60 + minute;
+}

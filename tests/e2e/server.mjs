@@ -18,6 +18,7 @@ const env = {
   APP_URL: `http://localhost:${port}`,
   PORT: port,
   AUTH_SECRET: "only-for-the-browser-tests-0123456789-abcdefghij",
+  DETAILS_KEYS: "t1:C4tMvZ0l7nQ2xYk9sWbE5uRj8hGfD1aPoI3qLwSeXzA=",
   LEESTEAD_DEMO: "1",
   LOG_LEVEL: "warn",
 };

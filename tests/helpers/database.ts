@@ -51,6 +51,7 @@ copyFileSync(await ensureBaseFile(), databaseFile);
 process.env.DATABASE_URL = `file:${databaseFile}`;
 process.env.APP_URL = "http://leestead.test";
 process.env.AUTH_SECRET = "tests-only-3f9c2b7d1e8a40596b7c8d9e0f1a2b3c";
+process.env.DETAILS_KEYS = "t1:C4tMvZ0l7nQ2xYk9sWbE5uRj8hGfD1aPoI3qLwSeXzA=";
 process.env.LOG_LEVEL = "silent";
 process.env.LEESTEAD_DEMO = "0";
 delete process.env.SMTP_URL;

@@ -13,6 +13,9 @@ import { fingerprint } from "@/lib/services/kit-search/internal";
 import { loadTripState } from "@/lib/services/plan/load-trip-state";
 import { createCamp } from "@/lib/services/camps/create-camp";
 import type { Context } from "@/lib/services/context/context";
+import { saveOwnDetails } from "@/lib/services/details/save-own-details";
+import { saveEmergencyPlan } from "@/lib/services/emergency/save-emergency-plan";
+import { sendEmergencyPlan } from "@/lib/services/emergency/send-emergency-plan";
 import { createGear } from "@/lib/services/gear/create-gear";
 import { createKitItem } from "@/lib/services/kit/create-kit-item";
 import { savePackItems } from "@/lib/services/pack/save-pack-items";
@@ -164,6 +167,30 @@ async function givePassword(who: TestUser): Promise<void> {
     .values({ ...row, id: newId(), password: await passwordHash });
 }
 
+/** Details of each, and an emergency plan that somebody outside has. */
+async function writeAboutPeople(tripId: string, people: readonly TestUser[], leader: TestUser): Promise<void> {
+  for (const { ctx } of people) {
+    await saveOwnDetails({
+      ctx,
+      input: { tripId, version: 0, phone: "+99 000 11 22", health: "Asthma.", hasConsent: true },
+    });
+  }
+  const { ctx } = leader;
+  await saveEmergencyPlan({
+    ctx,
+    input: {
+      tripId,
+      version: 0,
+      dueBackDay: "2027-06-10",
+      dueBackTime: "17:00",
+      outsideName: "Ines Marlow",
+      outsideEmail: "ines@example.test",
+      steps: [{ afterMinutes: 60, who: "Hut", phone: "", action: "Ask whether they came by." }],
+    },
+  });
+  await sendEmergencyPlan({ ctx, input: { tripId, requestId: newId() } });
+}
+
 /** Two trips with leaders of their own, everybody signed in with a real session, and open links of each kind. */
 export async function makeTwoTrips() {
   const cast = await makeCast();
@@ -188,6 +215,8 @@ export async function makeTwoTrips() {
     tripId: cast.otherTripId,
     ...(await fillTrip(cast.otherLeader.ctx, cast.otherTripId, companionId)),
   };
+
+  await writeAboutPeople(a.tripId, [users.leader, users.coLeader, users.participant], users.leader);
 
   const browsers = {
     nobody: new Browser(),

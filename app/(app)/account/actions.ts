@@ -6,11 +6,13 @@ import { callAuth } from "@/lib/auth/call-auth";
 import {
   changePasswordFormSchema,
   deleteAccountFormSchema,
+  deleteAccountWithoutPasswordSchema,
   nameFormSchema,
   sessionRefInput,
 } from "@/lib/domain/account/schema";
 import { preferencesSchema } from "@/lib/domain/preferences";
 import { action } from "@/lib/http/action";
+import { hasPassword } from "@/lib/services/account/has-password";
 import { endSession } from "@/lib/services/account/end-session";
 import { savePreferences } from "@/lib/services/preferences/save-preferences";
 
@@ -43,7 +45,8 @@ export const signOutAction = action(async () => {
   redirect("/sign-in?done=signed-out");
 });
 
-export const deleteAccountAction = action(async ({ input }) => {
-  await callAuth("/delete-user", { body: deleteAccountFormSchema.parse(input) });
+export const deleteAccountAction = action(async ({ ctx, input }) => {
+  const schema = (await hasPassword({ ctx })) ? deleteAccountFormSchema : deleteAccountWithoutPasswordSchema;
+  await callAuth("/delete-user", { body: schema.parse(input) });
   redirect("/sign-in?done=deleted");
 });

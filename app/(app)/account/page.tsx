@@ -1,10 +1,13 @@
 import type { Metadata } from "next";
+import Link from "next/link";
 import { ActionForm, SubmitButton } from "@/components/ui/action-form";
+import { buttonClass } from "@/components/ui/button";
 import { SelectField, TextField } from "@/components/ui/fields";
 import { PageHeading, Section } from "@/components/ui/layout";
 import { getSessionId, requireContext } from "@/lib/auth/session";
 import { PAPER_SIZES } from "@/lib/domain/paper/schema";
 import { FORCE_UNITS, LENGTH_UNITS, SPEED_UNITS } from "@/lib/domain/preferences";
+import { hasPassword } from "@/lib/services/account/has-password";
 import { listSessions } from "@/lib/services/account/list-sessions";
 import { getPreferences } from "@/lib/services/preferences/get-preferences";
 import { PlainPage } from "../_shell/plain-page";
@@ -21,6 +24,7 @@ export default async function AccountPage() {
   const ctx = await requireContext();
   const preferences = await getPreferences({ ctx });
   const sessions = await listSessions({ ctx });
+  const isByPassword = await hasPassword({ ctx });
   return (
     <PlainPage>
       <PageHeading title="Account and units" lead={ctx.actor.email}>
@@ -66,31 +70,48 @@ export default async function AccountPage() {
         </ActionForm>
       </Section>
       <Section title="Password">
-        <ActionForm action={changePasswordAction} className="flex max-w-[26rem] flex-col gap-4">
-          <input type="hidden" name="username" value={ctx.actor.email} autoComplete="username" />
-          <TextField
-            label="Password now"
-            name="currentPassword"
-            type="password"
-            autoComplete="current-password"
-            required
-          />
-          <TextField
-            label="New password"
-            name="newPassword"
-            type="password"
-            autoComplete="new-password"
-            required
-            hint="At least 8 characters, better 15. Every other device is signed out."
-          />
-          <SubmitButton>Change the password</SubmitButton>
-        </ActionForm>
+        {isByPassword ? (
+          <ActionForm action={changePasswordAction} className="flex max-w-[26rem] flex-col gap-4">
+            <input type="hidden" name="username" value={ctx.actor.email} autoComplete="username" />
+            <TextField
+              label="Password now"
+              name="currentPassword"
+              type="password"
+              autoComplete="current-password"
+              required
+            />
+            <TextField
+              label="New password"
+              name="newPassword"
+              type="password"
+              autoComplete="new-password"
+              required
+              hint="At least 8 characters, better 15. Every other device is signed out."
+            />
+            <SubmitButton>Change the password</SubmitButton>
+          </ActionForm>
+        ) : (
+          <p className="max-w-[46rem] text-15">
+            You have none: you sign in by links to {ctx.actor.email}.{" "}
+            <Link href="/forgot-password" className="text-spruce underline">
+              Choose one
+            </Link>
+          </p>
+        )}
       </Section>
       <Section title="Where you are signed in">
         <SessionList sessions={sessions} currentId={await getSessionId()} />
       </Section>
+      <Section
+        title="Your data"
+        lead="Everything that is kept about you, your trips' own details included, as one file (JSON)."
+      >
+        <a href="/api/account/export" className={buttonClass("outline")}>
+          Save my data
+        </a>
+      </Section>
       <Section title="Delete the account">
-        <DeleteAccount />
+        <DeleteAccount hasPassword={isByPassword} />
       </Section>
     </PlainPage>
   );

@@ -6,6 +6,7 @@ import type { PageFrameProps } from "../sections/page-frame";
 import { printable } from "../glyphs";
 import type { Sheet } from "../theme";
 import { bookletPages } from "./booklet";
+import { contactSheetPages } from "./contact-sheet";
 import { fieldCardPages } from "./field-card";
 import { packListPages } from "./pack-list";
 import { pitchCardPages } from "./pitch-card";
@@ -18,6 +19,8 @@ function pagesOf(paper: PaperDocument, sheet: Sheet, preferences: Preferences): 
       return paper.camp.pitches
         .filter((pitch) => paper.pitchIds.includes(pitch.id))
         .flatMap((pitch) => pitchCardPages({ ...paper, sheet, preferences }, pitch));
+    case "contact-sheet":
+      return contactSheetPages(paper.header, paper.sheet, sheet);
     case "pack-list":
       return packListPages(paper.header, paper.list, sheet);
     case "booklet":
@@ -29,6 +32,7 @@ const NAMES = {
   "field-card": "field card",
   "pitch-card": "pitch card",
   "pack-list": "pack list",
+  "contact-sheet": "contact sheet",
   booklet: "booklet",
 } as const;
 
@@ -36,7 +40,7 @@ function titleOf(paper: PaperDocument): string {
   const what =
     paper.kind === "pack-list"
       ? paper.list.person.name
-      : paper.kind === "booklet"
+      : paper.kind === "booklet" || paper.kind === "contact-sheet"
         ? null
         : paper.camp.camp.details.name;
   return [paper.header.tripName, what, NAMES[paper.kind]].filter(Boolean).join(": ");

@@ -1,6 +1,6 @@
 import { and, eq, inArray, ne } from "drizzle-orm";
 import { withTransaction } from "@/db/client";
-import { person, trip } from "@/db/schema";
+import { person, personalDetail, trip } from "@/db/schema";
 import { AppError } from "@/lib/errors";
 
 /**
@@ -9,6 +9,8 @@ import { AppError } from "@/lib/errors";
  */
 export async function prepareAccountDeletion(userId: string): Promise<void> {
   await withTransaction(async (tx) => {
+    const own = tx.select({ id: person.id }).from(person).where(eq(person.userId, userId));
+    await tx.delete(personalDetail).where(inArray(personalDetail.personId, own));
     const led = await tx
       .select({ tripId: person.tripId, name: trip.name })
       .from(person)

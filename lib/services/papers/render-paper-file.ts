@@ -18,6 +18,8 @@ export function namePaperFile(paper: PaperDocument): string {
       const names = paper.camp.pitches.filter((pitch) => paper.pitchIds.includes(pitch.id)).map((pitch) => pitch.name);
       return `${trip}, ${paper.camp.camp.details.name}, ${names.join(", ")}.pdf`;
     }
+    case "contact-sheet":
+      return `${trip}, contact sheet.pdf`;
     case "pack-list":
       return `${trip}, pack list, ${paper.list.person.name}.pdf`;
     case "booklet":

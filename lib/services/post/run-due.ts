@@ -1,8 +1,13 @@
 import { log } from "@/lib/log";
 import { remindDue } from "../answers/remind";
+import { deleteOldDetails, resealDetails } from "../details/tend-details";
 
 /** What happens by itself when its time has come. Each is safe to run again, and in two processes at once. */
-const JOBS = { reminders: remindDue } as const satisfies Record<string, (now: Date) => Promise<number>>;
+const JOBS = {
+  reminders: remindDue,
+  oldDetails: deleteOldDetails,
+  olderKeys: resealDetails,
+} as const satisfies Record<string, (now: Date) => Promise<number>>;
 
 /** One that fails keeps none of the others. */
 export async function runDue(now = new Date()): Promise<void> {

@@ -5,6 +5,7 @@ const GOOD = {
   APP_URL: "https://camp.example.test/ignored/path",
   AUTH_SECRET: "0123456789abcdefghijklmnopqrstuvwxyz",
   DATABASE_URL: "file:data/x.db",
+  DETAILS_KEYS: "t1:C4tMvZ0l7nQ2xYk9sWbE5uRj8hGfD1aPoI3qLwSeXzA=",
 } as const;
 
 const KEYS = [
@@ -47,6 +48,12 @@ describe("settings", () => {
     ["AUTH_SECRET", "   "],
     ["AUTH_SECRET", "short"],
     ["AUTH_SECRET", "a".repeat(64)],
+    ["DETAILS_KEYS", ""],
+    ["DETAILS_KEYS", "C4tMvZ0l7nQ2xYk9sWbE5uRj8hGfD1aPoI3qLwSeXzA="],
+    ["DETAILS_KEYS", "k1:c2hvcnQ="],
+    ["DETAILS_KEYS", `k1:${"A".repeat(43)}=`],
+    ["DETAILS_KEYS", "k1:C4tMvZ0l7nQ2xYk9sWbE5uRj8hGfD1aPoI3qLwSeXzA=,k1:D4tMvZ0l7nQ2xYk9sWbE5uRj8hGfD1aPoI3qLwSeXzA="],
+    ["DETAILS_KEYS", "k1:C4tMvZ0l7nQ2xYk9sWbE5uRj8hGfD1aPoI3qLwSeXzA=,"],
     ["APP_URL", ""],
     ["APP_URL", "camp.example.test"],
     ["APP_URL", "javascript:alert(1)"],

@@ -53,6 +53,8 @@ export default async function PeoplePage({ params }: { readonly params: Promise<
             <SubmitButton look="outline">Remind who has not settled</SubmitButton>
           </ActionForm>
         )}
+        <LinkButton href={`/trips/${trip.id}/people/contacts`}>Contact sheet</LinkButton>
+        <LinkButton href={`/trips/${trip.id}/emergency`}>Emergency plan</LinkButton>
         {can("pack.edit") && (
           <LinkButton href={`/trips/${trip.id}/people/packing`}>What they bring and carry</LinkButton>
         )}
