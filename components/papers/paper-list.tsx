@@ -74,15 +74,31 @@ export function PaperList({
         </ul>
       </div>
       <div>
-        <h3 className="mb-1 text-15 font-bold">Pack lists</h3>
-        <ul className="grid gap-x-6 border-t border-hair pt-1 sm:grid-cols-2 lg:grid-cols-3">
+        <h3 className="mb-1 text-15 font-bold">Each person’s pages</h3>
+        <ul>
           {people.map((person) => (
-            <li key={person.id}>
-              <PaperLink
-                href={paperHref(tripId, { paper: "pack-list", personId: person.id }, size)}
-                label={person.name}
-                of="pack list"
-              />
+            <li
+              key={person.id}
+              className="grid gap-x-6 gap-y-1 border-t border-hair py-2 sm:grid-cols-[12rem_minmax(0,1fr)]"
+            >
+              <p className="py-2.5 font-semibold">{person.name}</p>
+              <div className="flex flex-wrap gap-x-5">
+                <PaperLink
+                  href={paperHref(tripId, { paper: "pitch-and-pack", personId: person.id, fold: "flat" }, size)}
+                  label="Pitch and pack"
+                  of={person.name}
+                />
+                <PaperLink
+                  href={paperHref(tripId, { paper: "pitch-and-pack", personId: person.id, fold: "pocket" }, size)}
+                  label="To fold"
+                  of={`pitch and pack, ${person.name}`}
+                />
+                <PaperLink
+                  href={paperHref(tripId, { paper: "pack-list", personId: person.id }, size)}
+                  label="Pack list"
+                  of={person.name}
+                />
+              </div>
             </li>
           ))}
         </ul>

@@ -4,6 +4,9 @@ import type { CampDetails } from "./camp/schema";
 import type { GearDetails } from "./gear/schema";
 import type { KitItemDetails } from "./kit/schema";
 import type { AnswerView, ContactSheetView } from "./people-views";
+import type { OwnPages } from "./own-pages/own-pages";
+import type { OwnCard } from "./own-pages/views";
+import type { PaperFold } from "./paper/schema";
 import type { Role } from "./permissions/permissions";
 import type { MessageState } from "./post/schema";
 import type { LearnedGrounds } from "./pull-test/learned-grounds";
@@ -324,6 +327,16 @@ export type PaperDocument =
     }
   | { readonly kind: "contact-sheet"; readonly header: PaperHeader; readonly sheet: ContactSheetView }
   | { readonly kind: "pack-list"; readonly header: PaperHeader; readonly list: PackListView }
+  | {
+      readonly kind: "pitch-and-pack";
+      readonly header: PaperHeader;
+      readonly contacts: readonly Contact[];
+      readonly fold: PaperFold;
+      readonly list: PackListView;
+      readonly cards: readonly OwnCard[];
+      /** What stands on it, to tell later whether it is old. */
+      readonly content: OwnPages;
+    }
   | {
       readonly kind: "booklet";
       readonly header: PaperHeader;

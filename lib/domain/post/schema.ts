@@ -8,6 +8,7 @@ export type MessageState = (typeof MESSAGE_STATES)[number];
 
 /** What a message can carry: each person's own pages, every camp's field card, or the whole booklet. */
 export const PIECES = [
+  { key: "pitch-and-pack", name: "Own pages, pitch and pack in one file" },
   { key: "pack-list", name: "Own pack list" },
   { key: "pitch-cards", name: "Pitch cards of their shelters" },
   { key: "field-cards", name: "Field cards of all camps" },

@@ -1,5 +1,5 @@
 import type { ReactElement } from "react";
-import { Path, Svg, View } from "@react-pdf/renderer";
+import { View } from "@react-pdf/renderer";
 import type { PackLine, PackListView, PaperHeader } from "@/lib/domain/views";
 import { formatDay } from "@/lib/format/days";
 import { formatMass } from "@/lib/format/masses";
@@ -14,9 +14,10 @@ import {
   type Heading,
   type PageFrameProps,
 } from "../sections/page-frame";
-import { GREY, INK, TYPE, type Sheet } from "../theme";
+import { TICK_BOX, TickBox } from "../sections/tick-box";
+import { GREY, TYPE, type Sheet } from "../theme";
 
-const BOX = 11;
+const BOX = TICK_BOX;
 
 /** One person's list: what they bring, what they carry for the group, where and with whom they sleep. */
 export function packListPages(header: PaperHeader, list: PackListView, sheet: Sheet): ReactElement<PageFrameProps>[] {
@@ -84,15 +85,6 @@ function section(
   const body =
     rows.length > 0 ? rows : [stack([spacer(4), textBlock(empty, sheet.inner, { size: TYPE.body, color: GREY })])];
   return [{ ...head, keepsWithNext: true }, ...body];
-}
-
-function TickBox({ isTicked }: { isTicked: boolean }) {
-  return (
-    <Svg width={BOX} height={BOX} viewBox="0 0 11 11">
-      <Path d="M0.6 0.6H10.4V10.4H0.6Z" fill="none" stroke={INK} strokeWidth={1.1} />
-      {isTicked ? <Path d="M2.4 5.8L4.6 8.2L8.8 2.8" fill="none" stroke={INK} strokeWidth={1.6} /> : null}
-    </Svg>
-  );
 }
 
 function tickLine(line: PackLine, width: number): Block {

@@ -1,17 +1,17 @@
-import { cloneElement, type ReactElement } from "react";
+import { cloneElement } from "react";
 import { Document } from "@react-pdf/renderer";
 import type { Preferences } from "@/lib/domain/preferences";
 import type { PaperDocument } from "@/lib/domain/views";
-import type { PageFrameProps } from "../sections/page-frame";
 import { printable } from "../glyphs";
 import type { Sheet } from "../theme";
 import { bookletPages } from "./booklet";
 import { contactSheetPages } from "./contact-sheet";
 import { fieldCardPages } from "./field-card";
 import { packListPages } from "./pack-list";
+import { pitchAndPackPages, type NumberedPage } from "./pitch-and-pack";
 import { pitchCardPages } from "./pitch-card";
 
-function pagesOf(paper: PaperDocument, sheet: Sheet, preferences: Preferences): ReactElement<PageFrameProps>[] {
+function pagesOf(paper: PaperDocument, sheet: Sheet, preferences: Preferences): NumberedPage[] {
   switch (paper.kind) {
     case "field-card":
       return fieldCardPages({ ...paper, sheet, preferences });
@@ -23,6 +23,8 @@ function pagesOf(paper: PaperDocument, sheet: Sheet, preferences: Preferences): 
       return contactSheetPages(paper.header, paper.sheet, sheet);
     case "pack-list":
       return packListPages(paper.header, paper.list, sheet);
+    case "pitch-and-pack":
+      return pitchAndPackPages(paper, sheet);
     case "booklet":
       return bookletPages(paper, sheet, preferences);
   }
@@ -33,12 +35,13 @@ const NAMES = {
   "pitch-card": "pitch card",
   "pack-list": "pack list",
   "contact-sheet": "contact sheet",
+  "pitch-and-pack": "pitch and pack",
   booklet: "booklet",
 } as const;
 
 function titleOf(paper: PaperDocument): string {
   const what =
-    paper.kind === "pack-list"
+    paper.kind === "pack-list" || paper.kind === "pitch-and-pack"
       ? paper.list.person.name
       : paper.kind === "booklet" || paper.kind === "contact-sheet"
         ? null

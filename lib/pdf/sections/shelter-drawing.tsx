@@ -20,7 +20,7 @@ export interface DrawnTieOut {
 }
 
 export interface ShelterDrawingInput {
-  readonly pitch: PitchView;
+  readonly pitch: Pick<PitchView, "spec"> & { readonly details: Pick<PitchView["details"], "headingDeg"> };
   /** By tie-out id. */
   readonly tieOuts: ReadonlyMap<string, DrawnTieOut>;
   readonly wind: { readonly fromDeg: number | null; readonly toDeg: number | null };

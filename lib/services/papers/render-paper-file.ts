@@ -1,9 +1,11 @@
 import type { z } from "zod";
+import { withTransaction } from "@/db/client";
 import type { paperSizeSchema } from "@/lib/domain/paper/schema";
 import { type Paper } from "@/lib/domain/paper/schema";
 import type { PaperDocument } from "@/lib/domain/views";
 import type { Context } from "@/lib/services/context/context";
 import { renderPdfInWorker } from "@/lib/workers/render-pdf-in-worker";
+import { recordCopy } from "../own-pages/copies";
 import { getPreferences } from "../preferences/get-preferences";
 import { consumeQuota } from "../quota/consume-quota";
 import { getPaperDocument } from "./get-paper-document";
@@ -22,6 +24,8 @@ export function namePaperFile(paper: PaperDocument): string {
       return `${trip}, contact sheet.pdf`;
     case "pack-list":
       return `${trip}, pack list, ${paper.list.person.name}.pdf`;
+    case "pitch-and-pack":
+      return `${trip}, pitch and pack, ${paper.list.person.name}.pdf`;
     case "booklet":
       return `${trip}, booklet.pdf`;
   }
@@ -40,5 +44,10 @@ export async function renderPaperFile({
   const preferences = await getPreferences({ ctx });
   const size = input.size ?? preferences.paperSize;
   const content = await renderPdfInWorker({ papers: [paper], options: { size, preferences } });
+  if (paper.kind === "pitch-and-pack") {
+    const { list, header } = paper;
+    const copy = { personId: list.person.id, version: header.version, content: paper.content };
+    await withTransaction((tx) => recordCopy(tx, ctx, { tripId: input.tripId, way: "printed", ...copy }));
+  }
   return { fileName: namePaperFile(paper), content };
 }

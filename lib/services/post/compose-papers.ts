@@ -42,6 +42,11 @@ export function composeBundles(
 ): PaperBundle[] {
   const own = places.pitches.filter((one) => one.personId === person.id);
   const bundles: Readonly<Record<PieceKey, PaperBundle>> = {
+    "pitch-and-pack": {
+      key: `pitch-and-pack ${person.id}`,
+      fileName: `Pitch and pack ${person.name}.pdf`,
+      papers: [{ kind: "pitch-and-pack", personId: person.id, fold: "flat" }],
+    },
     "pack-list": {
       key: `pack-list ${person.id}`,
       fileName: `Pack list ${person.name}.pdf`,

@@ -10,6 +10,7 @@ import { renderPapersMail } from "@/lib/email/templates/trip-mails";
 import { env } from "@/lib/env";
 import { AppError } from "@/lib/errors";
 import type { Context } from "@/lib/services/context/context";
+import { recordCopy, type NewCopy } from "../own-pages/copies";
 import { consumeQuota } from "../quota/consume-quota";
 import { loadTripRow, recordChange, type Reader } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
@@ -79,11 +80,16 @@ export async function sendPapers({
   const places = await loadTripPlaces(tripId);
   const { getDocument, render } = source ?? (await loadPaperSource(ctx));
   const rendered = new Map<string, MailFile>();
+  const copies: Omit<NewCopy, "tripId" | "way">[] = [];
   async function renderOnce(bundle: PaperBundle): Promise<MailFile> {
     const known = rendered.get(bundle.key);
     if (known) return known;
     const documents: PaperDocument[] = [];
     for (const paper of bundle.papers) documents.push(await getDocument({ ctx, input: { tripId, paper } }));
+    for (const one of documents) {
+      if (one.kind !== "pitch-and-pack") continue;
+      copies.push({ personId: one.list.person.id, version: one.header.version, content: one.content });
+    }
     const content = await render(documents, { size: paperSize });
     const file = { fileName: bundle.fileName, contentType: "application/pdf", content };
     rendered.set(bundle.key, file);
@@ -128,6 +134,7 @@ export async function sendPapers({
         files,
       });
     }
+    for (const copy of copies) await recordCopy(tx, ctx, { ...copy, tripId, way: "sent" });
     await recordChange(tx, ctx, {
       tripId,
       action: "create",

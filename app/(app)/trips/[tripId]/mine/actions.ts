@@ -3,9 +3,16 @@
 import { revalidatePath } from "next/cache";
 import { packTickInput } from "@/lib/domain/pack/schema";
 import { action } from "@/lib/http/action";
+import { markOwnPagesRead, markOwnPagesReadInput } from "@/lib/services/own-pages/mark-own-pages-read";
 import { tickPackItem } from "@/lib/services/pack/tick-pack-item";
 
 export const tickPackItemAction = action(async ({ ctx, input }) => {
   await tickPackItem({ ctx, input: packTickInput.parse(input) });
   revalidatePath(`/trips/${String(input.tripId)}/mine`);
+});
+
+export const markOwnPagesReadAction = action(async ({ ctx, input }) => {
+  await markOwnPagesRead({ ctx, input: markOwnPagesReadInput.parse(input) });
+  revalidatePath(`/trips/${String(input.tripId)}`, "layout");
+  return { message: "Noted. What changes from here on is shown on this page." };
 });

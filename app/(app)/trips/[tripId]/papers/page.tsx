@@ -1,4 +1,5 @@
 import { Suspense } from "react";
+import { OwnPagesStates } from "@/components/own-pages/own-pages-states";
 import { PaperList } from "@/components/papers/paper-list";
 import { SendForm } from "@/components/papers/send-form";
 import { WhoHasWhat } from "@/components/papers/who-has-what";
@@ -14,6 +15,7 @@ import { renderPapersMail } from "@/lib/email/templates/trip-mails";
 import { formatDayShort } from "@/lib/format/days";
 import type { Context } from "@/lib/services/context/context";
 import { listCampSummaries } from "@/lib/services/camps/list-camp-summaries";
+import { listOwnPagesStates } from "@/lib/services/own-pages/list-own-pages-states";
 import { listPeople } from "@/lib/services/people/list-people";
 import { listMessages } from "@/lib/services/post/list-messages";
 import { getSleepingPlan } from "@/lib/services/sleepers/get-sleeping-plan";
@@ -36,9 +38,10 @@ export default async function PapersPage({ params }: { readonly params: Promise<
 async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView; preferences: Preferences }) {
   const input = { tripId: trip.id };
   const maySend = isAllowed(trip.role, "post.send");
-  const [camps, people, messages] = await Promise.all([
+  const [camps, people, states, messages] = await Promise.all([
     listCampSummaries({ ctx, input }),
     listPeople({ ctx, input }),
+    listOwnPagesStates({ ctx, input }),
     isAllowed(trip.role, "post.read") ? listMessages({ ctx, input }) : [],
   ]);
   const sleeping = await Promise.all(
@@ -64,6 +67,9 @@ async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView
           }))}
           people={people.map(({ id, name }) => ({ id, name }))}
         />
+      </Section>
+      <Section title="Each person’s copy" lead="What is printed or sent, and whether it still says the right thing.">
+        <OwnPagesStates states={states} version={trip.paperVersion} timeZone={trip.timeZone} />
       </Section>
       {maySend && (
         <div id="send" className="scroll-mt-4">
