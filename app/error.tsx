@@ -5,10 +5,10 @@ import { EmptyState } from "@/components/ui/layout";
 
 export default function ErrorPage({
   error,
-  reset,
+  retry,
 }: {
   readonly error: Error & { digest?: string };
-  reset: () => void;
+  retry: () => void;
 }) {
   return (
     <main id="main" className="px-6 py-16">
@@ -18,7 +18,7 @@ export default function ErrorPage({
           What you saved is safe. Try again; if it stays like this, tell whoever runs this Leestead
           {error.digest ? ` and give them this number: ${error.digest}` : ""}.
         </p>
-        <Button onClick={reset}>Try again</Button>
+        <Button onClick={retry}>Try again</Button>
       </EmptyState>
     </main>
   );

@@ -6,10 +6,10 @@ import { EmptyState } from "@/components/ui/layout";
 
 export default function GlobalError({
   error,
-  reset,
+  retry,
 }: {
   readonly error: Error & { digest?: string };
-  reset: () => void;
+  retry: () => void;
 }) {
   return (
     <html lang="en">
@@ -18,7 +18,7 @@ export default function GlobalError({
           <h1 className="sr-only">Something went wrong</h1>
           <EmptyState title="Leestead could not be shown">
             <p>What you saved is safe. Try again.{error.digest ? ` Number: ${error.digest}` : ""}</p>
-            <Button onClick={reset}>Try again</Button>
+            <Button onClick={retry}>Try again</Button>
           </EmptyState>
         </main>
       </body>

@@ -7,7 +7,7 @@ import { fileURLToPath } from "node:url";
 
 const root = fileURLToPath(new URL("../..", import.meta.url));
 const port = process.env.E2E_PORT ?? "3217";
-const folder = path.join(root, "test-results", "server");
+const folder = path.join(root, "test-results", `server-${port}`);
 rmSync(folder, { recursive: true, force: true });
 mkdirSync(folder, { recursive: true });
 

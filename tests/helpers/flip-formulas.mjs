@@ -122,7 +122,7 @@ function testsPass(tests) {
   try {
     const vitest = path.join(root, "node_modules/vitest/vitest.mjs");
     const args = ["run", "--config", "tests/helpers/vitest.config.ts", "--project", "unit", "--bail", "1", ...tests];
-    execFileSync(process.execPath, [vitest, ...args], { cwd: copy, stdio: "ignore", timeout: 180_000 });
+    execFileSync(process.execPath, [vitest, ...args], { cwd: copy, stdio: "ignore", timeout: 600_000 });
     return true;
   } catch {
     return false;

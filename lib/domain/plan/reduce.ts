@@ -1,6 +1,8 @@
 import type { Placement, TrayAnchor } from "@/lib/calc/types";
 import type { PlanChange } from "./schema";
 
+const NO_TIE_OUT = "That tie-out is no longer at this camp.";
+
 export type PlanReduction =
   { readonly ok: true; readonly placements: readonly Placement[] } | { readonly ok: false; readonly reason: string };
 
@@ -30,7 +32,7 @@ export function findPlanFault(
     const spot = `${placement.pitchId} ${placement.tieOutId}`;
     if (spots.has(spot)) return "A tie-out can take one anchor, or two in line; it was given two plans.";
     spots.add(spot);
-    if (!isTieOut(placement.pitchId, placement.tieOutId)) return "That tie-out is no longer at this camp.";
+    if (!isTieOut(placement.pitchId, placement.tieOutId)) return NO_TIE_OUT;
   }
   for (const [id, count] of countUsed(placements)) {
     const anchor = anchors.get(id);
@@ -70,6 +72,10 @@ export function applyPlanChange(
   tray: readonly TrayAnchor[],
   isTieOut: (pitchId: string, tieOutId: string) => boolean,
 ): PlanReduction {
+  const isThere = (spot: { pitchId: string; tieOutId: string }) =>
+    isTieOut(spot.pitchId, spot.tieOutId) || placements.some(isAt(spot));
+  const from = change.type === "lift" ? change : change.type === "swap" ? change.from : null;
+  if (from && !isThere(from)) return { ok: false, reason: NO_TIE_OUT };
   const next = reducePlan(placements, change);
   const reason = findPlanFault(next, tray, isTieOut);
   return reason === null ? { ok: true, placements: next } : { ok: false, reason };

@@ -10,7 +10,7 @@ import { cloneCamp } from "../camps/clone-camp";
 import { listAlternativeRows, listCampRows } from "../camps/internal";
 import { listKitRows } from "../kit/internal";
 import { listShelterRows } from "../shelters/internal";
-import { loadTripRow, recordChange } from "./internal";
+import { loadTripRow, recordChange, requireRoomForTrip } from "./internal";
 import { parseInput } from "./parse-input";
 
 type IdMap = ReadonlyMap<string, string>;
@@ -89,6 +89,7 @@ export async function copyTrip({
   const copyId = newId();
   await withTransaction(async (tx) => {
     await requirePermission(ctx, tripId, "trip.edit", tx);
+    await requireRoomForTrip(tx, ctx);
     const source = await loadTripRow(tx, tripId);
     const now = new Date();
     await tx.insert(trip).values({

@@ -5,7 +5,7 @@ import { newId } from "@/lib/domain/ids";
 import { tripCreateInput } from "@/lib/domain/trip/schema";
 import type { Context } from "@/lib/services/context/context";
 import { STARTER_PACK_ITEMS } from "../pack/starter-items";
-import { recordChange } from "./internal";
+import { recordChange, requireRoomForTrip } from "./internal";
 import { parseInput } from "./parse-input";
 
 /** Whoever creates a trip leads it. */
@@ -19,6 +19,7 @@ export async function createTrip({
   const details = parseInput(tripCreateInput, input);
   const tripId = newId();
   await withTransaction(async (tx) => {
+    await requireRoomForTrip(tx, ctx);
     const now = new Date();
     await tx
       .insert(trip)

@@ -1,6 +1,6 @@
-import { and, desc, eq, gte, ne, sql } from "drizzle-orm";
+import { and, count, desc, eq, gte, ne, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { changeLog, trip } from "@/db/schema";
+import { changeLog, person, trip } from "@/db/schema";
 import { newId } from "@/lib/domain/ids";
 import type { Role } from "@/lib/domain/permissions/permissions";
 import type { TripView } from "@/lib/domain/views";
@@ -17,6 +17,19 @@ export async function loadTripRow(reader: Reader, tripId: string): Promise<TripR
   const [row] = await reader.select().from(trip).where(eq(trip.id, tripId)).limit(1);
   if (!row) throw new AppError("not-found", "There is no such trip.");
   return row;
+}
+
+/** Trips that one person can lead at the same time; a limit against floods, far above what anybody plans. */
+export const MOST_TRIPS = 200;
+
+/** Throws when this person leads as many trips as one person may. */
+export async function requireRoomForTrip(reader: Reader, ctx: Context): Promise<void> {
+  const [row] = await reader
+    .select({ trips: count() })
+    .from(person)
+    .where(and(eq(person.userId, ctx.actor.userId), eq(person.role, "leader")));
+  if ((row?.trips ?? 0) >= MOST_TRIPS)
+    throw new AppError("conflict", `You lead ${MOST_TRIPS} trips, the most one person can. Delete one first.`);
 }
 
 /** `nights` of all camps together: the last day is the morning after the last night. */

@@ -129,12 +129,18 @@ describe("a staking plan", () => {
       place("hem-left", other.wideId),
       place("hem-left", kit.wideId, { tandem: { anchorId: other.bladeId, spacingM: 0.2 } }),
       { type: "replace", placements: [placementOf(kit.pitchId, "no-such-tie-out", kit.wideId)] },
+      { type: "lift", pitchId: other.pitchId, tieOutId: "hem-left" },
+      {
+        type: "swap",
+        from: { pitchId: other.pitchId, tieOutId: "hem-left" },
+        to: { pitchId: kit.pitchId, tieOutId: "hem-left" },
+      },
     ];
     const answer = await save(
       cast.leader.ctx,
       foreign.map((change) => intent(planVersion, change)),
     );
-    expect(answer.outcomes.map((one) => one.outcome)).toEqual(["refused", "refused", "refused", "refused"]);
+    expect(answer.outcomes.map((one) => one.outcome)).toEqual(foreign.map(() => "refused"));
     expect(answer.placements).toEqual(placements);
     const crossed = savePlanIntents({
       ctx: cast.leader.ctx,

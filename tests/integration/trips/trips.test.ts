@@ -1,6 +1,6 @@
 import { eq } from "drizzle-orm";
 import { beforeAll, describe, expect, it } from "vitest";
-import { makeCast } from "../../helpers/actors";
+import { makeCast, makeUser } from "../../helpers/actors";
 import { anchorOf, makeCampKit, placementOf, windyCamp } from "../../helpers/camp-kit";
 import { codeOf, refusalOf } from "../../helpers/refusals";
 import { getDb } from "@/db/client";
@@ -16,6 +16,7 @@ import { copyTrip } from "@/lib/services/trips/copy-trip";
 import { createTrip } from "@/lib/services/trips/create-trip";
 import { deleteTrip } from "@/lib/services/trips/delete-trip";
 import { getTrip } from "@/lib/services/trips/get-trip";
+import { MOST_TRIPS } from "@/lib/services/trips/internal";
 import { listTrips } from "@/lib/services/trips/list-trips";
 import { updateTrip } from "@/lib/services/trips/update-trip";
 
@@ -36,6 +37,27 @@ describe("a trip", () => {
     expect((await listTrips({ ctx })).map((one) => one.id)).toEqual([tripId]);
     const log = await getDb().select().from(changeLog).where(eq(changeLog.tripId, tripId));
     expect(log).toMatchObject([{ action: "create", entity: "trip", userName: cast.stranger.name }]);
+  });
+
+  it("is refused to somebody who leads 200 already, new or as a copy", async () => {
+    const { ctx, id: userId, name, email } = await makeUser();
+    const { tripId } = await createTrip({ ctx, input: details });
+    const now = new Date();
+    const ids = Array.from({ length: MOST_TRIPS - 1 }, () => newId());
+    await getDb()
+      .insert(trip)
+      .values(ids.map((id) => ({ id, ...details, createdBy: userId, createdAt: now, updatedAt: now })));
+    await getDb()
+      .insert(person)
+      .values(
+        ids.map((id) => ({ id: newId(), tripId: id, userId, name, email, role: "leader" as const, createdAt: now })),
+      );
+    expect(await codeOf(createTrip({ ctx, input: details }))).toBe("conflict");
+    const copy = { tripId, name: "Again", startDate: "2027-07-01", withPeople: false };
+    expect(await refusalOf(copyTrip({ ctx, input: copy }))).toMatchObject({
+      userMessage: "You lead 200 trips, the most one person can. Delete one first.",
+    });
+    expect(await listTrips({ ctx })).toHaveLength(MOST_TRIPS);
   });
 
   it("ends on the morning after its last night", async () => {

@@ -57,6 +57,7 @@ describe("what becomes of a change of a plan", () => {
     ["a whole plan comes late", [placement("1")], all, [later(place("1"))], "conflict"],
     ["a whole plan came before", [placement("3")], place("1"), [later(all)], "conflict"],
     ["the tie-out is gone", [], place("10"), [], "refused"],
+    ["what is lifted was never there", [], lift("10"), [], "refused"],
     ["it was lifted already", [], lift("1"), [later(lift("1"))], "applied"],
     ["there is one shock cord", [], place("1", { shockCord: true }), [], "applied"],
     ["it is in use", [placement("2", { shockCord: true })], place("1", { shockCord: true }), [], "refused"],
