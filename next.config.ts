@@ -13,6 +13,12 @@ const headers = [
   },
 ];
 
+/** As proxy.ts has it for data; route files do not pass there. */
+const dataPolicy = {
+  key: "Content-Security-Policy",
+  value: "default-src 'none'; base-uri 'none'; form-action 'none'; frame-ancestors 'none'",
+};
+
 const config: NextConfig = {
   // A trial build beside the real one leaves the types to `npm run typecheck`.
   ...(process.env.NEXT_DIST_DIR ? { distDir: process.env.NEXT_DIST_DIR, typescript: { ignoreBuildErrors: true } } : {}),
@@ -31,7 +37,10 @@ const config: NextConfig = {
     "highs",
     "@zxcvbn-ts/language-common",
   ],
-  headers: async () => [{ source: "/:path*", headers }],
+  headers: async () => [
+    { source: "/:path*", headers },
+    { source: "/api/gpx/:path*", headers: [dataPolicy] },
+  ],
   images: { unoptimized: true, remotePatterns: [] },
   experimental: { serverActions: { bodySizeLimit: "1mb" } },
 };

@@ -69,3 +69,11 @@ export function minuteOfDay(time: string): number {
   const [hour = 0, minute = 0] = time.split(":").map(Number);
   return hour * 60 + minute;
 }
+
+/** Minutes after midnight of a day that a clock of the zone shows at an instant; 1440 and more on the days after. */
+export function minuteOn(day: string, instant: Date | string, timeZone: string): number {
+  const [hours = 0, minutes = 0, seconds = 0] = format(new Date(instant), "HH:mm:ss", { in: tz(timeZone) })
+    .split(":")
+    .map(Number);
+  return countDaysBetween(day, dayOf(instant, timeZone)) * 1440 + hours * 60 + minutes + seconds / 60;
+}

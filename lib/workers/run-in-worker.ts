@@ -7,6 +7,7 @@ import { WorkerFailure, WorkerPool } from "./pool";
 const POOLS = {
   analysis: { threads: 2, timeoutMs: 20_000, maxWaiting: 200, memoryMb: 128 },
   pdf: { threads: 1, timeoutMs: 60_000, maxWaiting: 40, memoryMb: 512 },
+  gpx: { threads: 1, timeoutMs: 20_000, maxWaiting: 20, memoryMb: 384 },
 } as const;
 export type WorkerName = keyof typeof POOLS;
 

@@ -21,6 +21,7 @@ interface TripLayoutProps {
 
 const PARTS: readonly { path: string; label: string; permission: Permission }[] = [
   { path: "", label: "Overview", permission: "camp.read" },
+  { path: "/route", label: "Route", permission: "route.read" },
   { path: "/shelters", label: "Shelters", permission: "camp.read" },
   { path: "/kit", label: "Kit", permission: "camp.read" },
   { path: "/people", label: "People", permission: "people.read" },

@@ -1,0 +1,4 @@
+import { measureGpx } from "./gpx-task";
+import { serveWorker } from "./serve-worker";
+
+serveWorker(measureGpx);
