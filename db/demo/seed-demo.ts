@@ -24,6 +24,7 @@ import { createTrip } from "@/lib/services/trips/create-trip";
 import { updateTrip } from "@/lib/services/trips/update-trip";
 import { DEMO_PASSWORD, DEMO_PEOPLE, SECOND_LEADER, type DemoPerson } from "./people";
 import { seedCampPulls, seedPractice } from "./pull-tests";
+import { seedRoute } from "./seed-route";
 import { CAMPS, CONTACTS, KIT, SHELTERS, SLEEPS_IN, TRIP } from "./skarn-edge";
 
 /** An account through the front door; its address counts as verified, and the mail that asks for it isn't sent. */
@@ -116,6 +117,7 @@ async function createMainTrip(ctx: Context): Promise<string> {
   }
   await shareOutEvenly({ ctx, input: { tripId } });
   await seedPractice(ctx);
+  await seedRoute(ctx, tripId);
   return tripId;
 }
 

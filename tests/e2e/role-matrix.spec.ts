@@ -213,6 +213,11 @@ async function callRoute(name: string, when: string | undefined, caller: Caller)
       const personId = people[whose === "participant" ? "Kirsi Lindqvist" : "Runa Amsel"] ?? "";
       return request.get(api, { params: { paper, campId: ids.campId ?? "", personId }, timeout: 60_000 });
     }
+    case "POST /api/gpx/[tripId]": {
+      // The trip's own way again, so that it stays as it was for whoever comes after.
+      const own = await (await as.leader.get(api)).text();
+      return request.post(api, { data: own, headers: { "Content-Type": "application/gpx+xml" } });
+    }
     case "GET /demo/mail/[id]/[n]": {
       // The demo's first mails carry no file: then it is the same "not there" for everybody.
       return request.get(api.replace("no-n", "0"));

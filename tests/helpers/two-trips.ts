@@ -24,11 +24,23 @@ import { invitePerson } from "@/lib/services/people/invite-person";
 import { savePlanIntents } from "@/lib/services/plan/save-plan-intents";
 import { createCampPullTest, createPracticePullTest } from "@/lib/services/pull-tests/create-pull-test";
 import { savePhoto } from "@/lib/services/pull-tests/photo/save-photo";
+import { importGpx } from "@/lib/services/route/import-gpx";
 import { createShelter } from "@/lib/services/shelters/create-shelter";
 import { saveSleepers } from "@/lib/services/sleepers/save-sleepers";
 import type { Caller } from "../e2e/role-matrix";
 
 export const PASSWORD = "four pegs in wet sand";
+
+/** Three points over a rise, and a place beside the second. */
+export const SHORT_WAY = `<gpx version="1.1" xmlns="http://www.topografix.com/GPX/1/1">
+<wpt lat="60.011" lon="8.01"><name>Cairn</name></wpt>
+<trk><name>Way</name><trkseg>
+<trkpt lat="60" lon="8"><ele>300</ele></trkpt>
+<trkpt lat="60.003" lon="8.003"><ele>330</ele></trkpt>
+<trkpt lat="60.006" lon="8.006"><ele>380</ele></trkpt>
+<trkpt lat="60.01" lon="8.01"><ele>420</ele></trkpt>
+<trkpt lat="60.02" lon="8.01"><ele>350</ele></trkpt>
+</trkseg></trk></gpx>`;
 
 export const cordOf = (name: string) => ({
   type: "cord" as const,
@@ -130,6 +142,7 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
   await createCampPullTest({ ctx, input: { tripId, campId: kit.campId, ...pullOf(pullTestId) } });
   await createPracticePullTest({ ctx, input: practicePullOf(practicePullId) });
   await savePhoto({ ctx, input: { pullTestId, keepsPosition: false, content: TINY_PNG } });
+  await importGpx({ ctx, input: { tripId, fileName: "way.gpx" }, bytes: new TextEncoder().encode(SHORT_WAY) });
   const { gearId } = await createGear({ ctx, input: { details: { type: "anchor", anchor: cordOf("Own cord") } } });
   return {
     ...kit,

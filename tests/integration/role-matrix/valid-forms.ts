@@ -20,6 +20,16 @@ export function formOf(values: Readonly<Record<string, Value>>): FormData {
 
 /** Typed in grams, as the form of a cord does. */
 const typedCord = (name: string, count = 2) => ({ ...cordOf(name), massKg: 100, count });
+const OPEN_SETTINGS = {
+  paceRatio: null,
+  fitness: null,
+  breakMinPerHour: null,
+  pitchingMin: null,
+  bodyKg: null,
+  packKg: null,
+  terrain: null,
+  heat: null,
+};
 const NEW_PASSWORD = "two hitches on a cold ridge";
 
 /** For each server action what a person who may do it would send, on the first trip. */
@@ -69,6 +79,24 @@ export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Re
     "trips/[tripId]/camps#copyCampAction": { ...camp, withSleepers: true },
     "trips/[tripId]/camps#reorderCampsAction": { tripId, campIds: [a.spareCampId, campId] },
     "trips/[tripId]/camps#deleteCampAction": { ...camp, confirmed: true },
+    "trips/[tripId]/route#saveRouteSettingsAction": {
+      tripId,
+      version: 0,
+      lengthUnit: "m",
+      settings: { rule: "slowest", linesLower: 0, isOffPath: false, setOffMinute: "09:00", ...OPEN_SETTINGS },
+      legs: [{ campId, leg: { distanceM: 12, ascentM: 300, descentM: 20, setOffMinute: "" } }],
+      homeLeg: { distanceM: null, ascentM: null, descentM: null, setOffMinute: null },
+    },
+    "trips/[tripId]/route#placeCampAction": { ...camp, version: 1, atM: 900, position: "line" },
+    "trips/[tripId]/route#drawRouteAction": {
+      tripId,
+      points: [
+        { latitude: 60, longitude: 8 },
+        { latitude: 60.1, longitude: 8.1 },
+      ],
+    },
+    "trips/[tripId]/route#deleteRouteAction": { tripId },
+    "trips/[tripId]/route#createCampsFromPlacesAction": { tripId, places: [0] },
     "trips/[tripId]/camps/[campId]/shelters#createPitchAction": { ...camp, shelterId: a.spareShelterId },
     "trips/[tripId]/camps/[campId]/shelters#updatePitchAction": {
       ...camp,
