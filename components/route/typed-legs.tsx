@@ -53,8 +53,8 @@ function LegRow({
   return (
     <fieldset className="border-t border-hair py-3">
       <legend className="sr-only">{title}</legend>
-      <div className="grid items-end gap-3 sm:grid-cols-[10rem_repeat(4,minmax(0,1fr))]">
-        <p className="text-15 font-semibold sm:pb-3" aria-hidden="true">
+      <div className="grid grid-cols-2 items-end gap-3 sm:grid-cols-[10rem_repeat(4,minmax(0,1fr))]">
+        <p className="col-span-2 text-15 font-semibold sm:col-span-1 sm:pb-3" aria-hidden="true">
           {title}
         </p>
         <NumberField

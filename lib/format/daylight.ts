@@ -19,7 +19,7 @@ function aboutMinutes(minutes: number): string {
 
 /** Arrival against the end of civil twilight: "Pitching begins 40 min before dark", "In the dark by 25 min". */
 export function describeDaylight(
-  leg: Pick<LegResult, "arriveMin" | "evening" | "missing">,
+  leg: Pick<LegResult, "key" | "arriveMin" | "evening" | "missing">,
   pitchingMin: number | null,
 ): DaylightSentence {
   const { arriveMin, evening, missing } = leg;
@@ -33,6 +33,8 @@ export function describeDaylight(
   }
   const before = Math.floor(evening.duskMin - arriveMin);
   if (before < 0) return { tone: "dark", text: `In the dark by ${aboutMinutes(-before)}.` };
+  if (leg.key === "home")
+    return { tone: before < THIN_MIN ? "thin" : "light", text: `Home ${aboutMinutes(before)} before dark.` };
   const text = `Pitching begins ${aboutMinutes(before)} before dark`;
   if (pitchingMin === null) return { tone: before < THIN_MIN ? "thin" : "light", text: `${text}.` };
   const left = Math.floor(before - pitchingMin);
