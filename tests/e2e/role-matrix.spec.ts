@@ -106,6 +106,11 @@ async function expectSilent(response: APIResponse, caller: Caller, what: string)
   }
 }
 
+/** One reading that fits a camp as well as a practice field. */
+const PULL_TABLE = `pulled_at,place,ground,wetness,anchor,lean_deg,line_angle_deg,force,unit,outcome
+2027-01-02,Matrix,firm-moist-loam,usual,three-blade-200,0,45,18,kgf,came-out
+`;
+
 const FORMS: readonly [string, Record<string, string>][] = [
   ["page", {}],
   ["data of a navigation", { RSC: "1" }],
@@ -193,6 +198,9 @@ async function callRoute(name: string, when: string | undefined, caller: Caller)
       const intentId = `m${Date.now().toString(36)}${caller.toLowerCase()}`.padEnd(26, "0");
       return request.post(api, { data: { intents: [{ intentId, baseVersion: 0, change }] } });
     }
+    case "POST /api/trips/[tripId]/camps/[campId]/pull-tests":
+    case "POST /api/pull-tests":
+      return request.post(api, { headers: { "content-type": "text/csv" }, data: PULL_TABLE });
     case "PUT /api/pull-tests/[pullTestId]/photo":
       return request.put(api, { data: Buffer.from(TINY_PNG) });
     case "POST /api/trips/[tripId]/kit-search": {

@@ -4,12 +4,14 @@ import { PracticeGroundFields } from "@/components/pull-tests/practice-ground-fi
 import { PullForm } from "@/components/pull-tests/pull-form";
 import { PullTestList } from "@/components/pull-tests/pull-test-list";
 import { startPull } from "@/components/pull-tests/start-pull";
+import { TableInOut } from "@/components/pull-tests/table-in-out";
 import { Cautions, EmptyState, PageHeading, Section } from "@/components/ui/layout";
 import { requireContext } from "@/lib/auth/session";
 import { newId } from "@/lib/domain/ids";
 import type { PracticeView } from "@/lib/domain/pull-test/views";
 import { plural } from "@/lib/format/words";
 import { getPreferences } from "@/lib/services/preferences/get-preferences";
+import { COLUMNS } from "@/lib/services/pull-tests/csv/columns";
 import { getPracticeField } from "@/lib/services/pull-tests/get-practice-field";
 import { logPracticePullAction, switchPullTestAction } from "./actions";
 
@@ -81,6 +83,9 @@ export default async function PracticeFieldPage() {
           />
         </Section>
       )}
+      <Section title="As a table">
+        <TableInOut address="/api/pull-tests" columns={COLUMNS} />
+      </Section>
       <Cautions />
     </>
   );

@@ -23,6 +23,14 @@ export const OUTCOME_NAMES: Readonly<Record<PullOutcome, string>> = {
 /** The ground as it was when it was pulled. */
 export type TestedGround = Pick<GroundState, "kind" | "wetness" | "looseTopM" | "stoneDepthM" | "slopeDeg">;
 
+export const testedGroundSchema: z.ZodType<TestedGround> = z.object({
+  kind: z.enum(GROUND_KINDS, { error: "Choose a ground." }),
+  wetness: z.enum(WETNESSES, { error: "Choose how wet the ground was." }),
+  looseTopM: numberBetween("the loose top layer", 0, 0.5, "m").nullable(),
+  stoneDepthM: numberBetween("the depth to stones", 0.02, 2, "m").nullable(),
+  slopeDeg: numberBetween("the slope", 0, 35, "°"),
+});
+
 const NEWTONS: Readonly<Record<(typeof FORCE_UNITS)[number], number>> = {
   N: 1,
   kgf: NEWTONS_PER_KILOGRAM_FORCE,

@@ -115,6 +115,16 @@ export async function listPracticeAnchors(ctx: Context): Promise<TestAnchor[]> {
   return withBuiltIns(own);
 }
 
+/** Finds an anchor as a table names it: by its name, or by the id of a built-in one. */
+export function nameAnchors(anchors: readonly TestAnchor[]): (name: string) => TestAnchor | undefined {
+  const byName = new Map<string, TestAnchor>();
+  for (const one of [...BUILT_IN, ...[...anchors].reverse()]) {
+    byName.set(one.id.toLowerCase(), one);
+    byName.set(one.name.toLowerCase(), one);
+  }
+  return (name) => byName.get(name.toLowerCase());
+}
+
 export function findAnchor(anchors: readonly TestAnchor[], anchorId: string): TestAnchor {
   // A built-in one of the same name as the kit's is not listed twice, but its id still names it.
   const found = [...anchors, ...BUILT_IN].find((one) => one.id === anchorId);

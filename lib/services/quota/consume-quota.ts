@@ -15,6 +15,7 @@ interface Rule {
 export const QUOTAS = {
   pdf: { max: 60, windowS: 600, sentence: "At most 60 pieces of paper in ten minutes." },
   gpx: { max: 40, windowS: 600, sentence: "At most 40 route files in ten minutes." },
+  import: { max: 60, windowS: 600, sentence: "At most 60 tables in ten minutes." },
   mail: { max: 300, windowS: 3600, sentence: "At most 300 messages in an hour." },
   invitation: { max: 60, windowS: 3600, sentence: "At most 60 invitations in an hour." },
   forecast: { max: 120, windowS: 3600, sentence: "At most 120 forecasts in an hour." },

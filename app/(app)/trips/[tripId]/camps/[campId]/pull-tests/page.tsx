@@ -6,6 +6,7 @@ import { PatchField } from "@/components/pull-tests/patch-field";
 import { PullForm } from "@/components/pull-tests/pull-form";
 import { PullTestList } from "@/components/pull-tests/pull-test-list";
 import { startPull } from "@/components/pull-tests/start-pull";
+import { TableInOut } from "@/components/pull-tests/table-in-out";
 import { PageBody } from "@/components/trip/page-body";
 import { LinkButton } from "@/components/ui/button";
 import { Cautions, EmptyState, PageHeading, Section } from "@/components/ui/layout";
@@ -15,6 +16,7 @@ import { describeFactor } from "@/lib/format/pull-tests";
 import { plural } from "@/lib/format/words";
 import { orNotFound } from "@/lib/http/or-not-found";
 import { getCamp } from "@/lib/services/camps/get-camp";
+import { COLUMNS } from "@/lib/services/pull-tests/csv/columns";
 import { getCampPullTests } from "@/lib/services/pull-tests/get-camp-pull-tests";
 import { switchPullTestAction } from "../../../../../pull-tests/actions";
 import { loadTrip } from "../../../_lib/load-trip";
@@ -128,6 +130,9 @@ export default async function PullTestsPage({ params }: PullTestsPageProps) {
             showsGround={false}
           />
         )}
+      </Section>
+      <Section title="As a table">
+        <TableInOut address={`/api/trips/${trip.id}/camps/${campId}/pull-tests`} columns={COLUMNS} />
       </Section>
       <Cautions />
     </PageBody>
