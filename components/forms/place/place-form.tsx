@@ -81,7 +81,7 @@ export function PlaceForm({ action, tripId, campId, version, details, hazards, p
         <LeeFields details={details} unit={unit} />
       </Part>
       <Part id="where">
-        <PositionFields details={details} unit={unit} />
+        <PositionFields details={details} unit={unit} onChanged={touch} />
       </Part>
       <Part id="found">
         <FoundFields details={details} />

@@ -3,9 +3,11 @@
 import { useState } from "react";
 import { CheckField, FieldError, NumberField, TextArea, TextField } from "@/components/ui/fields";
 import { useFieldErrors } from "@/components/ui/action-form";
+import type { LatLon } from "@/lib/calc/places/utm";
 import type { CampDetails } from "@/lib/domain/camp/schema";
 import type { Preferences } from "@/lib/domain/preferences";
 import { lengthInUnit } from "./lengths";
+import { PositionEntry } from "./position-entry";
 
 const shown = (value: number | null) => (value === null ? "" : String(value));
 
@@ -22,41 +24,56 @@ export function NameFields({ details }: { readonly details: CampDetails }) {
 export function PositionFields({
   details,
   unit,
+  onChanged,
 }: {
   readonly details: CampDetails;
   readonly unit: Preferences["lengthUnit"];
+  readonly onChanged: () => void;
 }) {
+  const [read, setRead] = useState<LatLon | null>(null);
+  const { latitude, longitude } = read ?? details;
+  const key = read ? `${read.latitude} ${read.longitude}` : "saved";
   return (
-    <div className="grid items-start gap-4 sm:grid-cols-2 lg:grid-cols-4">
-      <NumberField
-        name="details.latitude"
-        label="Latitude"
-        unit="°"
-        defaultValue={shown(details.latitude)}
-        hint="WGS 84, decimal degrees; south is negative."
+    <>
+      <PositionEntry
+        onFound={(place) => {
+          setRead(place);
+          onChanged();
+        }}
       />
-      <NumberField
-        name="details.longitude"
-        label="Longitude"
-        unit="°"
-        defaultValue={shown(details.longitude)}
-        hint="West is negative."
-      />
-      <NumberField
-        name="details.altitudeM"
-        label="Altitude"
-        unit={unit}
-        defaultValue={lengthInUnit(details.altitudeM, unit, 0)}
-        hint="Thinner air pushes less."
-      />
-      <NumberField
-        name="details.temperatureC"
-        label="Air at night"
-        unit="°C"
-        defaultValue={shown(details.temperatureC)}
-        hint="Empty: the usual for the altitude."
-      />
-    </div>
+      <div className="grid items-start gap-4 sm:grid-cols-2 lg:grid-cols-4">
+        <NumberField
+          key={`north ${key}`}
+          name="details.latitude"
+          label="Latitude"
+          unit="°"
+          defaultValue={shown(latitude)}
+          hint="WGS 84, decimal degrees; south is negative."
+        />
+        <NumberField
+          key={`east ${key}`}
+          name="details.longitude"
+          label="Longitude"
+          unit="°"
+          defaultValue={shown(longitude)}
+          hint="West is negative."
+        />
+        <NumberField
+          name="details.altitudeM"
+          label="Altitude"
+          unit={unit}
+          defaultValue={lengthInUnit(details.altitudeM, unit, 0)}
+          hint="Thinner air pushes less."
+        />
+        <NumberField
+          name="details.temperatureC"
+          label="Air at night"
+          unit="°C"
+          defaultValue={shown(details.temperatureC)}
+          hint="Empty: the usual for the altitude."
+        />
+      </div>
+    </>
   );
 }
 

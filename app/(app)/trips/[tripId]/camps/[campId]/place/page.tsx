@@ -1,4 +1,5 @@
 import { PlaceForm } from "@/components/forms/place/place-form";
+import { PlaceFacts } from "@/components/trip/place-facts";
 import { PageBody } from "@/components/trip/page-body";
 import { LinkButton } from "@/components/ui/button";
 import { PageHeading } from "@/components/ui/layout";
@@ -6,6 +7,7 @@ import { HAZARDS } from "@/lib/domain/camp/schema";
 import { formatDay } from "@/lib/format/days";
 import { orNotFound } from "@/lib/http/or-not-found";
 import { getCamp } from "@/lib/services/camps/get-camp";
+import { getCampPlace } from "@/lib/services/places/get-camp-place";
 import { loadTrip } from "../../../_lib/load-trip";
 import { updateCampAction } from "../../actions";
 
@@ -52,6 +54,9 @@ export default async function PlacePage({ params }: PlacePageProps) {
         hazards={HAZARDS}
         preferences={preferences}
       />
+      <div className="mt-10">
+        <PlaceFacts place={await getCampPlace({ ctx, input: { tripId: trip.id, campId } })} />
+      </div>
     </PageBody>
   );
 }
