@@ -1,6 +1,7 @@
 /** What the services hand to screens and paper: only what they need to show, dates as text, SI units. */
 import type { CampResult, Gap, Placement, ShelterAnalysis, ShelterSpec, TrayAnchor, Verdict } from "@/lib/calc/types";
 import type { CampDetails } from "./camp/schema";
+import type { NightForecast } from "./forecast/schema";
 import type { GearDetails } from "./gear/schema";
 import type { KitItemDetails } from "./kit/schema";
 import type { AnswerView, ContactSheetView } from "./people-views";
@@ -297,6 +298,14 @@ export interface PaperHeader {
   readonly address: string;
 }
 
+export interface PaperForecast {
+  readonly source: string;
+  readonly isSample: boolean;
+  /** Already formatted in the trip's time zone. */
+  readonly fetchedAt: string;
+  readonly nights: readonly NightForecast[];
+}
+
 /** A camp for printing: what the plan says, already worked out. */
 export interface PaperCamp {
   readonly camp: CampView;
@@ -307,6 +316,8 @@ export interface PaperCamp {
   readonly result: CampResult;
   /** Sleeper names by pitch id. */
   readonly sleeperNames: Readonly<Record<string, readonly string[]>>;
+  /** What was accepted of a forecast, while the camp is still planned for it. */
+  readonly forecast: PaperForecast | null;
   /** What to do first when ground is softer or wind stronger, per pitch id, in order. */
   readonly fallbacks: Readonly<Record<string, readonly string[]>>;
 }

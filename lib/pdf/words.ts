@@ -5,11 +5,13 @@ import type { CampDetails, GroundPatch } from "@/lib/domain/camp/schema";
 import { HAZARDS } from "@/lib/domain/camp/schema";
 import { STATE_MARKS } from "@/lib/domain/drawing/state-marks";
 import type { Preferences } from "@/lib/domain/preferences";
-import type { CampView, PitchView } from "@/lib/domain/views";
+import type { NightForecast } from "@/lib/domain/forecast/schema";
+import type { CampView, PaperForecast, PitchView } from "@/lib/domain/views";
 import { formatCompass, formatWindRange } from "@/lib/format/angles";
 import { formatDay } from "@/lib/format/days";
-import { formatLength, formatMillimetres } from "@/lib/format/lengths";
+import { formatAltitude, formatLength, formatMillimetres } from "@/lib/format/lengths";
 import { withUnit } from "@/lib/format/numbers";
+import { formatRain, formatTemperature } from "@/lib/format/weather";
 import { formatBeaufort, formatHoldsTo, formatSpeed } from "@/lib/format/speeds";
 
 /** How the camps, shelters and tie-outs of a plan are put into words on paper. */
@@ -54,6 +56,12 @@ const fromNorth = (bearing: number) => Math.min(bearing, 360 - bearing);
 
 export function nightWords(nightNumbers: string, camp: CampView): string {
   const night = /^night/i.test(nightNumbers) ? nightNumbers : `night ${nightNumbers}`;
+  return camp.alternativeTo
+    ? `${datedNight(night, camp)} · in place of ${camp.alternativeTo.name}`
+    : datedNight(night, camp);
+}
+
+function datedNight(night: string, camp: CampView): string {
   const [first] = camp.days;
   const last = camp.days[camp.days.length - 1];
   if (first === undefined || last === undefined) return night;
@@ -69,8 +77,42 @@ export function hazardNames(keys: readonly string[]): string[] {
   return HAZARDS.filter((hazard) => keys.includes(hazard.key)).map((hazard) => hazard.name);
 }
 
+/** "Sun 14 June: gust 75 km/h from W, mean 43 km/h, rain 4 mm, 3 °C, feels −2 °C", one a night. */
+export function forecastLines(nights: readonly NightForecast[], { speedUnit, lengthUnit }: Preferences): string[] {
+  return nights.map((night) => {
+    const parts = [
+      night.gustMs === null ? null : `gust ${formatSpeed(night.gustMs, speedUnit)}`,
+      night.meanMs === null ? null : `mean ${formatSpeed(night.meanMs, speedUnit)}`,
+      night.fromDeg === null ? null : `from ${formatCompass(night.fromDeg)}`,
+      night.rainMm === null ? null : `rain ${formatRain(night.rainMm, lengthUnit)}`,
+      night.temperatureC === null ? null : `down to ${formatTemperature(night.temperatureC, lengthUnit)}`,
+      night.windChillC === null ? null : `feels like ${formatTemperature(night.windChillC, lengthUnit)}`,
+    ];
+    return `${formatDay(night.day)}: ${parts.filter(Boolean).join(", ")}`;
+  });
+}
+
+/** Where it is from and when; sample data says that it is none. */
+export function forecastSource({ source, isSample, fetchedAt }: PaperForecast): string {
+  return isSample ? "Sample data, not a forecast." : `From ${source}, fetched ${fetchedAt}.`;
+}
+
+/** "Tide. Pitch above the highest drift line…", one for each that is ticked. */
+export function hazardCautions(keys: readonly string[]): string[] {
+  return HAZARDS.filter((hazard) => keys.includes(hazard.key)).map((hazard) => `${hazard.name}. ${hazard.caution}`);
+}
+
 export function stateWord(verdict: Verdict): string {
   return STATE_MARKS[verdict].word;
+}
+
+/** "120 m away. Spring below the wall." */
+export function waterWords(
+  { waterDistanceM, water }: Pick<CampDetails, "waterDistanceM" | "water">,
+  unit: Preferences["lengthUnit"],
+): string {
+  const distance = waterDistanceM === null ? "" : `${formatAltitude(waterDistanceM, unit)} away.`;
+  return [distance, water].filter(Boolean).join(" ");
 }
 
 /** What is done at a tie-out beside driving the anchor. */

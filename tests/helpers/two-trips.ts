@@ -6,12 +6,15 @@ import { clearLimits, readLinkToken } from "./outbox";
 import { hashPassword } from "better-auth/crypto";
 import { and, eq, isNull } from "drizzle-orm";
 import { getDb } from "@/db/client";
-import { account, kitSearch, outboxMessage, packItem, session, trip } from "@/db/schema";
+import { account, forecast, kitSearch, outboxMessage, packItem, session, trip } from "@/db/schema";
 import { newId } from "@/lib/domain/ids";
 import { builtInAnchor } from "@/lib/calc/tables/anchors";
 import { fingerprint } from "@/lib/services/kit-search/internal";
 import { loadTripState } from "@/lib/services/plan/load-trip-state";
+import { createAlternative } from "@/lib/services/camps/create-alternative";
 import { createCamp } from "@/lib/services/camps/create-camp";
+import { fetchForecast } from "@/lib/services/forecast/fetch-forecast";
+import { sampleSource } from "@/lib/weather/sample-source";
 import type { Context } from "@/lib/services/context/context";
 import { saveOwnDetails } from "@/lib/services/details/save-own-details";
 import { saveEmergencyPlan } from "@/lib/services/emergency/save-emergency-plan";
@@ -83,7 +86,7 @@ async function keepFoundKit(tripId: string, { campId, bladeId }: { campId: strin
 
 /** A trip with one of everything in use, and one of everything to spare. */
 async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
-  const kit = await makeCampKit(ctx, tripId);
+  const kit = await makeCampKit(ctx, tripId, { latitude: 61.93, longitude: 8.72 });
   const { campId: spareCampId } = await createCamp({
     ctx,
     input: { tripId, details: windyCamp({ name: "Low Barn" }) },
@@ -113,6 +116,13 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
     .select({ id: packItem.id })
     .from(packItem)
     .where(and(eq(packItem.tripId, tripId), isNull(packItem.personId)));
+  const { campId: alternativeId } = await createAlternative({
+    ctx,
+    input: { tripId, campId: spareCampId, name: "Bield under the barn" },
+  });
+  const at = new Date(Date.now() - 3_600_000);
+  await fetchForecast({ ctx, input: { tripId, campId: kit.campId }, source: sampleSource, at });
+  const [fetched] = await getDb().select({ id: forecast.id }).from(forecast).where(eq(forecast.tripId, tripId));
   const waitingEmail = `waiting-${tripId.toLowerCase()}@example.test`;
   const { personId: waitingId } = await createPerson({
     ctx,
@@ -147,6 +157,8 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
   return {
     ...kit,
     spareCampId,
+    alternativeId,
+    forecastId: fetched?.id ?? "",
     spareShelterId,
     cordId,
     packItemId: item?.id ?? "",

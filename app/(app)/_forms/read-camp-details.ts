@@ -10,6 +10,7 @@ export function readCampDetails(input: Typed): Typed {
   return {
     ...typed,
     altitudeM: scale(typed.altitudeM, metres),
+    waterDistanceM: scale(typed.waterDistanceM, metres),
     ground: readPatch(typed.ground),
     secondGround: readPatch(typed.secondGround),
     wind: readWind(asTyped(typed.wind), input.speedUnit),

@@ -10,7 +10,7 @@ import { ConflictChoice } from "../conflict-choice";
 import { clockNow, SaveBar, type SaveState } from "../save-bar";
 import { GroundFields, SecondGround } from "./ground-fields";
 import { LeeFields } from "./lee-fields";
-import { FoundFields, HazardFields, NameFields, NoteFields, PositionFields } from "./where-fields";
+import { FoundFields, HazardFields, NameFields, NoteFields, PositionFields, type HazardOption } from "./where-fields";
 import { WindFields } from "./wind-fields";
 
 const PARTS = [
@@ -19,7 +19,7 @@ const PARTS = [
   ["lee", "Hill and shelter from wind"],
   ["where", "Place"],
   ["found", "Found here"],
-  ["hazards", "Water, hazards, notes"],
+  ["hazards", "Hazards, water, way out"],
 ] as const;
 
 interface PlaceFormProps {
@@ -28,12 +28,23 @@ interface PlaceFormProps {
   readonly campId: string;
   readonly version: number;
   readonly details: CampDetails;
-  readonly hazards: readonly { readonly key: string; readonly name: string }[];
+  /** Of an alternative: the camp whose nights it has. */
+  readonly standsByFor?: string | null;
+  readonly hazards: readonly HazardOption[];
   readonly preferences: Preferences;
 }
 
 /** Everything that is known of a camp's ground and wind, on one page with a table of contents. */
-export function PlaceForm({ action, tripId, campId, version, details, hazards, preferences }: PlaceFormProps) {
+export function PlaceForm({
+  action,
+  tripId,
+  campId,
+  version,
+  details,
+  standsByFor = null,
+  hazards,
+  preferences,
+}: PlaceFormProps) {
   const [state, setState] = useState<SaveState>({ kind: "clean" });
   const unit = preferences.lengthUnit;
   const touch = () => setState((now) => (now.kind === "dirty" ? now : { kind: "dirty" }));
@@ -59,7 +70,7 @@ export function PlaceForm({ action, tripId, campId, version, details, hazards, p
         </ul>
       </nav>
       <div className="mb-10 max-w-[40rem]">
-        <NameFields details={details} />
+        <NameFields details={details} standsByFor={standsByFor} />
       </div>
       <Part id="ground">
         <GroundFields path="details.ground" patch={details.ground} isOptional={false} />
@@ -89,7 +100,7 @@ export function PlaceForm({ action, tripId, campId, version, details, hazards, p
       <Part id="hazards">
         <HazardFields chosen={details.hazards} hazards={hazards} />
         <div className="mt-6">
-          <NoteFields details={details} />
+          <NoteFields details={details} unit={unit} />
         </div>
       </Part>
       <SaveBar state={state} label="Save ground and wind" />

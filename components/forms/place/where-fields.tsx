@@ -11,7 +11,22 @@ import { PositionEntry } from "./position-entry";
 
 const shown = (value: number | null) => (value === null ? "" : String(value));
 
-export function NameFields({ details }: { readonly details: CampDetails }) {
+export function NameFields({
+  details,
+  standsByFor,
+}: {
+  readonly details: CampDetails;
+  readonly standsByFor: string | null;
+}) {
+  if (standsByFor !== null) {
+    return (
+      <>
+        <TextField name="details.name" label="Name of the camp" defaultValue={details.name} maxLength={80} />
+        <input type="hidden" name="details.nights:number" value={details.nights} />
+        <p className="mt-2 text-13 text-pencil">It has the nights of {standsByFor}.</p>
+      </>
+    );
+  }
   return (
     <div className="grid items-start gap-4 sm:grid-cols-[minmax(0,1fr)_8rem]">
       <TextField name="details.name" label="Name of the camp" defaultValue={details.name} maxLength={80} />
@@ -102,13 +117,19 @@ export function FoundFields({ details }: { readonly details: CampDetails }) {
   );
 }
 
+export interface HazardOption {
+  readonly key: string;
+  readonly name: string;
+  readonly caution: string;
+}
+
 /** Several at once; sent as one list. */
 export function HazardFields({
   chosen,
   hazards,
 }: {
   readonly chosen: CampDetails["hazards"];
-  readonly hazards: readonly { readonly key: string; readonly name: string }[];
+  readonly hazards: readonly HazardOption[];
 }) {
   const [keys, setKeys] = useState<readonly string[]>(chosen);
   const errors = useFieldErrors("details.hazards");
@@ -116,18 +137,22 @@ export function HazardFields({
     <fieldset>
       <legend className="sr-only">Hazards at this camp</legend>
       <input type="hidden" name="details.hazards:json" value={JSON.stringify(keys)} />
-      <div className="grid gap-x-8 sm:grid-cols-2 lg:grid-cols-3">
+      <div className="grid gap-x-8 gap-y-1 sm:grid-cols-2">
         {hazards.map((hazard) => (
-          <label key={hazard.key} className="flex min-h-11 items-center gap-3">
+          <label key={hazard.key} className="flex min-h-11 items-start gap-3 py-2">
             <input
               type="checkbox"
+              aria-label={hazard.name}
               checked={keys.includes(hazard.key)}
               onChange={(event) =>
                 setKeys(event.target.checked ? [...keys, hazard.key] : keys.filter((key) => key !== hazard.key))
               }
-              className="size-5 shrink-0 accent-spruce"
+              className="mt-0.5 size-5 shrink-0 accent-spruce"
             />
-            <span>{hazard.name}</span>
+            <span>
+              {hazard.name}
+              <span className="block text-13 text-pencil">{hazard.caution}</span>
+            </span>
           </label>
         ))}
       </div>
@@ -136,16 +161,47 @@ export function HazardFields({
   );
 }
 
-export function NoteFields({ details }: { readonly details: CampDetails }) {
+export function NoteFields({
+  details,
+  unit,
+}: {
+  readonly details: CampDetails;
+  readonly unit: Preferences["lengthUnit"];
+}) {
   return (
     <div className="grid gap-5 lg:grid-cols-2">
+      <div className="max-w-[12rem] lg:col-span-2">
+        <NumberField
+          name="details.waterDistanceM"
+          label="Water, distance"
+          unit={unit}
+          defaultValue={lengthInUnit(details.waterDistanceM, unit, 0)}
+          hint="One way, on foot."
+        />
+      </div>
       <TextArea
         name="details.water"
         label="Water"
         rows={3}
         maxLength={500}
         defaultValue={details.water}
-        hint="Where, how far, to be boiled or not."
+        hint="Where, and to be boiled or not."
+      />
+      <TextArea
+        name="details.wayOut"
+        label="Way out"
+        rows={3}
+        maxLength={500}
+        defaultValue={details.wayOut}
+        hint="By which way down, how long, to which road or phone."
+      />
+      <TextArea
+        name="details.meetingPoint"
+        label="Meeting point"
+        rows={3}
+        maxLength={500}
+        defaultValue={details.meetingPoint}
+        hint="Where everybody goes when a shelter fails in the night."
       />
       <TextArea
         name="details.notes"

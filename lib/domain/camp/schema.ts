@@ -54,14 +54,45 @@ export const windbreakSchema = z.object({
   distanceM: numberBetween("the distance to the windbreak", 0, 3000, "m"),
 });
 
+/** What a camp's place can do to people, and what to do about it: common practice, no source. */
 export const HAZARDS = [
-  { key: "dead-limbs", name: "Dead limbs overhead" },
-  { key: "flood-plain", name: "Flood plain or stream bed" },
-  { key: "ridge", name: "Ridge or summit in thunder" },
-  { key: "avalanche", name: "Avalanche slope above" },
-  { key: "rockfall", name: "Rockfall" },
-  { key: "tide", name: "Tide" },
-  { key: "fire", name: "Fire danger" },
+  {
+    key: "dead-limbs",
+    name: "Dead limbs overhead",
+    caution: "Look up before you pitch: nothing dead or hung up above a shelter, nor within its fall.",
+  },
+  {
+    key: "flood-plain",
+    name: "Flood plain or stream bed",
+    caution: "Pitch above the last flood mark. Rain far upstream counts. Know the way up in the dark.",
+  },
+  {
+    key: "ridge",
+    name: "Ridge or summit in thunder",
+    caution: "More wind than below, and first to be struck. Go down before thunder, not in it.",
+  },
+  {
+    key: "lightning",
+    name: "Lightning ground",
+    caution:
+      "Keep off lone trees, open water and wire. In thunder crouch apart on dry mats, away from poles and lines.",
+  },
+  {
+    key: "avalanche",
+    name: "Avalanche slope above",
+    caution: "Camp outside the run of every slope above, also with new snow or wind. Read the day's bulletin.",
+  },
+  {
+    key: "rockfall",
+    name: "Rockfall",
+    caution: "Stay clear of fresh stones and of what is above them, most of all in thaw and rain.",
+  },
+  {
+    key: "tide",
+    name: "Tide",
+    caution: "Pitch above the highest drift line. Look up high water for each night; wind on the shore adds to it.",
+  },
+  { key: "fire", name: "Fire danger", caution: "No open fire. Stoves on bare ground or rock, water at hand." },
 ] as const;
 export const HAZARD_KEYS = HAZARDS.map((hazard) => hazard.key);
 

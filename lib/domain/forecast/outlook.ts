@@ -4,10 +4,16 @@ import type { Verdict } from "@/lib/calc/types";
 const ORDER: readonly Verdict[] = ["holds", "thin", "unknown", "gives-way"];
 
 const NOW: Readonly<Record<Verdict, string>> = {
-  holds: "holds",
-  thin: "is thin",
-  "gives-way": "gives way",
-  unknown: "is not known",
+  holds: "now holds",
+  thin: "is now thin",
+  "gives-way": "now gives way",
+  unknown: "is not known now",
+};
+const STILL: Readonly<Record<Verdict, string>> = {
+  holds: "still holds",
+  thin: "is still thin",
+  "gives-way": "still gives way",
+  unknown: "is still not known",
 };
 const WAS: Readonly<Record<Verdict, string>> = {
   holds: "holds",
@@ -22,6 +28,6 @@ export function isWorse(before: Verdict, after: Verdict): boolean {
 
 /** "Skarn Edge now gives way: was holds", "Skarn Edge still holds". */
 export function compareVerdicts(name: string, before: Verdict, after: Verdict): string {
-  if (before === after) return `${name} still ${NOW[after]}`;
-  return `${name} now ${NOW[after]}: was ${WAS[before]}`;
+  if (before === after) return `${name} ${STILL[after]}`;
+  return `${name} ${NOW[after]}: was ${WAS[before]}`;
 }

@@ -63,14 +63,13 @@ export function windOfForecast(
   };
 }
 
+/** A form shows tenths of a unit, so saving it unchanged moves the speed by less than this, m/s. */
+const SAME_SPEED_MS = 0.06;
+
 /** Whether the camp is still planned for what a forecast said, or somebody has changed it since. */
 export function isStillPlanned(planned: PlannedWind, camp: PlannedWind): boolean {
-  const key = ({ wind, windFromDeg, windToDeg }: PlannedWind) =>
-    JSON.stringify([
-      wind?.kind,
-      wind && wind.kind !== "beaufort" ? wind.speedMs : wind?.number,
-      windFromDeg,
-      windToDeg,
-    ]);
-  return key(planned) === key(camp);
+  const [said, now] = [planned.wind, camp.wind];
+  if (!said || !now || said.kind === "beaufort" || now.kind !== said.kind) return false;
+  const isSameRange = planned.windFromDeg === camp.windFromDeg && planned.windToDeg === camp.windToDeg;
+  return isSameRange && Math.abs(said.speedMs - now.speedMs) < SAME_SPEED_MS;
 }

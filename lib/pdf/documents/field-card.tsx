@@ -1,12 +1,12 @@
 import type { ReactElement } from "react";
 import { View } from "@react-pdf/renderer";
-import type { PitchView } from "@/lib/domain/views";
+import type { Preferences } from "@/lib/domain/preferences";
+import type { PaperForecast, PitchView } from "@/lib/domain/views";
 import { formatWindRange } from "@/lib/format/angles";
 import { formatAltitude } from "@/lib/format/lengths";
 import { withUnit } from "@/lib/format/numbers";
 import { formatPosition } from "@/lib/format/positions";
 import { formatBeaufort, formatSpeed } from "@/lib/format/speeds";
-import { startSentence } from "@/lib/format/words";
 import { columns, fillPages, hairline, rule, spacer, stack, textBlock, type Block } from "../sections/block";
 import { factRow } from "../sections/facts";
 import { contactsNote, note, stackNotes } from "../sections/notes";
@@ -27,10 +27,12 @@ import {
   facingWords,
   groundName,
   groundRemarks,
-  hazardNames,
+  forecastLines,
+  forecastSource,
+  hazardCautions,
   holdsToWords,
-  lowerFirst,
   nightWords,
+  waterWords,
 } from "../words";
 import { planGrid, resultOf } from "./camp-plans";
 import { rowsOf, type CardContext } from "./pitch-card";
@@ -130,6 +132,11 @@ function groundWords(details: CardContext["camp"]["camp"]["details"]): string {
   return second === null ? main : `${main}\nSecond patch: ${second.toLowerCase()}`;
 }
 
+function forecastNote(forecast: PaperForecast, preferences: Preferences, width: number): Block {
+  const lines = [...forecastLines(forecast.nights, preferences), forecastSource(forecast)];
+  return note("Forecast planned with", lines.join("\n"), width);
+}
+
 const GAP = 14;
 
 function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
@@ -140,7 +147,8 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
       ? null
       : formatPosition(details.latitude, details.longitude);
   const altitude = details.altitudeM === null ? null : formatAltitude(details.altitudeM, preferences.lengthUnit);
-  const hazards = hazardNames(details.hazards);
+  const cautions = hazardCautions(details.hazards);
+  const water = waterWords(details, preferences.lengthUnit);
   return stack([
     spacer(8),
     columns(
@@ -149,14 +157,17 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
           width,
           block: stackNotes([
             note("Place", [position ?? "position not said", altitude].filter(Boolean).join("\n"), width),
-            details.water ? note("Water", details.water, width) : null,
+            water ? note("Water", water, width) : null,
+            details.wayOut ? note("Way out", details.wayOut, width) : null,
+            details.meetingPoint ? note("Meet at", details.meetingPoint, width) : null,
             details.notes ? note("Notes", details.notes, width) : null,
           ]),
         },
         {
           width,
           block: stackNotes([
-            hazards.length ? note("Mind", `${startSentence(hazards.map(lowerFirst).join(", "))}.`, width) : null,
+            cautions.length ? note("Mind", cautions.join("\n"), width) : null,
+            camp.forecast ? forecastNote(camp.forecast, preferences, width) : null,
             camp.result.retension === null ? null : note("Check again", camp.result.retension, width),
           ]),
         },

@@ -3,6 +3,7 @@ import type { ShelterResult } from "@/lib/calc/types";
 import type { Preferences } from "@/lib/domain/preferences";
 import type { Contact } from "@/lib/domain/trip/schema";
 import type { PaperCamp, PaperHeader, PitchView } from "@/lib/domain/views";
+import { startSentence } from "@/lib/format/words";
 import { columns, fillPages, spacer, stack, type Block } from "../sections/block";
 import { factRow } from "../sections/facts";
 import { contactsNote, note, numberedNote, stackNotes } from "../sections/notes";
@@ -22,7 +23,9 @@ import {
   facingWords,
   groundName,
   groundRemarks,
+  hazardNames,
   holdsToWords,
+  lowerFirst,
   nightWords,
   patchOf,
   tieOutsByNumber,
@@ -152,6 +155,16 @@ export function drawingOf(
 
 const COLUMN_GAP = 16;
 
+/** Names only: what to do about each stands on the field card. */
+function mindNote({ camp }: PaperCamp, width: number): Block | null {
+  const { hazards, meetingPoint } = camp.details;
+  const lines = [
+    hazards.length > 0 ? `${startSentence(hazardNames(hazards).map(lowerFirst).join(", "))}.` : "",
+    meetingPoint ? `Meet at: ${meetingPoint}` : "",
+  ].filter(Boolean);
+  return lines.length === 0 ? null : note("Mind", lines.join("\n"), width);
+}
+
 function notesOf({ contacts, camp, sheet }: CardContext, pitch: PitchView): Block {
   const text = sheet.inner - (contacts.length > 0 ? 2 : 1) * COLUMN_GAP;
   const [left, middle] = contacts.length > 0 ? [text * 0.38, text * 0.38] : [text * 0.55, text * 0.45];
@@ -175,6 +188,7 @@ function notesOf({ contacts, camp, sheet }: CardContext, pitch: PitchView): Bloc
         block: stackNotes([
           note("Sleep here", names.length ? names.join(", ") : "Nobody placed yet.", middle),
           camp.result.retension === null ? null : note("Check again", camp.result.retension, middle),
+          mindNote(camp, middle),
         ]),
       },
       ...(contacts.length > 0

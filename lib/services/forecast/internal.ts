@@ -34,6 +34,19 @@ export async function loadForecastRows(reader: Reader, tripId: string): Promise<
   };
 }
 
+export async function findAcceptedRow(
+  reader: Reader,
+  tripId: string,
+  campId: string,
+): Promise<AcceptedRow | undefined> {
+  const [row] = await reader
+    .select()
+    .from(acceptedForecast)
+    .where(and(eq(acceptedForecast.tripId, tripId), eq(acceptedForecast.campId, campId)))
+    .limit(1);
+  return row;
+}
+
 /** Forgets all but the newest few of a camp. */
 export async function trimForecasts(tx: Transaction, tripId: string, campId: string): Promise<void> {
   const own = and(eq(forecast.tripId, tripId), eq(forecast.campId, campId));

@@ -1,6 +1,9 @@
+import { getDb } from "@/db/client";
 import type { Preferences } from "@/lib/domain/preferences";
-import type { PaperCamp } from "@/lib/domain/views";
+import type { PaperCamp, PaperForecast } from "@/lib/domain/views";
+import { formatInstant } from "@/lib/format/days";
 import { workOutCamp } from "../analysis/work-out-camp";
+import { findAcceptedRow, toAcceptedView } from "../forecast/internal";
 import type { CampState, TripState } from "../plan/load-trip-state";
 import { listFallbacks } from "./fallbacks";
 
@@ -18,12 +21,22 @@ function numberNights(state: TripState, { camp }: CampState): string {
   return `${first === last ? first : `${first}–${last}`} of ${days.length}`;
 }
 
+/** Only what the plan stands on: a forecast that was typed over since has no place on a card. */
+async function findPaperForecast({ state }: PaperDesk, own: CampState): Promise<PaperForecast | null> {
+  const { camp } = own;
+  const accepted = toAcceptedView(own, await findAcceptedRow(getDb(), state.trip.id, camp.id));
+  if (!accepted?.isPlanned) return null;
+  return {
+    source: accepted.source,
+    isSample: accepted.isSample,
+    fetchedAt: formatInstant(accepted.fetchedAt, state.trip.timeZone),
+    nights: accepted.nights.filter((night) => camp.days.includes(night.day)),
+  };
+}
+
 /** A camp worked out for printing; one pitch of it, or all. */
-export async function toPaperCamp(
-  { state, speedUnit }: PaperDesk,
-  own: CampState,
-  pitchId: string | null,
-): Promise<PaperCamp> {
+export async function toPaperCamp(desk: PaperDesk, own: CampState, pitchId: string | null): Promise<PaperCamp> {
+  const { state, speedUnit } = desk;
   const worked = await workOutCamp(own);
   const isWanted = (id: string) => pitchId === null || id === pitchId;
   const names = new Map(state.people.map((one) => [one.id, one.name]));
@@ -31,6 +44,7 @@ export async function toPaperCamp(
   const fallbacks = await listFallbacks(worked, speedUnit);
   return {
     camp: own.camp,
+    forecast: await findPaperForecast(desk, own),
     nightNumbers: numberNights(state, own),
     pitches,
     tray: own.tray,

@@ -51,6 +51,10 @@ async function expectRefused(answer: Answer, what: string): Promise<void> {
 }
 
 const CAMP = "trips/[tripId]/camps#updateCampAction";
+const WEATHER = "trips/[tripId]/camps/[campId]/weather";
+const FORECAST = `${WEATHER}#fetchForecastAction`;
+const ACCEPT = `${WEATHER}#acceptForecastAction`;
+const BESIDE = `${WEATHER}#createAlternativeAction`;
 const TRIP = "trips/[tripId]/settings#updateTripAction";
 const PITCH = "trips/[tripId]/camps/[campId]/shelters#updatePitchAction";
 const SLEEPERS = "trips/[tripId]/camps/[campId]/shelters#saveSleepersAction";
@@ -82,6 +86,16 @@ const ROWS: readonly [string, string, () => object, string][] = [
   [CAMP, "notes of a million letters", () => camp({ notes: million }), "details.notes"],
   [CAMP, "ground on the moon", () => camp({ ground: { kind: "regolith", wetness: "dry" } }), "details.ground.kind"],
   [CAMP, "hazards as text", () => camp({ hazards: "tide" }), "details.hazards"],
+  [CAMP, "a hazard of our own", () => camp({ hazards: ["dragons"] }), "details.hazards.0"],
+  [CAMP, "water beyond the horizon", () => camp({ waterDistanceM: 20_001 }), "details.waterDistanceM"],
+  [CAMP, "water behind one's back", () => camp({ waterDistanceM: -1 }), "details.waterDistanceM"],
+  [CAMP, "a way out of a million letters", () => camp({ wayOut: million }), "details.wayOut"],
+  [CAMP, "a meeting point that can't be text", () => camp({ meetingPoint: { toString: 1 } }), "details.meetingPoint"],
+  [FORECAST, "a camp that is no identifier", () => ({ campId: "../x" }), "campId"],
+  [ACCEPT, "a forecast that is no identifier", () => ({ forecastId: "__proto__" }), "forecastId"],
+  [ACCEPT, "a version that is none", () => ({ version: 0.5 }), "version"],
+  [BESIDE, "an alternative without a name", () => ({ name: "\u0000" }), "name"],
+  [BESIDE, "an alternative with a name of a million letters", () => ({ name: million }), "name"],
   [CAMP, "a version that is none", () => ({ version: 9007199254740993 }), "version"],
   [CAMP, "no version", () => ({ version: null }), "version"],
   [CAMP, "a camp that is no identifier", () => ({ campId: "__proto__" }), "campId"],

@@ -93,6 +93,7 @@ export function paperCamp(requests: readonly PitchRequest[], details: CampDetail
   const result = evaluateCamp({ ...input, placements });
   return {
     camp: { id, position: 0, days: ["2026-06-14"], alternativeTo: null, details, version: 3 },
+    forecast: null,
     nightNumbers: "3 of 5",
     pitches,
     tray: TRAY,

@@ -97,6 +97,11 @@ export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Re
     },
     "trips/[tripId]/route#deleteRouteAction": { tripId },
     "trips/[tripId]/route#createCampsFromPlacesAction": { tripId, places: [0] },
+    "trips/[tripId]/camps/[campId]/weather#fetchForecastAction": camp,
+    "trips/[tripId]/camps/[campId]/weather#checkAllCampsAction": { tripId },
+    "trips/[tripId]/camps/[campId]/weather#acceptForecastAction": { ...camp, forecastId: a.forecastId, version: 1 },
+    "trips/[tripId]/camps/[campId]/weather#createAlternativeAction": { ...camp, name: "Bield below" },
+    "trips/[tripId]/camps/[campId]/weather#switchToAlternativeAction": { tripId, campId: a.alternativeId },
     "trips/[tripId]/camps/[campId]/shelters#createPitchAction": { ...camp, shelterId: a.spareShelterId },
     "trips/[tripId]/camps/[campId]/shelters#updatePitchAction": {
       ...camp,

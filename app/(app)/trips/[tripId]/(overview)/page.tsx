@@ -1,17 +1,23 @@
 import { redirect } from "next/navigation";
 import { Suspense } from "react";
+import { Alternatives } from "@/components/forecast/alternatives";
+import { TripForecasts } from "@/components/forecast/trip-forecasts";
 import { AltitudeSteps } from "@/components/trip/altitude-steps";
 import { BeforeYouGo } from "@/components/trip/before-you-go";
 import { NightsTable } from "@/components/trip/nights-table";
 import { PageBody, PageSkeleton } from "@/components/trip/page-body";
 import { TripFacts } from "@/components/trip/trip-facts";
 import { LinkButton } from "@/components/ui/button";
-import { Cautions, EmptyState, PageHeading } from "@/components/ui/layout";
+import { Cautions, EmptyState, PageHeading, Section } from "@/components/ui/layout";
 import { isAllowed } from "@/lib/domain/permissions/permissions";
 import type { Preferences } from "@/lib/domain/preferences";
+import type { TripView } from "@/lib/domain/views";
+import { listAlternatives } from "@/lib/services/camps/list-alternatives";
+import { listTripForecasts } from "@/lib/services/forecast/list-trip-forecasts";
 import type { Context } from "@/lib/services/context/context";
 import { getTripOverview } from "@/lib/services/trips/get-trip-overview";
 import { loadTrip } from "../_lib/load-trip";
+import { checkAllCampsAction, switchToAlternativeAction } from "../camps/[campId]/weather/actions";
 
 interface TripPageProps {
   readonly params: Promise<{ tripId: string }>;
@@ -76,7 +82,39 @@ async function Overview({ ctx, tripId, preferences }: { ctx: Context; tripId: st
           </LinkButton>
         </div>
       )}
+      <Suspense fallback={<PageSkeleton rows={2} />}>
+        <Weather ctx={ctx} trip={trip} preferences={preferences} />
+      </Suspense>
       <Cautions />
     </PageBody>
+  );
+}
+
+async function Weather({ ctx, trip, preferences }: { ctx: Context; trip: TripView; preferences: Preferences }) {
+  const input = { tripId: trip.id };
+  const forecasts = await listTripForecasts({ ctx, input });
+  const alternatives = await listAlternatives({ ctx, input });
+  return (
+    <>
+      <Section title="Forecast">
+        <TripForecasts
+          forecasts={forecasts}
+          tripId={trip.id}
+          timeZone={trip.timeZone}
+          preferences={preferences}
+          checkAction={checkAllCampsAction}
+        />
+      </Section>
+      {alternatives.length > 0 && (
+        <Section title="In bad weather" lead="Kept beside the line of nights until you use them.">
+          <Alternatives
+            tripId={trip.id}
+            alternatives={alternatives}
+            unit={preferences.speedUnit}
+            switchAction={switchToAlternativeAction}
+          />
+        </Section>
+      )}
+    </>
   );
 }

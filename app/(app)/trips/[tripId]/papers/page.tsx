@@ -14,6 +14,7 @@ import type { TripView } from "@/lib/domain/views";
 import { renderPapersMail } from "@/lib/email/templates/trip-mails";
 import { formatDayShort } from "@/lib/format/days";
 import type { Context } from "@/lib/services/context/context";
+import { listAlternatives } from "@/lib/services/camps/list-alternatives";
 import { listCampSummaries } from "@/lib/services/camps/list-camp-summaries";
 import { listOwnPagesStates } from "@/lib/services/own-pages/list-own-pages-states";
 import { listPeople } from "@/lib/services/people/list-people";
@@ -44,6 +45,7 @@ async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView
     listOwnPagesStates({ ctx, input }),
     isAllowed(trip.role, "post.read") ? listMessages({ ctx, input }) : [],
   ]);
+  const alternatives = await listAlternatives({ ctx, input });
   const sleeping = await Promise.all(
     camps.map((camp) => getSleepingPlan({ ctx, input: { tripId: trip.id, campId: camp.id } })),
   );
@@ -59,12 +61,20 @@ async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView
         <PaperList
           tripId={trip.id}
           initialSize={preferences.paperSize}
-          camps={camps.map((camp, index) => ({
-            id: camp.id,
-            name: camp.name,
-            days: camp.days.map(formatDayShort).join(", "),
-            pitches: (sleeping[index]?.pitches ?? []).map(({ id, name }) => ({ id, name })),
-          }))}
+          camps={[
+            ...camps.map((camp, index) => ({
+              id: camp.id,
+              name: camp.name,
+              days: camp.days.map(formatDayShort).join(", "),
+              pitches: (sleeping[index]?.pitches ?? []).map(({ id, name }) => ({ id, name })),
+            })),
+            ...alternatives.map(({ id, name, alternativeTo, pitches }) => ({
+              id,
+              name,
+              days: `in bad weather, in place of ${alternativeTo.name}`,
+              pitches,
+            })),
+          ]}
           people={people.map(({ id, name }) => ({ id, name }))}
         />
       </Section>

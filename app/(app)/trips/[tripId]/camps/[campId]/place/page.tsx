@@ -51,6 +51,7 @@ export default async function PlacePage({ params }: PlacePageProps) {
         campId={campId}
         version={camp.version}
         details={details}
+        standsByFor={camp.alternativeTo?.name ?? null}
         hazards={HAZARDS}
         preferences={preferences}
       />
