@@ -143,26 +143,6 @@ export interface PackItemView {
   readonly massKg: number | null;
 }
 
-/** Who carries what of the group's gear, and what nobody carries yet. */
-export interface CarryPlanView {
-  readonly people: readonly { readonly id: string; readonly name: string; readonly massKg: number }[];
-  readonly shelters: readonly {
-    readonly id: string;
-    readonly name: string;
-    readonly massKg: number | null;
-    readonly carrierId: string | null;
-  }[];
-  readonly kitItems: readonly {
-    readonly id: string;
-    readonly name: string;
-    readonly massKgEach: number;
-    readonly count: number;
-    readonly carriers: readonly { readonly personId: string; readonly count: number }[];
-    /** How many nobody carries yet. */
-    readonly leftCount: number;
-  }[];
-}
-
 /** A camp as the plan sees it, for the line of nights and the overview. */
 export interface CampSummary {
   readonly id: string;

@@ -33,6 +33,7 @@ export const PERMISSIONS = {
   "paper.all": { sentence: "print every card and list", roles: ["leader", "co-leader"] },
   "paper.own": { sentence: "print your own cards and list", roles: ["leader", "co-leader", "participant"] },
   "pack.edit": { sentence: "change what people bring and carry", roles: ["leader", "co-leader"] },
+  "load.own": { sentence: "say what you can carry", roles: ["leader", "co-leader", "participant"] },
   "pack.tick": { sentence: "tick off your own pack list", roles: ["leader", "co-leader", "participant"] },
   "history.read": { sentence: "see who changed what", roles: ["leader", "co-leader"] },
   "comment.read": { sentence: "read comments on camps and shelters", roles: ["leader", "co-leader"] },

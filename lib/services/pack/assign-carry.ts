@@ -10,6 +10,7 @@ import type { Context } from "@/lib/services/context/context";
 import { loadTripState, type TripState } from "../plan/load-trip-state";
 import { recordChange } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
+import { listPieces, loadLoadSources, toShares, type LoadSources } from "./load-pieces";
 
 export type Load = z.output<typeof carrySaveInput>["carries"][number];
 
@@ -17,24 +18,49 @@ function refuse(message: string): never {
   throw new AppError("bad-input", message, { fieldErrors: { carries: [message] } });
 }
 
-/** Nothing is carried twice, and no more of a thing than there is. */
-function requireFits(state: TripState, loads: readonly Load[]): void {
-  const people = new Set(state.people.map((one) => one.id));
-  if (loads.some((load) => !people.has(load.personId))) refuse("Somebody here is not on this trip.");
-  const shelterIds = loads.flatMap((load) => (load.type === "shelter" ? load.shelterId : []));
-  if (new Set(shelterIds).size !== shelterIds.length) refuse("A shelter is given to two people.");
-  if (shelterIds.some((id) => !state.shelters.some((one) => one.id === id)))
-    refuse("A shelter here is not on this trip.");
-  const counts = new Map<string, number>();
-  for (const load of loads) {
-    if (load.type === "kit") counts.set(load.kitItemId, (counts.get(load.kitItemId) ?? 0) + load.count);
+type CarryValues = Omit<typeof carry.$inferSelect, "id" | "tripId">;
+
+function toRow(load: Load): CarryValues {
+  const { personId, isFixed } = load;
+  const none = { personId, isFixed, shelterId: null, part: null, kitItemId: null, groupThingId: null, count: 1 };
+  switch (load.type) {
+    case "shelter":
+      return { ...none, shelterId: load.shelterId, part: load.part };
+    case "kit":
+      return { ...none, kitItemId: load.kitItemId, count: load.count };
+    case "thing":
+      return { ...none, groupThingId: load.thingId };
   }
-  for (const [id, count] of counts) {
-    const item = state.kit.find((one) => one.id === id);
-    if (!item) refuse("A thing here is not in this trip's kit.");
-    if (count > item.details.count) {
-      refuse(`There are only ${item.details.count} of ${item.details.name}; ${count} are given out.`);
+}
+
+const MISSING: Readonly<Record<Load["type"], string>> = {
+  shelter: "A shelter here, or a part of it, is not on this trip.",
+  kit: "A thing here is not in this trip's kit.",
+  thing: "A thing here is not among the group's things.",
+};
+
+/** Nothing is carried twice, and no more of a thing than there is. */
+function requireFits(state: TripState, sources: LoadSources, loads: readonly Load[]): void {
+  const people = new Set(state.people.map((one) => one.id));
+  const pieces = new Map(listPieces(state, sources).map((piece) => [piece.key, piece]));
+  const given = new Map<string, number>();
+  for (const load of loads) {
+    if (!people.has(load.personId)) refuse("Somebody here is not on this trip.");
+    const shares = toShares({ ...toRow(load), id: "", tripId: state.trip.id }, sources.splits);
+    if (shares.length === 0) refuse(MISSING[load.type]);
+    for (const { key, count } of shares) {
+      if (!pieces.has(key)) refuse(MISSING[load.type]);
+      given.set(key, (given.get(key) ?? 0) + count);
     }
+  }
+  for (const [key, count] of given) {
+    const piece = pieces.get(key);
+    if (!piece || count <= piece.count) continue;
+    refuse(
+      piece.count === 1
+        ? `${piece.name} is given to two people.`
+        : `There are only ${piece.count} of ${piece.name}; ${count} are given out.`,
+    );
   }
 }
 
@@ -44,20 +70,11 @@ export async function writeLoads(
   state: TripState,
   loads: readonly Load[],
 ): Promise<void> {
-  requireFits(state, loads);
   const tripId = state.trip.id;
+  requireFits(state, await loadLoadSources(tx, tripId), loads);
   await tx.delete(carry).where(eq(carry.tripId, tripId));
   if (loads.length > 0) {
-    await tx.insert(carry).values(
-      loads.map((load) => ({
-        id: newId(),
-        tripId,
-        personId: load.personId,
-        shelterId: load.type === "shelter" ? load.shelterId : null,
-        kitItemId: load.type === "kit" ? load.kitItemId : null,
-        count: load.type === "kit" ? load.count : 1,
-      })),
-    );
+    await tx.insert(carry).values(loads.map((load) => ({ ...toRow(load), id: newId(), tripId })));
   }
   await recordChange(tx, ctx, {
     tripId,

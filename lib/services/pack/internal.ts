@@ -7,6 +7,7 @@ import { formatLength } from "@/lib/format/lengths";
 import type { KitRow } from "../kit/internal";
 import type { TripState } from "../plan/load-trip-state";
 import type { Reader } from "../trips/internal";
+import { listPieces, loadLoadSources, toShares, type LoadSources } from "./load-pieces";
 
 export type CarryRow = typeof carry.$inferSelect;
 export type PackItemRow = typeof packItem.$inferSelect;
@@ -55,6 +56,7 @@ export interface PackSources {
   readonly items: readonly PackItemRow[];
   readonly carries: readonly CarryRow[];
   readonly ticks: ReadonlyMap<string, ReadonlySet<string>>;
+  readonly loads: LoadSources;
 }
 
 export async function loadPackSources(reader: Reader, state: TripState): Promise<PackSources> {
@@ -64,23 +66,29 @@ export async function loadPackSources(reader: Reader, state: TripState): Promise
     items: await listPackItemRows(reader, tripId),
     carries: await listCarryRows(reader, tripId),
     ticks: await listTicks(reader, tripId),
+    loads: await loadLoadSources(reader, tripId),
   };
 }
 
-function listGroupLines({ state, carries }: PackSources, personId: string): PackLine[] {
+function listGroupLines({ state, carries, loads }: PackSources, personId: string): PackLine[] {
+  const pieces = new Map(listPieces(state, loads).map((piece) => [piece.key, piece]));
   return carries
     .filter((row) => row.personId === personId)
-    .flatMap((row): PackLine[] => {
-      const shelter = state.shelters.find((one) => one.id === row.shelterId);
-      if (shelter) {
-        const detail = `sleeps ${shelter.sleeps}`;
-        return [{ key: `shelter:${shelter.id}`, name: shelter.name, detail, massKg: shelter.massKg, isTicked: false }];
-      }
-      const item = state.kit.find((one) => one.id === row.kitItemId);
-      if (!item) return [];
-      const massKg = item.details.massKg * row.count;
-      const name = `${row.count} × ${item.details.name}`;
-      return [{ key: `kit:${item.id}`, name, detail: describeKit(item), massKg, isTicked: false }];
+    .flatMap((row) => toShares(row, loads.splits))
+    .flatMap(({ key, count }): PackLine[] => {
+      const piece = pieces.get(key);
+      if (!piece) return [];
+      const item = state.kit.find((one) => key === `kit:${one.id}`);
+      const shelter = state.shelters.find((one) => key === `shelter:${one.id}` || key === `fly:${one.id}`);
+      return [
+        {
+          key,
+          name: item ? `${count} × ${piece.name}` : piece.name,
+          detail: item ? describeKit(item) : shelter ? `sleeps ${shelter.sleeps}` : "",
+          massKg: piece.massKgEach === null ? null : piece.massKgEach * count,
+          isTicked: false,
+        },
+      ];
     });
 }
 

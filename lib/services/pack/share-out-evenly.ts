@@ -1,36 +1,33 @@
 import type { z } from "zod";
 import { withTransaction } from "@/db/client";
-import { shareOutByMass } from "@/lib/domain/pack/share-out";
+import { carrySaveInput } from "@/lib/domain/pack/schema";
+import { shareOut } from "@/lib/domain/pack/share-plan";
+import { toCarries } from "@/lib/domain/pack/to-carries";
 import { tripRefInput } from "@/lib/domain/trip/schema";
+import { AppError } from "@/lib/errors";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
 import { loadTripState } from "../plan/load-trip-state";
 import { parseInput } from "../trips/parse-input";
-import { writeLoads, type Load } from "./assign-carry";
+import { writeLoads } from "./assign-carry";
+import { buildLoadPlan } from "./get-load-plan";
 
-/** All shelters and the whole kit among everybody on the trip, by mass; a shelter of unknown mass counts as none. */
+/** Everything that is not fixed among everybody on the trip, so that the largest load by its limit is least. */
 export async function shareOutEvenly({
   ctx,
   input,
 }: {
   ctx: Context;
   input: z.input<typeof tripRefInput>;
-}): Promise<void> {
+}): Promise<{ largest: number; bound: number }> {
   const { tripId } = parseInput(tripRefInput, input);
-  await withTransaction(async (tx) => {
+  return withTransaction(async (tx) => {
     await requirePermission(ctx, tripId, "pack.edit", tx);
     const state = await loadTripState(tx, tripId);
-    const shelters = new Set(state.shelters.map((one) => one.id));
-    const things = [
-      ...state.shelters.map(({ id, massKg }) => ({ id, massKg: massKg ?? 0, count: 1 })),
-      ...state.kit.map(({ id, details }) => ({ id, massKg: details.massKg, count: details.count })),
-    ];
-    const people = state.people.map((one) => one.id);
-    const loads = shareOutByMass(people, things).map(({ personId, thingId, count }): Load =>
-      shelters.has(thingId)
-        ? { type: "shelter", personId, shelterId: thingId }
-        : { type: "kit", personId, kitItemId: thingId, count },
-    );
-    await writeLoads(tx, ctx, state, loads);
+    if (state.people.length === 0) throw new AppError("bad-input", "Nobody is on this trip to carry anything.");
+    const { shares, largest, bound } = shareOut(await buildLoadPlan(tx, state));
+    const { carries } = carrySaveInput.parse({ tripId, carries: toCarries(shares) });
+    await writeLoads(tx, ctx, state, carries);
+    return { largest, bound };
   });
 }

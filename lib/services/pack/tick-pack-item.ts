@@ -9,6 +9,7 @@ import { requirePermission } from "@/lib/auth/permission";
 import type { Context } from "@/lib/services/context/context";
 import { parseInput } from "../trips/parse-input";
 import { listCarryRows, listPackItemRows } from "./internal";
+import { loadLoadSources, toShares } from "./load-pieces";
 
 /** On one's own list only. Ticking twice is ticking once. */
 export async function tickPackItem({
@@ -25,9 +26,10 @@ export async function tickPackItem({
       (row) => row.personId === null || row.personId === personId,
     );
     const carries = (await listCarryRows(tx, tripId)).filter((row) => row.personId === personId);
+    const { splits } = await loadLoadSources(tx, tripId);
     const keys = new Set([
       ...items.map((row) => `item:${row.id}`),
-      ...carries.map((row) => (row.shelterId ? `shelter:${row.shelterId}` : `kit:${row.kitItemId ?? ""}`)),
+      ...carries.flatMap((row) => toShares(row, splits)).map((share) => share.key),
     ]);
     if (!keys.has(key)) throw new AppError("not-found", "That line is not on your list.");
     const own = and(eq(packTick.personId, personId), eq(packTick.tripId, tripId), eq(packTick.itemKey, key));

@@ -1,7 +1,7 @@
 import { and, eq, isNull } from "drizzle-orm";
 import type { z } from "zod";
 import { withTransaction, type Transaction } from "@/db/client";
-import { carry, kitItem, packItem, person, shelter, trip } from "@/db/schema";
+import { carry, groupThing, kitItem, packItem, person, shelter, shelterSplit, trip } from "@/db/schema";
 import { newId } from "@/lib/domain/ids";
 import { tripCopyInput } from "@/lib/domain/trip/schema";
 import { requirePermission } from "@/lib/auth/permission";
@@ -9,6 +9,7 @@ import type { Context } from "@/lib/services/context/context";
 import { cloneCamp } from "../camps/clone-camp";
 import { listAlternativeRows, listCampRows } from "../camps/internal";
 import { listKitRows } from "../kit/internal";
+import { loadLoadSources } from "../pack/load-pieces";
 import { listShelterRows } from "../shelters/internal";
 import { loadTripRow, recordChange, requireRoomForTrip } from "./internal";
 import { parseInput } from "./parse-input";
@@ -68,12 +69,26 @@ async function copyPacking(
     .where(and(eq(packItem.tripId, tripId), isNull(packItem.personId)))) {
     await tx.insert(packItem).values({ ...row, id: newId(), tripId: copyId });
   }
+  const things = new Map<string, string>();
+  const { things: thingRows, splits } = await loadLoadSources(tx, tripId);
+  for (const row of thingRows) {
+    const id = newId();
+    things.set(row.id, id);
+    await tx.insert(groupThing).values({ ...row, id, tripId: copyId });
+  }
+  for (const row of splits.values()) {
+    const shelterId = gear.shelters.get(row.shelterId);
+    if (shelterId) await tx.insert(shelterSplit).values({ ...row, shelterId, tripId: copyId });
+  }
   for (const row of await tx.select().from(carry).where(eq(carry.tripId, tripId))) {
     const personId = people.get(row.personId);
     if (!personId) continue;
     const shelterId = row.shelterId && gear.shelters.get(row.shelterId);
     const kitItemId = row.kitItemId && gear.kit.get(row.kitItemId);
-    await tx.insert(carry).values({ id: newId(), tripId: copyId, personId, shelterId, kitItemId, count: row.count });
+    const groupThingId = row.groupThingId && things.get(row.groupThingId);
+    if (!shelterId && !kitItemId && !groupThingId) continue;
+    const ids = { id: newId(), tripId: copyId, personId, shelterId, kitItemId, groupThingId };
+    await tx.insert(carry).values({ ...row, ...ids });
   }
 }
 

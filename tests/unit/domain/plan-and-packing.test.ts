@@ -1,7 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import type { Placement, TrayAnchor } from "@/lib/calc/types";
-import { shareOutByMass } from "@/lib/domain/pack/share-out";
 import { judgeIntent, type LaterChange } from "@/lib/domain/plan/judge-intent";
 import type { PlanChange } from "@/lib/domain/plan/schema";
 import { middleOfRange, suggestHeading } from "@/lib/domain/shelter/suggest-heading";
@@ -62,34 +61,6 @@ describe("what becomes of a change of a plan", () => {
     ["there is one shock cord", [], place("1", { shockCord: true }), [], "applied"],
     ["it is in use", [placement("2", { shockCord: true })], place("1", { shockCord: true }), [], "refused"],
   ] as const)("when %s", (_, before, change, others, outcome) => expect(judge(before, change, others)).toBe(outcome));
-});
-
-describe("sharing out", () => {
-  it("gives each piece to one person and keeps loads within one piece of each other", () => {
-    const things = fc.array(
-      fc.record({ massKg: fc.double({ min: 0, max: 3, noNaN: true }), count: fc.integer({ min: 0, max: 9 }) }),
-      { maxLength: 8 },
-    );
-    fc.assert(
-      fc.property(fc.integer({ min: 1, max: 7 }), things, (people, rows) => {
-        const ids = Array.from({ length: people }, (_, index) => `p${index}`);
-        const named = rows.map((row, index) => ({ ...row, id: `t${index}` }));
-        const shares = shareOutByMass(ids, named);
-        for (const thing of named) {
-          const given = shares.filter((one) => one.thingId === thing.id).reduce((sum, one) => sum + one.count, 0);
-          expect(given).toBe(thing.count);
-        }
-        const mass = (id: string) =>
-          shares
-            .filter((one) => one.personId === id)
-            .reduce((sum, one) => sum + one.count * (named.find((thing) => thing.id === one.thingId)?.massKg ?? 0), 0);
-        const loads = ids.map(mass);
-        const heaviest = Math.max(0, ...named.filter((thing) => thing.count > 0).map((thing) => thing.massKg));
-        expect(Math.max(...loads) - Math.min(...loads)).toBeLessThanOrEqual(heaviest + 1e-6);
-      }),
-    );
-    expect(shareOutByMass([], [{ id: "t", massKg: 1, count: 2 }])).toEqual([]);
-  });
 });
 
 describe("turning a shelter to the wind", () => {

@@ -4,6 +4,7 @@ import { CopyLine } from "@/components/own-pages/copy-line";
 import { OwnPitchCard } from "@/components/own-pages/own-card";
 import { ReadForm } from "@/components/own-pages/read-form";
 import { MyNights } from "@/components/pack/my-nights";
+import { OwnLoadForm } from "@/components/pack/own-load-form";
 import { TickList } from "@/components/pack/tick-list";
 import { PaperLink } from "@/components/papers/paper-list";
 import { paperHref } from "@/components/papers/paper-links";
@@ -16,8 +17,9 @@ import { formatDay, formatDayRange } from "@/lib/format/days";
 import { formatMass } from "@/lib/format/masses";
 import { plural } from "@/lib/format/words";
 import { getOwnHome } from "@/lib/services/own-pages/get-own-home";
+import { getOwnLoad } from "@/lib/services/pack/save-person-load";
 import { loadTrip } from "../_lib/load-trip";
-import { markOwnPagesReadAction, tickPackItemAction } from "./actions";
+import { markOwnPagesReadAction, saveOwnLoadAction, tickPackItemAction } from "./actions";
 
 export const metadata = { title: "Mine" };
 
@@ -25,6 +27,7 @@ export default async function MinePage({ params }: { readonly params: Promise<{ 
   const { ctx, trip, preferences } = await loadTrip(params, "paper.own");
   const home = await getOwnHome({ ctx, input: { tripId: trip.id } });
   const { list, cards } = home;
+  const load = await getOwnLoad({ ctx, input: { tripId: trip.id } });
   const size = preferences.paperSize;
   const paper = { paper: "pitch-and-pack", personId: list.person.id } as const;
   const knots = KNOT_GUIDE.filter(({ key }) => cards.some((card) => card.steps.some((step) => step.knot === key)));
@@ -64,6 +67,9 @@ export default async function MinePage({ params }: { readonly params: Promise<{ 
           />
         </Section>
       </div>
+      <Section title="What I can carry" lead="So that the group's things are shared out fairly.">
+        <OwnLoadForm load={load} tripId={trip.id} action={saveOwnLoadAction} />
+      </Section>
       {cards.length > 0 && (
         <Section title="How my shelters are pitched">
           {cards.map((card, index) => (
