@@ -2,10 +2,14 @@ import { beforeAll, describe, expect, it } from "vitest";
 import { makeCast } from "../../helpers/actors";
 import { makeCampKit } from "../../helpers/camp-kit";
 import { codeOf, refusalOf } from "../../helpers/refusals";
+import { addSeasonItems } from "@/lib/services/pack/add-season-items";
 import { assignCarry } from "@/lib/services/pack/assign-carry";
 import { getLoadPlan } from "@/lib/services/pack/get-load-plan";
 import { getPackList } from "@/lib/services/pack/get-pack-list";
 import { listPackItems } from "@/lib/services/pack/list-pack-items";
+import { saveGroupThings } from "@/lib/services/pack/save-group-things";
+import { saveLimit, saveOwnLoad } from "@/lib/services/pack/save-person-load";
+import { saveShelterSplit } from "@/lib/services/pack/save-shelter-split";
 import { savePackItems } from "@/lib/services/pack/save-pack-items";
 import { shareOutEvenly } from "@/lib/services/pack/share-out-evenly";
 import { tickPackItem } from "@/lib/services/pack/tick-pack-item";
@@ -126,5 +130,78 @@ describe("loads", () => {
     expect(await getLoadPlan({ ctx, input: one({}) })).toEqual(before);
     expect(await codeOf(shareOutEvenly({ ctx: cast.participant.ctx, input: one({}) }))).toBe("forbidden");
     expect(await codeOf(getLoadPlan({ ctx: cast.stranger.ctx, input: one({}) }))).toBe("not-found");
+  });
+});
+
+describe("fair shares", () => {
+  it("keep to limits, fixed pieces and who sleeps where, and are as even as they can be", async () => {
+    const { ctx } = cast.leader;
+    const { leader, coLeader, participant } = cast.personIds;
+    await saveGroupThings({
+      ctx,
+      input: one({
+        things: [
+          { id: null, name: "Stove", massKg: 0.4 },
+          { id: null, name: "Pots", massKg: 0.9 },
+        ],
+      }),
+    });
+    await saveShelterSplit({
+      ctx,
+      input: one({ shelterId: kit.shelterId, polesMassKg: 0.3, staysWithSleepers: true }),
+    });
+    await saveLimit({ ctx, input: one({ personId: leader, baseMassKg: 10, limitKg: 20 }) });
+    await saveLimit({ ctx, input: one({ personId: coLeader, baseMassKg: 10, limitKg: 12 }) });
+    const own = { baseMassKg: 8, bodyMassKg: 70, limitShare: 0.2, limitKg: null };
+    await saveOwnLoad({ ctx: cast.participant.ctx, input: one(own) });
+    const before = await getLoadPlan({ ctx, input: one({}) });
+    expect(before.people.find((person) => person.id === participant)?.limitKg).toBeCloseTo(14, 9);
+    expect(JSON.stringify(before)).not.toContain("bodyMassKg");
+    const stove = before.things[0]?.id ?? "";
+    const fixed = { type: "thing" as const, personId: coLeader, thingId: stove, isFixed: true };
+    await assignCarry({ ctx, input: one({ carries: [fixed] }) });
+    const { largest, bound } = await shareOutEvenly({ ctx, input: one({}) });
+    expect(largest).toBeLessThanOrEqual(bound * 1.02);
+    const plan = await getLoadPlan({ ctx, input: one({}) });
+    expect(plan.shares.find((share) => share.key === `thing:${stove}`)).toMatchObject({
+      personId: coLeader,
+      isFixed: true,
+    });
+    const sleepers = new Set([participant, leader]);
+    const ofTarp = plan.shares.filter((share) => /^(fly|poles):/.test(share.key));
+    expect(ofTarp).toHaveLength(2);
+    expect(ofTarp.every((share) => sleepers.has(share.personId))).toBe(true);
+    const list = await getPackList({ ctx: cast.coLeader.ctx, input: one({ personId: "self" }) });
+    expect(list.group).toMatchObject([{ key: `thing:${stove}`, name: "Stove", massKg: 0.4 }]);
+    await tickPackItem({ ctx: cast.coLeader.ctx, input: one({ key: `thing:${stove}`, isTicked: true }) });
+    const after = await getLoadPlan({ ctx, input: one({}) });
+    expect(after.people.find((person) => person.id === coLeader)).toMatchObject({ packedCount: 1 });
+  });
+
+  it("say when nobody can meet their limit, and refuse what no load can be", async () => {
+    const { ctx } = cast.leader;
+    const { leader } = cast.personIds;
+    await saveLimit({ ctx, input: one({ personId: leader, baseMassKg: 10, limitKg: 1 }) });
+    expect((await shareOutEvenly({ ctx, input: one({}) })).largest).toBe(10);
+    const bad = [
+      saveLimit({ ctx, input: one({ personId: leader, baseMassKg: -1, limitKg: 10 }) }),
+      saveLimit({ ctx, input: one({ personId: leader, baseMassKg: 1, limitKg: 0 }) }),
+      saveOwnLoad({ ctx, input: one({ baseMassKg: 1, bodyMassKg: 70, limitShare: 2, limitKg: null }) }),
+      saveShelterSplit({ ctx, input: one({ shelterId: kit.shelterId, polesMassKg: 5, staysWithSleepers: false }) }),
+      saveGroupThings({ ctx, input: one({ things: [{ id: null, name: "", massKg: -2 }] }) }),
+    ];
+    for (const work of bad) expect(await codeOf(work)).toBe("bad-input");
+    const foreign = one({ personId: cast.otherPersonId, baseMassKg: 1, limitKg: 10 });
+    expect(await codeOf(saveLimit({ ctx, input: foreign }))).toBe("not-found");
+    expect(await codeOf(saveLimit({ ctx: cast.participant.ctx, input: foreign }))).toBe("forbidden");
+  });
+
+  it("come with what a season needs, once", async () => {
+    const { ctx } = cast.leader;
+    const { added } = await addSeasonItems({ ctx, input: one({ season: "winter" }) });
+    expect(added).toBeGreaterThan(4);
+    expect((await addSeasonItems({ ctx, input: one({ season: "winter" }) })).added).toBe(0);
+    const names = (await listPackItems({ ctx, input: one({}) })).map((item) => item.name);
+    expect(names).toContain("Snow shovel");
   });
 });

@@ -191,6 +191,30 @@ export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Re
       carries: [{ type: "kit", personId: given.personIds.leader, kitItemId: a.cordId, count: 2 }],
     },
     "trips/[tripId]/people/packing#shareOutEvenlyAction": { tripId },
+    "trips/[tripId]/people/packing#saveGroupThingsAction": {
+      tripId,
+      things: [{ id: null, name: "Stove", massKg: 0.4 }],
+    },
+    "trips/[tripId]/people/packing#saveShelterSplitAction": {
+      tripId,
+      shelterId: a.shelterId,
+      polesMassKg: 0.2,
+      staysWithSleepers: true,
+    },
+    "trips/[tripId]/people/packing#saveLimitAction": {
+      tripId,
+      personId: given.personIds.participant,
+      baseMassKg: 9,
+      limitKg: 16,
+    },
+    "trips/[tripId]/people/packing#addSeasonItemsAction": { tripId, season: "winter" },
+    "trips/[tripId]/mine#saveOwnLoadAction": {
+      tripId,
+      baseMassKg: 9,
+      bodyMassKg: 70,
+      limitPercent: 25,
+      limitKg: null,
+    },
     "trips/[tripId]/mine#tickPackItemAction": { tripId, key: `item:${a.packItemId}`, isTicked: true },
     "trips/[tripId]/papers#sendPapersAction": {
       tripId,
