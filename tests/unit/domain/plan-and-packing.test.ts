@@ -1,4 +1,3 @@
-import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import type { Placement, TrayAnchor } from "@/lib/calc/types";
 import { judgeIntent, type LaterChange } from "@/lib/domain/plan/judge-intent";
