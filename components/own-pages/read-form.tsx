@@ -7,17 +7,17 @@ import { ActionForm, SubmitButton, type FormAction } from "@/components/ui/actio
 export function ReadForm({
   action,
   tripId,
-  digest,
+  changedAt,
 }: {
   readonly action: FormAction<null>;
   readonly tripId: string;
-  readonly digest: string;
+  readonly changedAt: number;
 }) {
   const router = useRouter();
   return (
     <ActionForm action={action} onDone={() => router.refresh()}>
       <input type="hidden" name="tripId" value={tripId} />
-      <input type="hidden" name="digest" value={digest} />
+      <input type="hidden" name="changedAt:number" value={changedAt} />
       <SubmitButton className="min-h-12 w-full sm:w-auto">I have read my pages</SubmitButton>
     </ActionForm>
   );

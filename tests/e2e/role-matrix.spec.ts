@@ -87,6 +87,7 @@ test.beforeAll(async ({ playwright, browser }, { project }) => {
   ids.practicePullId = found(await read("/pull-tests"), /"\/pull-tests\/([0-9a-z]{20,})/);
   const plan = (await (await as.leader.get(`/api${trip}/camps/${ids.campId}/plan`)).json()) as Plan;
   ids.pitchId = plan.placements[0]?.pitchId ?? "";
+  ids.version = "1";
   ids.tieOutId = plan.placements[0]?.tieOutId ?? "";
   for (const { id, name } of plan.people) people[name] = id;
 });

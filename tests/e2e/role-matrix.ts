@@ -105,6 +105,9 @@ export const PAGE_ROWS: readonly Row[] = [
   row("/trips/[tripId]/people/contacts", PAGE_LEADERS),
   row("/trips/[tripId]/emergency", PAGE_LEADERS),
   row("/trips/[tripId]/papers", PAGE_LEADERS),
+  row("/trips/[tripId]/history", PAGE_LEADERS),
+  row("/trips/[tripId]/history/[campId]/[version]", PAGE_LEADERS),
+  row("/trips/[tripId]/camps/[campId]/comments", PAGE_LEADERS),
   row("/trips/[tripId]/post", PAGE_LEADER),
 ];
 
@@ -146,6 +149,8 @@ export const ROUTE_ROWS: readonly Row[] = [
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "booklet"),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "pack-list of the leader"),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_PARTICIPANT, "pack-list of the participant"),
+  row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "pitch-and-pack of the leader"),
+  row("GET /api/trips/[tripId]/papers", PAPER_OF_PARTICIPANT, "pitch-and-pack of the participant"),
 ];
 
 const ACTION_SIGNED_IN = by("signed-out", YES, YES, YES, YES, YES);
@@ -243,6 +248,10 @@ export const ACTION_ROWS: readonly Row[] = [
   row("trips/[tripId]/people/packing#addSeasonItemsAction", ACTION_LEADERS),
   row("trips/[tripId]/mine#saveOwnLoadAction", ACTION_ON_TRIP),
   row("trips/[tripId]/mine#tickPackItemAction", ACTION_ON_TRIP),
+  row("trips/[tripId]/mine#markOwnPagesReadAction", ACTION_ON_TRIP),
+  row("trips/[tripId]/comments#createCommentAction", ACTION_LEADERS),
+  row("trips/[tripId]/comments#deleteCommentAction", ACTION_LEADERS),
+  row("trips/[tripId]/history#restorePlanVersionAction", ACTION_LEADERS),
   row("trips/[tripId]/papers#sendPapersAction", ACTION_LEADER),
   row("trips/[tripId]/post#retryMessageAction", ACTION_LEADER),
 ];

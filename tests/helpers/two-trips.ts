@@ -12,6 +12,7 @@ import { builtInAnchor } from "@/lib/calc/tables/anchors";
 import { fingerprint } from "@/lib/services/kit-search/internal";
 import { loadTripState } from "@/lib/services/plan/load-trip-state";
 import { createAlternative } from "@/lib/services/camps/create-alternative";
+import { createComment } from "@/lib/services/comments/create-comment";
 import { createCamp } from "@/lib/services/camps/create-camp";
 import { fetchForecast } from "@/lib/services/forecast/fetch-forecast";
 import { sampleSource } from "@/lib/weather/sample-source";
@@ -243,6 +244,15 @@ export async function makeTwoTrips() {
 
   await writeAboutPeople(a.tripId, [users.leader, users.coLeader, users.participant], users.leader);
 
+  const [ofPapers] = await getDb().select({ updatedAt: trip.updatedAt }).from(trip).where(eq(trip.id, a.tripId));
+  // By the co-leader, so that both who lead may delete it.
+  const commentId = newId();
+  const subject = { about: "camp" as const, campId: a.campId };
+  await createComment({
+    ctx: cast.coLeader.ctx,
+    input: { tripId: a.tripId, commentId, subject, body: "Wet at the wall." },
+  });
+
   const browsers = {
     nobody: new Browser(),
     stranger: await signInAs(users.stranger),
@@ -275,6 +285,9 @@ export async function makeTwoTrips() {
     personIds: cast.personIds,
     otherPersonId: cast.otherPersonId,
     companionId,
+    commentId,
+    /** Of anything that stands on papers of the first trip. */
+    changedAt: ofPapers?.updatedAt.getTime() ?? 0,
     leaderSessionId: otherSession?.id ?? "",
     tokens: {
       invitation: await readLinkToken(a.waitingEmail),

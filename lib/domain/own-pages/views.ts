@@ -50,8 +50,8 @@ export interface CopyView {
 
 export interface OwnHome {
   readonly version: number;
-  /** Names exactly what is shown, for "I have read this". */
-  readonly digest: string;
+  /** When anything printed on the trip last changed, ms since 1970: names what is shown, for "I have read this". */
+  readonly changedAt: number;
   readonly list: PackListView;
   readonly cards: readonly OwnCard[];
   /** Latest of each way, newest first. */

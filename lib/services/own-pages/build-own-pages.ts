@@ -1,4 +1,3 @@
-import { createHash } from "node:crypto";
 import { buildShelter } from "@/lib/calc/shelter-kinds";
 import { countUsed } from "@/lib/domain/plan/reduce";
 import type { OwnPages, OwnPitch, OwnTieOut } from "@/lib/domain/own-pages/own-pages";
@@ -60,9 +59,4 @@ export function buildOwnPages(state: TripState, list: PackListView): OwnPages {
     ),
     contacts: state.trip.contacts.map(({ name, phone, note }) => [name, phone, note].filter(Boolean).join(", ")),
   };
-}
-
-/** The same for the same pages, so that one can say which ones were read. */
-export function digestOwnPages(pages: OwnPages): string {
-  return createHash("sha256").update(JSON.stringify(pages)).digest("hex");
 }

@@ -10,7 +10,7 @@ import { loadTripState } from "../plan/load-trip-state";
 import { getPreferences } from "../preferences/get-preferences";
 import { parseInput } from "../trips/parse-input";
 import { buildOwnCards } from "./build-own-cards";
-import { buildOwnPages, digestOwnPages } from "./build-own-pages";
+import { buildOwnPages } from "./build-own-pages";
 import { findLook, latestCopies, listCopies } from "./copies";
 
 const getOwnHomeInput = z.object({ tripId: idSchema });
@@ -35,7 +35,7 @@ export async function getOwnHome({
   const known = look?.content ?? rows[0]?.content ?? null;
   return {
     version: state.trip.paperVersion,
-    digest: digestOwnPages(now),
+    changedAt: state.trip.updatedAt.getTime(),
     list,
     cards: await buildOwnCards({ state, speedUnit, lengthUnit }, list),
     copies: latestCopies(rows, personId, now),

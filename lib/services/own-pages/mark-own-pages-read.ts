@@ -9,12 +9,12 @@ import { buildPackList, loadPackSources, loadPerson } from "../pack/internal";
 import { loadTripState } from "../plan/load-trip-state";
 import { parseInput } from "../trips/parse-input";
 import { recordHandOut } from "../papers/mark-handed-out";
-import { buildOwnPages, digestOwnPages } from "./build-own-pages";
+import { buildOwnPages } from "./build-own-pages";
 
 export const markOwnPagesReadInput = z.object({
   tripId: idSchema,
-  /** Of what was on the screen (`digestOwnPages`). */
-  digest: z.string({ error: "Say what you read." }).regex(/^[0-9a-f]{64}$/, "Say what you read."),
+  /** When what was on the screen had last changed, ms since 1970. */
+  changedAt: z.number({ error: "Say what you read." }).int().min(0),
 });
 
 /** Says "I have read my pages as they are". Refused when they changed since: one can't have read what wasn't there. */
@@ -25,17 +25,16 @@ export async function markOwnPagesRead({
   ctx: Context;
   input: z.input<typeof markOwnPagesReadInput>;
 }): Promise<void> {
-  const { tripId, digest } = parseInput(markOwnPagesReadInput, input);
+  const { tripId, changedAt } = parseInput(markOwnPagesReadInput, input);
   await withTransaction(async (tx) => {
     const { personId } = await requirePermission(ctx, tripId, "paper.own", tx);
     const state = await loadTripState(tx, tripId);
-    const list = buildPackList(await loadPackSources(tx, state), await loadPerson(tx, tripId, personId));
-    const content = buildOwnPages(state, list);
-    if (digestOwnPages(content) !== digest) {
+    if (state.trip.updatedAt.getTime() !== changedAt) {
       throw new AppError("conflict", "Your pages have changed meanwhile. Look again, then mark them as read.");
     }
     await recordHandOut(tx, ctx, tripId);
-    const row = { version: state.trip.paperVersion, content, seenAt: new Date() };
+    const list = buildPackList(await loadPackSources(tx, state), await loadPerson(tx, tripId, personId));
+    const row = { version: state.trip.paperVersion, content: buildOwnPages(state, list), seenAt: new Date() };
     await tx
       .insert(paperLook)
       .values({ personId, tripId, ...row })

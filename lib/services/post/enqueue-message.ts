@@ -30,7 +30,8 @@ export interface NewMessage {
     | "test"
     | "digest"
     | "calendar"
-    | "emergency";
+    | "emergency"
+    | "comment";
   /** The same request never makes two messages to one address. */
   readonly requestId: string;
   readonly tripId?: string;

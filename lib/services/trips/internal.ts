@@ -63,7 +63,8 @@ interface Change {
     | "pack"
     | "person"
     | "post"
-    | "pull-test";
+    | "pull-test"
+    | "comment";
   readonly entityId: string;
   /** For people: "Otter Flat: ground and wind". */
   readonly summary: string;

@@ -216,6 +216,21 @@ export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Re
       limitKg: null,
     },
     "trips/[tripId]/mine#tickPackItemAction": { tripId, key: `item:${a.packItemId}`, isTicked: true },
+    "trips/[tripId]/mine#markOwnPagesReadAction": { tripId, changedAt: given.changedAt },
+    "trips/[tripId]/comments#createCommentAction": {
+      tripId,
+      commentId: newId(),
+      subject: { about: "camp", campId },
+      body: "Look at the wall, please.",
+    },
+    "trips/[tripId]/comments#deleteCommentAction": { tripId, commentId: given.commentId },
+    "trips/[tripId]/history#restorePlanVersionAction": {
+      tripId,
+      campId,
+      version: 1,
+      baseVersion: 1,
+      intentId: newId(),
+    },
     "trips/[tripId]/papers#sendPapersAction": {
       tripId,
       requestId: newId(),

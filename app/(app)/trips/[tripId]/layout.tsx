@@ -27,6 +27,7 @@ const PARTS: readonly { path: string; label: string; permission: Permission }[] 
   { path: "/people", label: "People", permission: "people.read" },
   { path: "/papers", label: "Cards", permission: "paper.all" },
   { path: "/post", label: "Post", permission: "post.read" },
+  { path: "/history", label: "History", permission: "history.read" },
   { path: "/mine", label: "Mine", permission: "paper.own" },
   { path: "/details", label: "About me", permission: "details.own" },
   { path: "/settings", label: "Settings", permission: "trip.edit" },

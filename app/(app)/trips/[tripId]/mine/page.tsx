@@ -109,7 +109,7 @@ function WhatChanged({
   readonly tripId: string;
   readonly timeZone: string;
 }) {
-  const { changes, copies, look, version, digest } = home;
+  const { changes, copies, look, version, changedAt } = home;
   const since = look ? "since you last said you read them" : "since your paper left";
   const isRead = look !== null && changes?.length === 0;
   return (
@@ -128,7 +128,7 @@ function WhatChanged({
         {copies.map((copy) => (
           <CopyLine key={copy.way} copy={copy} version={version} timeZone={timeZone} />
         ))}
-        {!isRead && <ReadForm action={markOwnPagesReadAction} tripId={tripId} digest={digest} />}
+        {!isRead && <ReadForm action={markOwnPagesReadAction} tripId={tripId} changedAt={changedAt} />}
       </div>
     </Section>
   );

@@ -35,6 +35,7 @@ export default async function CampLayout({ params, children }: CampLayoutProps) 
             { href: `${base}/shelters`, label: "Shelters and sleepers" },
             { href: `${base}/pull-tests`, label: "Pull tests" },
             { href: `${base}/weather`, label: "Weather" },
+            { href: `${base}/comments`, label: "Comments" },
           ]}
         />
         {alternativeTo && (
