@@ -65,6 +65,9 @@ export function MessageList({
                 <span className="font-normal text-pencil">{formatInstant(message.sentAt, timeZone)}</span>
               )}
             </p>
+            {message.readAt && (
+              <p className="text-13 text-pencil">says they have read it, {formatInstant(message.readAt, timeZone)}</p>
+            )}
             {message.state !== "sent" && message.attempts > 0 && (
               <p className="text-13 text-pencil">
                 {plural(message.attempts, "attempt")}

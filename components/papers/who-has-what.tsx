@@ -15,7 +15,9 @@ export function WhoHasWhat({
   return (
     <ul>
       {people.map((person) => {
-        const last = messages.find((message) => message.toAddress === person.email && message.files.length > 0);
+        const last = messages.find(
+          (message) => message.toAddress === person.email && message.files.length > 0 && !message.isTest,
+        );
         return (
           <li
             key={person.id}

@@ -3,6 +3,7 @@ import type { AnswerValue } from "./answer/schema";
 import type { PersonalDetails } from "./details/schema";
 import type { OverdueStep } from "./emergency/schema";
 import type { Role } from "./permissions/permissions";
+import type { PlannedSendState } from "./post/schema";
 import type { Contact } from "./trip/schema";
 
 export interface AnswerView {
@@ -83,4 +84,23 @@ export interface EmergencyPlanView {
   readonly backAt: string | null;
   /** What has to be there before it can be sent. */
   readonly missing: readonly string[];
+}
+
+export interface PlannedSendView {
+  readonly id: string;
+  readonly subject: string;
+  readonly names: readonly string[];
+  readonly sendAt: string;
+  readonly state: PlannedSendState;
+  readonly reason: string | null;
+}
+
+export interface OwnMessageView {
+  readonly id: string;
+  readonly subject: string;
+  readonly text: string;
+  readonly sentAt: string;
+  /** When they said themselves that they have read it. */
+  readonly readAt: string | null;
+  readonly files: readonly string[];
 }

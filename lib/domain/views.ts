@@ -265,6 +265,10 @@ export interface MessageView {
   readonly sentAt: string | null;
   readonly nextAttemptAt: string | null;
   readonly files: readonly string[];
+  /** When the recipient said themselves that they have read it. */
+  readonly readAt: string | null;
+  /** To the sender alone, to look at. */
+  readonly isTest: boolean;
 }
 
 // ---------------------------------------------------------------- paper

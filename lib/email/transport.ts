@@ -16,6 +16,9 @@ export interface OutgoingMail {
   }[];
 }
 
+/** A calendar file goes as such: programs offer to take it over. "text/calendar; method=PUBLISH" */
+const CALENDAR = /^text\/calendar; method=(PUBLISH|CANCEL)$/;
+
 export interface MailTransport {
   send(mail: OutgoingMail): Promise<void>;
   close(): void;
@@ -33,6 +36,8 @@ export function createTransport(smtpUrl: string): MailTransport {
   });
   return {
     async send(mail) {
+      const calendar = mail.files.find((file) => CALENDAR.test(file.contentType));
+      const method = CALENDAR.exec(calendar?.contentType ?? "")?.[1];
       await transport.sendMail({
         from: { ...mail.from },
         to: { ...mail.to },
@@ -44,12 +49,17 @@ export function createTransport(smtpUrl: string): MailTransport {
         messageId: mail.messageId,
         date: mail.date,
         headers: { "Auto-Submitted": "auto-generated", "X-Auto-Response-Suppress": "All" },
-        attachments: mail.files.map((file) => ({
-          filename: file.fileName,
-          contentType: file.contentType,
-          content: Buffer.from(file.content),
-          contentDisposition: "attachment" as const,
-        })),
+        ...(calendar && method
+          ? { icalEvent: { method, filename: calendar.fileName, content: Buffer.from(calendar.content) } }
+          : {}),
+        attachments: mail.files
+          .filter((file) => file !== calendar)
+          .map((file) => ({
+            filename: file.fileName,
+            contentType: file.contentType,
+            content: Buffer.from(file.content),
+            contentDisposition: "attachment" as const,
+          })),
         disableFileAccess: true,
         disableUrlAccess: true,
       });

@@ -82,6 +82,7 @@ export const PAGE_ROWS: readonly Row[] = [
   row("/trips/[tripId]", by("sign-in", NONE, "to-mine", YES, YES, NONE)),
   row("/trips/[tripId]/mine", PAGE_ON_TRIP),
   row("/trips/[tripId]/details", PAGE_ON_TRIP),
+  row("/trips/[tripId]/messages", PAGE_ON_TRIP),
   row("/trips/[tripId]/settings", PAGE_LEADER),
   row("/trips/[tripId]/camps", PAGE_LEADER),
   row("/trips/[tripId]/camps/new", PAGE_LEADER),
@@ -145,6 +146,7 @@ export const ROUTE_ROWS: readonly Row[] = [
   row("GET /api/trips/[tripId]/contact-sheet", ROUTE_LEADERS),
   row("GET /api/gpx/[tripId]", ROUTE_LEADERS),
   row("POST /api/gpx/[tripId]", ROUTE_LEADER),
+  row("GET /api/trips/[tripId]/calendar", by("signed-out", NONE, YES, YES, YES, NONE)),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "field-card"),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "booklet"),
   row("GET /api/trips/[tripId]/papers", PAPER_OF_LEADERS, "pack-list of the leader"),
@@ -254,4 +256,12 @@ export const ACTION_ROWS: readonly Row[] = [
   row("trips/[tripId]/history#restorePlanVersionAction", ACTION_LEADERS),
   row("trips/[tripId]/papers#sendPapersAction", ACTION_LEADER),
   row("trips/[tripId]/post#retryMessageAction", ACTION_LEADER),
+  row("trips/[tripId]/post#cancelPlannedSendAction", ACTION_LEADER),
+  row("trips/[tripId]/post#deleteTemplateAction", ACTION_LEADER),
+  row("trips/[tripId]/post#callOffTripAction", ACTION_LEADER),
+  row(
+    "trips/[tripId]/messages#markMessageReadAction",
+    by("signed-out", NONE, NONE, NONE, YES, NONE),
+    "message to the leader",
+  ),
 ];

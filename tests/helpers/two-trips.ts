@@ -6,7 +6,7 @@ import { clearLimits, readLinkToken } from "./outbox";
 import { hashPassword } from "better-auth/crypto";
 import { and, eq, isNull } from "drizzle-orm";
 import { getDb } from "@/db/client";
-import { account, forecast, kitSearch, outboxMessage, packItem, session, trip } from "@/db/schema";
+import { account, forecast, kitSearch, messageTemplate, outboxMessage, packItem, session, trip } from "@/db/schema";
 import { newId } from "@/lib/domain/ids";
 import { builtInAnchor } from "@/lib/calc/tables/anchors";
 import { fingerprint } from "@/lib/services/kit-search/internal";
@@ -25,6 +25,8 @@ import { createKitItem } from "@/lib/services/kit/create-kit-item";
 import { savePackItems } from "@/lib/services/pack/save-pack-items";
 import { createPerson } from "@/lib/services/people/create-person";
 import { invitePerson } from "@/lib/services/people/invite-person";
+import { planSend } from "@/lib/services/planned-sends/plan-send";
+import { saveTemplate } from "@/lib/services/templates/save-template";
 import { savePlanIntents } from "@/lib/services/plan/save-plan-intents";
 import { createCampPullTest, createPracticePullTest } from "@/lib/services/pull-tests/create-pull-test";
 import { savePhoto } from "@/lib/services/pull-tests/photo/save-photo";
@@ -217,6 +219,38 @@ async function writeAboutPeople(tripId: string, people: readonly TestUser[], lea
   await sendEmergencyPlan({ ctx, input: { tripId, requestId: newId() } });
 }
 
+/** A template, a message for later, and one that the leader was sent. */
+async function writePost(tripId: string, { ctx, id }: TestUser, personId: string) {
+  await saveTemplate({ ctx, input: { tripId, name: "Mine", subject: "Hello", body: "Words." } });
+  const [template] = await getDb().select().from(messageTemplate).where(eq(messageTemplate.tripId, tripId));
+  const plannedSendId = newId();
+  const words = { personIds: [personId], pieces: [], subject: "Later", message: "Words.", paperSize: "A4" as const };
+  const when = { sendDay: "2027-06-01", sendTime: "08:00" };
+  await planSend({ ctx, input: { tripId, requestId: plannedSendId, ...words, ...when } });
+  const ownMessageId = newId();
+  const now = new Date();
+  await getDb()
+    .insert(outboxMessage)
+    .values({
+      id: ownMessageId,
+      tripId,
+      personId,
+      kind: "papers",
+      requestId: newId(),
+      toName: "Leader",
+      toAddress: `own-${id.toLowerCase()}@example.test`,
+      subject: "Read me",
+      text: "Words",
+      html: "<p>Words</p>",
+      messageId: `<${ownMessageId}@leestead.test>`,
+      state: "sent",
+      nextAttemptAt: now,
+      createdAt: now,
+      sentAt: now,
+    });
+  return { templateId: template?.id ?? "", plannedSendId, ownMessageId };
+}
+
 /** Two trips with leaders of their own, everybody signed in with a real session, and open links of each kind. */
 export async function makeTwoTrips() {
   const cast = await makeCast();
@@ -242,6 +276,7 @@ export async function makeTwoTrips() {
     ...(await fillTrip(cast.otherLeader.ctx, cast.otherTripId, companionId)),
   };
 
+  const posted = await writePost(a.tripId, users.leader, cast.personIds.leader);
   await writeAboutPeople(a.tripId, [users.leader, users.coLeader, users.participant], users.leader);
 
   const [ofPapers] = await getDb().select({ updatedAt: trip.updatedAt }).from(trip).where(eq(trip.id, a.tripId));
@@ -278,6 +313,7 @@ export async function makeTwoTrips() {
   await new Browser().call("/request-password-reset", { email: users.coLeader.email });
   await new Browser().call("/sign-in/magic-link", { email: users.participant.email });
   return {
+    ...posted,
     a,
     b,
     users,

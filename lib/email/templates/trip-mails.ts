@@ -52,7 +52,9 @@ export function renderPapersMail(view: {
     greeting: `Hello ${view.name},`,
     paragraphs: [
       ...(view.message ? [view.message] : []),
-      `With this mail for “${view.tripName}”:\n${view.fileNames.map((one) => `– ${one}`).join("\n")}`,
+      ...(view.fileNames.length > 0
+        ? [`With this mail for “${view.tripName}”:\n${view.fileNames.map((one) => `– ${one}`).join("\n")}`]
+        : []),
     ],
     link: { label: "The newest state of the trip", url: view.url },
     footnotes: [

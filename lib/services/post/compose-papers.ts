@@ -2,7 +2,7 @@ import { and, asc, eq } from "drizzle-orm";
 import { getDb } from "@/db/client";
 import { camp, pitch, sleeper } from "@/db/schema";
 import type { Paper } from "@/lib/domain/paper/schema";
-import type { PieceKey } from "@/lib/domain/post/schema";
+import type { PaperPiece } from "@/lib/domain/post/schema";
 import { isInLine } from "../camps/internal";
 
 /** Papers that become one file, with a key under which an equal file is rendered once for everybody. */
@@ -37,11 +37,11 @@ export async function loadTripPlaces(tripId: string): Promise<TripPlaces> {
 /** What one person gets. A piece with nothing on it (no place to sleep yet, no camps) is left out. */
 export function composeBundles(
   person: { readonly id: string; readonly name: string },
-  pieces: readonly PieceKey[],
+  pieces: readonly PaperPiece[],
   places: TripPlaces,
 ): PaperBundle[] {
   const own = places.pitches.filter((one) => one.personId === person.id);
-  const bundles: Readonly<Record<PieceKey, PaperBundle>> = {
+  const bundles: Readonly<Record<PaperPiece, PaperBundle>> = {
     "pitch-and-pack": {
       key: `pitch-and-pack ${person.id}`,
       fileName: `Pitch and pack ${person.name}.pdf`,

@@ -52,6 +52,8 @@ export async function listMessages({
     createdAt: row.createdAt.toISOString(),
     sentAt: row.sentAt?.toISOString() ?? null,
     nextAttemptAt: row.state === "waiting" && row.attempts > 0 ? row.nextAttemptAt.toISOString() : null,
+    readAt: row.readAt?.toISOString() ?? null,
+    isTest: row.kind === "test",
     files: files.filter((file) => file.messageId === row.id).map((file) => file.fileName),
   }));
 }

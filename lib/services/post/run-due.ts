@@ -1,4 +1,6 @@
 import { log } from "@/lib/log";
+import { sendDigests } from "../notices/send-digests";
+import { runPlannedSends } from "../planned-sends/run-planned-sends";
 import { remindDue } from "../answers/remind";
 import { deleteOldDetails, resealDetails } from "../details/tend-details";
 
@@ -7,6 +9,8 @@ const JOBS = {
   reminders: remindDue,
   oldDetails: deleteOldDetails,
   olderKeys: resealDetails,
+  plannedSends: (now: Date) => runPlannedSends(now),
+  digests: sendDigests,
 } as const satisfies Record<string, (now: Date) => Promise<number>>;
 
 /** One that fails keeps none of the others. */

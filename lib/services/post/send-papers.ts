@@ -1,19 +1,24 @@
 import { and, eq, inArray } from "drizzle-orm";
 import type { z } from "zod";
-import { getDb, withTransaction } from "@/db/client";
+import { getDb, withTransaction, type Transaction } from "@/db/client";
 import { outboxMessage, person } from "@/db/schema";
 import { requirePermission } from "@/lib/auth/permission";
 import type { Paper, PaperSize } from "@/lib/domain/paper/schema";
-import { sendInput } from "@/lib/domain/post/schema";
+import { fillTemplate } from "@/lib/domain/post/fill-template";
+import { sendInput, type PaperPiece, type PieceKey } from "@/lib/domain/post/schema";
 import type { PaperDocument } from "@/lib/domain/views";
 import { renderPapersMail } from "@/lib/email/templates/trip-mails";
 import { env } from "@/lib/env";
 import { AppError } from "@/lib/errors";
+import { formatDayRange } from "@/lib/format/days";
 import type { Context } from "@/lib/services/context/context";
 import { recordCopy, type NewCopy } from "../own-pages/copies";
 import { consumeQuota } from "../quota/consume-quota";
-import { loadTripRow, recordChange, type Reader } from "../trips/internal";
+import { findLastDay } from "../answers/internal";
+import { isCalledOff } from "../roster/internal";
+import { loadTripRow, recordChange, type Reader, type TripRow } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
+import { makeCalendarFile } from "./calendar";
 import { composeBundles, loadTripPlaces, type PaperBundle } from "./compose-papers";
 import { enqueueMessage, type MailFile } from "./enqueue-message";
 
@@ -45,6 +50,16 @@ async function countSent(reader: Reader, tripId: string, requestId: string): Pro
   return rows.length;
 }
 
+interface SendOptions {
+  readonly ctx: Context;
+  readonly input: z.input<typeof sendInput>;
+  readonly source?: PaperSource;
+  /** To the sender alone, and marked as a test: nobody else gets anything, nothing counts as sent. */
+  readonly isTest?: boolean;
+}
+
+const isPaper = (piece: PieceKey): piece is PaperPiece => piece !== "calendar";
+
 async function loadRecipients(reader: Reader, tripId: string, personIds: readonly string[]) {
   const rows = await reader
     .select({ id: person.id, name: person.name, email: person.email })
@@ -56,6 +71,13 @@ async function loadRecipients(reader: Reader, tripId: string, personIds: readonl
   return personIds.flatMap((id) => rows.filter((row) => row.id === id));
 }
 
+async function makeTripCalendar(tx: Transaction, trip: TripRow): Promise<MailFile> {
+  if (await isCalledOff(tx, trip.id)) {
+    throw new AppError("conflict", "The trip has been called off: there is no calendar file to send.");
+  }
+  return makeCalendarFile(tx, trip, false);
+}
+
 /**
  * Mails papers to people: rendered first, then written to the outbox all together. The same request again has no
  * second effect. Returns how many messages there are.
@@ -64,13 +86,12 @@ export async function sendPapers({
   ctx,
   input,
   source,
-}: {
-  ctx: Context;
-  input: z.input<typeof sendInput>;
-  source?: PaperSource;
-}): Promise<{ messageCount: number }> {
-  const { tripId, requestId, personIds, pieces, subject, message, paperSize } = parseInput(sendInput, input);
-  await requirePermission(ctx, tripId, "post.send");
+  isTest = false,
+}: SendOptions): Promise<{ messageCount: number }> {
+  const { tripId, requestId, pieces, subject, message, paperSize, ...given } = parseInput(sendInput, input);
+  const { personId } = await requirePermission(ctx, tripId, "post.send");
+  const personIds = isTest ? [personId] : given.personIds;
+  const paperPieces = pieces.filter(isPaper);
   const already = await countSent(getDb(), tripId, requestId);
   if (already > 0) return { messageCount: already };
   await consumeQuota("mail", ctx.actor.userId, personIds.length);
@@ -98,8 +119,8 @@ export async function sendPapers({
   const filesOf = new Map<string, MailFile[]>();
   for (const one of recipients) {
     const files: MailFile[] = [];
-    for (const bundle of composeBundles(one, pieces, places)) files.push(await renderOnce(bundle));
-    if (files.length === 0) {
+    for (const bundle of composeBundles(one, paperPieces, places)) files.push(await renderOnce(bundle));
+    if (files.length === 0 && paperPieces.length > 0) {
       throw new AppError("bad-input", `There is nothing to send to ${one.name} yet: no camps or no place to sleep.`, {
         fieldErrors: { pieces: ["Choose a piece that everybody you chose has."] },
       });
@@ -112,10 +133,15 @@ export async function sendPapers({
     const sentMeanwhile = await countSent(tx, tripId, requestId);
     if (sentMeanwhile > 0) return { messageCount: sentMeanwhile };
     const trip = await loadTripRow(tx, tripId);
+    const calendar = pieces.includes("calendar") ? [await makeTripCalendar(tx, trip)] : [];
+    const dates = formatDayRange(trip.startDate, await findLastDay(tx, trip));
     for (const one of await loadRecipients(tx, tripId, personIds)) {
-      const files = filesOf.get(one.id) ?? [];
+      const files = [...(filesOf.get(one.id) ?? []), ...calendar];
+      const link = `${env.appUrl}/trips/${tripId}`;
+      const fill = (text: string) =>
+        fillTemplate(text, { name: one.name, trip: trip.name, dates, leader: ctx.actor.name, link });
       await enqueueMessage(tx, {
-        kind: "papers",
+        kind: isTest ? "test" : "papers",
         requestId,
         tripId,
         personId: one.id,
@@ -126,14 +152,15 @@ export async function sendPapers({
           name: one.name,
           leaderName: ctx.actor.name,
           tripName: trip.name,
-          subject,
-          message,
+          subject: isTest ? `Test: ${fill(subject)}` : fill(subject),
+          message: fill(message),
           fileNames: files.map((file) => file.fileName),
-          url: `${env.appUrl}/trips/${tripId}`,
+          url: link,
         }),
         files,
       });
     }
+    if (isTest) return { messageCount: recipients.length };
     for (const copy of copies) await recordCopy(tx, ctx, { ...copy, tripId, way: "sent" });
     await recordChange(tx, ctx, {
       tripId,

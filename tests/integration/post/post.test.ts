@@ -319,7 +319,7 @@ describe("sending papers", () => {
   it.each([
     ["personIds", { personIds: [] }],
     ["personIds", { personIds: Array.from({ length: 101 }, () => newId()) }],
-    ["pieces", { pieces: [] }],
+    ["pieces", { pieces: [], message: "" }],
     ["subject", { subject: "" }],
     ["subject", { subject: "x".repeat(100_000) }],
     ["message", { message: "x".repeat(1_000_000) }],

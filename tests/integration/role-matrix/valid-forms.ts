@@ -249,5 +249,9 @@ export function validForms(given: TwoTrips): Readonly<Record<string, Readonly<Re
     "pull-tests#switchPullTestAction": { pullTestId: a.pullTestId, isOff: true },
     "pull-tests#deletePullTestAction": { pullTestId: a.pullTestId },
     "trips/[tripId]/post#retryMessageAction": { tripId, messageId: a.messageId },
+    "trips/[tripId]/post#cancelPlannedSendAction": { tripId, plannedSendId: given.plannedSendId },
+    "trips/[tripId]/post#deleteTemplateAction": { tripId, templateId: given.templateId },
+    "trips/[tripId]/post#callOffTripAction": { tripId, requestId: newId(), isOff: true, message: "Too much wind." },
+    "trips/[tripId]/messages#markMessageReadAction": { tripId, messageId: given.ownMessageId },
   };
 }

@@ -30,6 +30,7 @@ const PARTS: readonly { path: string; label: string; permission: Permission }[] 
   { path: "/history", label: "History", permission: "history.read" },
   { path: "/mine", label: "Mine", permission: "paper.own" },
   { path: "/details", label: "About me", permission: "details.own" },
+  { path: "/messages", label: "Messages", permission: "answer.own" },
   { path: "/settings", label: "Settings", permission: "trip.edit" },
 ];
 

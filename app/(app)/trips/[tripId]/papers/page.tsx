@@ -12,13 +12,14 @@ import { PIECES } from "@/lib/domain/post/schema";
 import type { Preferences } from "@/lib/domain/preferences";
 import type { TripView } from "@/lib/domain/views";
 import { renderPapersMail } from "@/lib/email/templates/trip-mails";
-import { formatDayShort } from "@/lib/format/days";
+import { formatDayRange, formatDayShort } from "@/lib/format/days";
 import type { Context } from "@/lib/services/context/context";
 import { listAlternatives } from "@/lib/services/camps/list-alternatives";
 import { listCampSummaries } from "@/lib/services/camps/list-camp-summaries";
 import { listOwnPagesStates } from "@/lib/services/own-pages/list-own-pages-states";
 import { listPeople } from "@/lib/services/people/list-people";
 import { listMessages } from "@/lib/services/post/list-messages";
+import { listTemplates } from "@/lib/services/templates/list-templates";
 import { getSleepingPlan } from "@/lib/services/sleepers/get-sleeping-plan";
 import { loadTrip } from "../_lib/load-trip";
 import { sendPapersAction } from "./actions";
@@ -46,6 +47,7 @@ async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView
     isAllowed(trip.role, "post.read") ? listMessages({ ctx, input }) : [],
   ]);
   const alternatives = await listAlternatives({ ctx, input });
+  const templates = maySend ? await listTemplates({ ctx, input }) : [];
   const sleeping = await Promise.all(
     camps.map((camp) => getSleepingPlan({ ctx, input: { tripId: trip.id, campId: camp.id } })),
   );
@@ -92,7 +94,18 @@ async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView
               pieces={PIECES}
               paperSize={preferences.paperSize}
               requestId={newId()}
-              previews={{ withMessage: previewMail(ctx, trip, true), without: previewMail(ctx, trip, false) }}
+              previews={{
+                both: previewMail(ctx, trip, "[[message]]", ["[[files]]"]),
+                messageOnly: previewMail(ctx, trip, "[[message]]", []),
+                filesOnly: previewMail(ctx, trip, "", ["[[files]]"]),
+              }}
+              templates={templates}
+              values={{
+                trip: trip.name,
+                dates: formatDayRange(trip.startDate, trip.endDate),
+                leader: ctx.actor.name,
+                link: `…/trips/${trip.id}`,
+              }}
             />
           </Section>
           <Section
@@ -113,14 +126,14 @@ async function Papers({ ctx, trip, preferences }: { ctx: Context; trip: TripView
 }
 
 /** The mail as it will go out, with marks where name, message and files come in. */
-function previewMail(ctx: Context, trip: TripView, hasMessage: boolean): string {
+function previewMail(ctx: Context, trip: TripView, message: string, fileNames: readonly string[]): string {
   return renderPapersMail({
-    name: "{name}",
+    name: "[[name]]",
     leaderName: ctx.actor.name,
     tripName: trip.name,
     subject: "",
-    message: hasMessage ? "{message}" : "",
-    fileNames: ["{files}"],
+    message,
+    fileNames,
     url: `…/trips/${trip.id}`,
   }).text;
 }
