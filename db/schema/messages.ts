@@ -2,8 +2,7 @@ import { index, integer, sqliteTable, text } from "drizzle-orm/sqlite-core";
 import type { PlannedSendState, SendContent } from "@/lib/domain/post/schema";
 import { user } from "./auth";
 import { idColumn, instant } from "./columns";
-import { outboxMessage } from "./post";
-import { person, trip } from "./trip";
+import { trip } from "./trip";
 
 const tripRef = () =>
   text("trip_id")
@@ -57,24 +56,3 @@ export const tripCalendar = sqliteTable("trip_calendar", {
   calledOffAt: instant("called_off_at"),
   updatedAt: instant("updated_at").notNull(),
 });
-
-/** What a piece of paper said when it went to somebody, so that a change can be told from none. */
-export const sentPaper = sqliteTable(
-  "sent_paper",
-  {
-    id: idColumn(),
-    tripId: tripRef(),
-    personId: text("person_id")
-      .notNull()
-      .references(() => person.id, { onDelete: "cascade" }),
-    messageId: text("message_id")
-      .notNull()
-      .references(() => outboxMessage.id, { onDelete: "cascade" }),
-    /** "pitch-card <camp> <pitch>" */
-    paperKey: text("paper_key").notNull(),
-    label: text("label").notNull(),
-    fingerprint: text("fingerprint").notNull(),
-    sentAt: instant("sent_at").notNull(),
-  },
-  (table) => [index("sent_paper_person").on(table.tripId, table.personId)],
-);

@@ -104,3 +104,16 @@ export interface OwnMessageView {
   readonly readAt: string | null;
   readonly files: readonly string[];
 }
+
+/** Whose sent pages are old. */
+export interface ConcernedView {
+  readonly people: readonly {
+    readonly personId: string;
+    readonly name: string;
+    /** That they were sent. */
+    readonly version: number;
+    readonly changes: readonly string[];
+  }[];
+  /** "Skarn Edge": 4 people. */
+  readonly subjects: readonly { readonly subject: string; readonly count: number }[];
+}

@@ -1,4 +1,5 @@
 import { CallOffForm } from "@/components/papers/call-off-form";
+import { Concerned } from "@/components/papers/concerned";
 import { MessageList } from "@/components/papers/message-list";
 import { PlannedSends } from "@/components/papers/planned-sends";
 import { PageBody } from "@/components/trip/page-body";
@@ -10,21 +11,24 @@ import type { MessageView } from "@/lib/domain/views";
 import { plural } from "@/lib/format/words";
 import { getOwnAnswer } from "@/lib/services/answers/get-own-answer";
 import { listPlannedSends } from "@/lib/services/planned-sends/list-planned-sends";
+import { listConcerned } from "@/lib/services/post/list-concerned";
 import { listMessages } from "@/lib/services/post/list-messages";
 import { listTemplates } from "@/lib/services/templates/list-templates";
 import { loadTrip } from "../_lib/load-trip";
+import { sendPapersAction } from "../papers/actions";
 import { callOffTripAction, cancelPlannedSendAction, deleteTemplateAction, retryMessageAction } from "./actions";
 
 export const metadata = { title: "Post" };
 
 export default async function PostPage({ params }: { readonly params: Promise<{ tripId: string }> }) {
-  const { ctx, trip } = await loadTrip(params, "post.read");
+  const { ctx, trip, preferences } = await loadTrip(params, "post.read");
   const input = { tripId: trip.id };
-  const [messages, planned, templates, own] = await Promise.all([
+  const [messages, planned, templates, own, concerned] = await Promise.all([
     listMessages({ ctx, input }),
     listPlannedSends({ ctx, input }),
     listTemplates({ ctx, input }),
     getOwnAnswer({ ctx, input }),
+    listConcerned({ ctx, input }),
   ]);
   const ownTemplates = templates.filter((one) => one.id !== null);
   return (
@@ -37,6 +41,18 @@ export default async function PostPage({ params }: { readonly params: Promise<{ 
           Write and send
         </LinkButton>
       </PageHeading>
+      {concerned.people.length > 0 && (
+        <Section title="Have old pages" lead="Their pages were sent, and something on them is different by now.">
+          <Concerned
+            concerned={concerned}
+            action={sendPapersAction}
+            tripId={trip.id}
+            tripName={trip.name}
+            requestId={newId()}
+            paperSize={preferences.paperSize}
+          />
+        </Section>
+      )}
       {planned.length > 0 && (
         <Section title="For later">
           <PlannedSends tripId={trip.id} timeZone={trip.timeZone} planned={planned} cancel={cancelPlannedSendAction} />
