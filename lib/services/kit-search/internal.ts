@@ -56,7 +56,7 @@ export async function listCandidates(reader: Reader, ctx: Context, kit: readonly
 export function fingerprint(state: TripState, settings: KitSearchSettings): string {
   const camps = state.camps
     .filter((one) => settings.campIds.includes(one.camp.id))
-    .map(({ camp, pitches, placements }) => [camp.id, camp.details, pitches, placements]);
+    .map(({ camp, pitches, placements, learned }) => [camp.id, camp.details, pitches, placements, learned]);
   const chosen = new Set(settings.kinds.map((kind) => kind.id));
   const kit = state.kit
     .filter((row) => chosen.has(row.id))

@@ -1,8 +1,10 @@
 import { and, asc, eq } from "drizzle-orm";
 import { carry, packItem, packTick, person } from "@/db/schema";
+import { listShelterCord } from "@/lib/calc/cord";
 import type { PackLine, PackListView } from "@/lib/domain/views";
 import { AppError } from "@/lib/errors";
 import { formatAnchorSpec } from "@/lib/format/anchors";
+import { plural } from "@/lib/format/words";
 import { formatLength } from "@/lib/format/lengths";
 import type { KitRow } from "../kit/internal";
 import type { TripState } from "../plan/load-trip-state";
@@ -70,6 +72,16 @@ export async function loadPackSources(reader: Reader, state: TripState): Promise
   };
 }
 
+/** How many it sleeps, and the guy lines that go with it. */
+function describeShelter(state: TripState, { id, name, sleeps }: TripState["shelters"][number]): string {
+  const pitches = state.camps.flatMap((camp) =>
+    camp.pitches.filter((one) => one.shelterId === id).map((one) => one.spec),
+  );
+  const { lineCount, totalM } = listShelterCord({ name, pitches });
+  if (lineCount === 0) return `sleeps ${sleeps}`;
+  return `sleeps ${sleeps}, with ${plural(lineCount, "line")}: ${formatLength(totalM)} of cord`;
+}
+
 function listGroupLines({ state, carries, loads }: PackSources, personId: string): PackLine[] {
   const pieces = new Map(listPieces(state, loads).map((piece) => [piece.key, piece]));
   return carries
@@ -84,7 +96,7 @@ function listGroupLines({ state, carries, loads }: PackSources, personId: string
         {
           key,
           name: item ? `${count} × ${piece.name}` : piece.name,
-          detail: item ? describeKit(item) : shelter ? `sleeps ${shelter.sleeps}` : "",
+          detail: item ? describeKit(item) : shelter ? describeShelter(state, shelter) : "",
           massKg: piece.massKgEach === null ? null : piece.massKgEach * count,
           isTicked: false,
         },

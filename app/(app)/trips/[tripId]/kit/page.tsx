@@ -1,4 +1,5 @@
 import { DeleteButton } from "@/components/forms/delete-button";
+import { CordTable } from "@/components/kit/cord-table";
 import { CountStepper } from "@/components/kit/count-stepper";
 import { KitTable } from "@/components/kit/kit-table";
 import { PageBody } from "@/components/trip/page-body";
@@ -7,6 +8,7 @@ import { EmptyState, PageHeading, Section } from "@/components/ui/layout";
 import type { KitItemView } from "@/lib/domain/views";
 import { formatMass } from "@/lib/format/masses";
 import { plural } from "@/lib/format/words";
+import { getCordNeed } from "@/lib/services/kit/get-cord-need";
 import { listKit } from "@/lib/services/kit/list-kit";
 import { loadTrip } from "../_lib/load-trip";
 import { countKitItemAction, deleteKitItemAction } from "./actions";
@@ -18,7 +20,8 @@ const massOf = (items: readonly KitItemView[]) =>
 
 export default async function KitPage({ params }: { readonly params: Promise<{ tripId: string }> }) {
   const { ctx, trip, can } = await loadTrip(params, "camp.read");
-  const kit = await listKit({ ctx, input: { tripId: trip.id } });
+  const input = { tripId: trip.id };
+  const [kit, cord] = await Promise.all([listKit({ ctx, input }), getCordNeed({ ctx, input })]);
   const base = `/trips/${trip.id}/kit`;
   const mayEdit = can("kit.edit");
   const addButton = mayEdit && (
@@ -93,6 +96,14 @@ export default async function KitPage({ params }: { readonly params: Promise<{ t
           actions={<p className="text-15 text-pencil">{formatMass(massOf(cords))}</p>}
         >
           {table("Cord and shock cord", cords)}
+        </Section>
+      )}
+      {cord.lineCount > 0 && (
+        <Section
+          title="Lines the shelters need"
+          lead="As they are pitched: each line as long as at its farthest camp, with its knots."
+        >
+          <CordTable cord={cord} />
         </Section>
       )}
     </PageBody>
