@@ -25,6 +25,7 @@ import { updateTrip } from "@/lib/services/trips/update-trip";
 import { DEMO_PASSWORD, DEMO_PEOPLE, SECOND_LEADER, type DemoPerson } from "./people";
 import { seedCampPulls, seedPractice } from "./pull-tests";
 import { seedRoute } from "./seed-route";
+import { seedWeather } from "./seed-weather";
 import { CAMPS, CONTACTS, KIT, SHELTERS, SLEEPS_IN, TRIP } from "./skarn-edge";
 
 /** An account through the front door; its address counts as verified, and the mail that asks for it isn't sent. */
@@ -118,6 +119,7 @@ async function createMainTrip(ctx: Context): Promise<string> {
   await shareOutEvenly({ ctx, input: { tripId } });
   await seedPractice(ctx);
   await seedRoute(ctx, tripId);
+  await seedWeather(ctx, tripId);
   return tripId;
 }
 

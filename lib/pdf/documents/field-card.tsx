@@ -1,12 +1,12 @@
 import type { ReactElement } from "react";
 import { View } from "@react-pdf/renderer";
-import type { Preferences } from "@/lib/domain/preferences";
-import type { PaperForecast, PitchView } from "@/lib/domain/views";
+import type { PitchView } from "@/lib/domain/views";
 import { formatWindRange } from "@/lib/format/angles";
 import { formatAltitude } from "@/lib/format/lengths";
 import { withUnit } from "@/lib/format/numbers";
 import { formatPosition } from "@/lib/format/positions";
 import { formatBeaufort, formatSpeed } from "@/lib/format/speeds";
+import { startSentence } from "@/lib/format/words";
 import { columns, fillPages, hairline, rule, spacer, stack, textBlock, type Block } from "../sections/block";
 import { factRow } from "../sections/facts";
 import { contactsNote, note, stackNotes } from "../sections/notes";
@@ -30,7 +30,9 @@ import {
   forecastLines,
   forecastSource,
   hazardCautions,
+  hazardNames,
   holdsToWords,
+  lowerFirst,
   nightWords,
   waterWords,
 } from "../words";
@@ -48,7 +50,12 @@ export function fieldCardPages(context: CardContext): ReactElement<PageFrameProp
   };
   const top = pageHeader(header, heading, sheet);
   const nextTop = continuedHeader(header, heading, sheet);
-  const first = [headline(context), factRow(campFacts(context), sheet.inner), campNotes(context)];
+  const first = [
+    headline(context),
+    factRow(campFacts(context), sheet.inner),
+    ...forecastNote(context),
+    campNotes(context),
+  ];
   const weakest = weakestTable(camp, sheet.inner, context.preferences);
   const room = bodyHeight(header, sheet, top) - heightOf(first);
   const blocks: Keeping[] = [
@@ -56,6 +63,7 @@ export function fieldCardPages(context: CardContext): ReactElement<PageFrameProp
     ...planGrid(context, room, heightOf(weakest)),
     ...weakest,
     ...camp.pitches.flatMap((pitch) => shelterSection(context, pitch)),
+    ...cautionsNote(context),
   ];
   return fillPages(blocks, (index) => bodyHeight(header, sheet, index === 0 ? top : nextTop)).map((page, index) => (
     <PageFrame
@@ -132,9 +140,19 @@ function groundWords(details: CardContext["camp"]["camp"]["details"]): string {
   return second === null ? main : `${main}\nSecond patch: ${second.toLowerCase()}`;
 }
 
-function forecastNote(forecast: PaperForecast, preferences: Preferences, width: number): Block {
-  const lines = [...forecastLines(forecast.nights, preferences), forecastSource(forecast)];
-  return note("Forecast planned with", lines.join("\n"), width);
+/** A line a night, and where it is from. */
+function forecastNote({ camp: { forecast }, preferences, sheet }: CardContext): Block[] {
+  if (!forecast) return [];
+  const [first = "", ...others] = forecastLines(forecast.nights, preferences);
+  const lines = [`Forecast: ${first}`, ...others].join("\n");
+  return [spacer(4), textBlock(`${lines}. ${forecastSource(forecast)}`, sheet.inner, { size: TYPE.body })];
+}
+
+/** What to do about each hazard: behind the tables, so that the first page keeps its drawings. */
+function cautionsNote({ camp, sheet }: CardContext): Block[] {
+  const cautions = hazardCautions(camp.camp.details.hazards);
+  if (cautions.length === 0) return [];
+  return [stack([spacer(12), rule(1.2), spacer(4), note("This place", cautions.join("\n"), sheet.inner)])];
 }
 
 const GAP = 14;
@@ -147,7 +165,7 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
       ? null
       : formatPosition(details.latitude, details.longitude);
   const altitude = details.altitudeM === null ? null : formatAltitude(details.altitudeM, preferences.lengthUnit);
-  const cautions = hazardCautions(details.hazards);
+  const hazards = hazardNames(details.hazards);
   const water = waterWords(details, preferences.lengthUnit);
   return stack([
     spacer(8),
@@ -166,8 +184,7 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
         {
           width,
           block: stackNotes([
-            cautions.length ? note("Mind", cautions.join("\n"), width) : null,
-            camp.forecast ? forecastNote(camp.forecast, preferences, width) : null,
+            hazards.length ? note("Mind", `${startSentence(hazards.map(lowerFirst).join(", "))}.`, width) : null,
             camp.result.retension === null ? null : note("Check again", camp.result.retension, width),
           ]),
         },

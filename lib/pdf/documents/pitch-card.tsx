@@ -168,6 +168,7 @@ function mindNote({ camp }: PaperCamp, width: number): Block | null {
 function notesOf({ contacts, camp, sheet }: CardContext, pitch: PitchView): Block {
   const text = sheet.inner - (contacts.length > 0 ? 2 : 1) * COLUMN_GAP;
   const [left, middle] = contacts.length > 0 ? [text * 0.38, text * 0.38] : [text * 0.55, text * 0.45];
+  const right = text - left - middle;
   const names = camp.sleeperNames[pitch.id] ?? [];
   const fallbacks = camp.fallbacks[pitch.id] ?? [];
   const title = "Softer ground or stronger wind";
@@ -188,11 +189,11 @@ function notesOf({ contacts, camp, sheet }: CardContext, pitch: PitchView): Bloc
         block: stackNotes([
           note("Sleep here", names.length ? names.join(", ") : "Nobody placed yet.", middle),
           camp.result.retension === null ? null : note("Check again", camp.result.retension, middle),
-          mindNote(camp, middle),
+          contacts.length > 0 ? null : mindNote(camp, middle),
         ]),
       },
       ...(contacts.length > 0
-        ? [{ width: text - left - middle, block: contactsNote(contacts, text - left - middle) }]
+        ? [{ width: right, block: stackNotes([contactsNote(contacts, right), mindNote(camp, right)]) }]
         : []),
     ],
     COLUMN_GAP,

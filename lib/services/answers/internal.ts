@@ -1,4 +1,4 @@
-import { eq } from "drizzle-orm";
+import { and, eq } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { answer, camp, changeLog } from "@/db/schema";
 import { ANSWER_NAMES, type AnswerValue } from "@/lib/domain/answer/schema";
@@ -6,6 +6,7 @@ import { newId } from "@/lib/domain/ids";
 import type { OwnAnswerView } from "@/lib/domain/people-views";
 import { AppError } from "@/lib/errors";
 import { addDays, dayOf, formatDayLong } from "@/lib/format/days";
+import { isInLine } from "../camps/internal";
 import { addNotice } from "../notices/add-notice";
 import type { PersonRow } from "../people/internal";
 import { fillPlaces, hasPlace, isCalledOff, listGuests, loadRosterSettings, type Guest } from "../roster/internal";
@@ -13,7 +14,10 @@ import type { Reader, TripRow } from "../trips/internal";
 
 /** The morning after the last night, yyyy-mm-dd. */
 export async function findLastDay(reader: Reader, trip: TripRow): Promise<string> {
-  const rows = await reader.select({ nights: camp.nights }).from(camp).where(eq(camp.tripId, trip.id));
+  const rows = await reader
+    .select({ nights: camp.nights })
+    .from(camp)
+    .where(and(eq(camp.tripId, trip.id), isInLine));
   return addDays(
     trip.startDate,
     rows.reduce((sum, row) => sum + row.nights, 0),

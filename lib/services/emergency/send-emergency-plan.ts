@@ -1,8 +1,8 @@
 import { addMinutes } from "date-fns";
-import { and, asc, eq } from "drizzle-orm";
+import { and, eq } from "drizzle-orm";
 import type { z } from "zod";
 import { withTransaction, type Transaction } from "@/db/client";
-import { camp, emergencyPlan, outboxMessage } from "@/db/schema";
+import { emergencyPlan, outboxMessage } from "@/db/schema";
 import { requirePermission } from "@/lib/auth/permission";
 import { emergencySendInput } from "@/lib/domain/emergency/schema";
 import { renderBackSafelyMail, renderEmergencyMail } from "@/lib/email/templates/emergency-mails";
@@ -12,6 +12,7 @@ import { formatPosition } from "@/lib/format/positions";
 import { joinWords } from "@/lib/format/words";
 import type { Context } from "@/lib/services/context/context";
 import { findLastDay } from "../answers/internal";
+import { listCampRows } from "../camps/internal";
 import { enqueueMessage } from "../post/enqueue-message";
 import { consumeQuota } from "../quota/consume-quota";
 import { hasPlace, listGuests } from "../roster/internal";
@@ -20,7 +21,7 @@ import { parseInput } from "../trips/parse-input";
 import { formatMoment, loadEmergencyPlan, toEmergencyView, type EmergencyRow } from "./internal";
 
 async function listNights(tx: Transaction, trip: TripRow): Promise<string[]> {
-  const camps = await tx.select().from(camp).where(eq(camp.tripId, trip.id)).orderBy(asc(camp.position));
+  const camps = await listCampRows(tx, trip.id);
   let offset = 0;
   return camps.map((one) => {
     const first = formatDay(addDays(trip.startDate, offset));
