@@ -1,3 +1,4 @@
+import type { ComparedGroup } from "@/lib/domain/pull-test/compare";
 import type { LearnedFrom } from "@/lib/domain/pull-test/learn";
 import { OUTCOME_NAMES } from "@/lib/domain/pull-test/schema";
 import type { GroundLearningView, PullFit, PullTestView } from "@/lib/domain/pull-test/views";
@@ -96,4 +97,18 @@ export function describeMove(before: CampMeasure, after: CampMeasure, unit: Pref
     parts.push(was === is ? `The camp still holds to ${is}.` : `The camp holds to ${was} → ${is}.`);
   }
   return startSentence(parts.join(" "));
+}
+
+/** How far to trust the model, in one sentence. */
+export function describeComparison({ count, gaveWayCount, ratio }: ComparedGroup): string {
+  if (count === 0) return "Pull tests against the model";
+  if (!ratio) return `${plural(count, "pull test")}, too few to judge the model by`;
+  const percent = Math.round((ratio.median - 1) * 100);
+  const middle =
+    Math.abs(percent) < 5
+      ? "Anchors held about what the model says"
+      : ratio.median >= 1.995
+        ? `Anchors held ${formatSignificant(ratio.median)} times what the model says`
+        : `Anchors held ${withUnit(String(Math.abs(percent)), "%")} ${percent > 0 ? "more" : "less"} than the model says`;
+  return gaveWayCount < 5 ? `${middle}, by only ${gaveWayCount} that gave way` : middle;
 }

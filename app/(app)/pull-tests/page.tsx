@@ -5,6 +5,7 @@ import { PullForm } from "@/components/pull-tests/pull-form";
 import { PullTestList } from "@/components/pull-tests/pull-test-list";
 import { startPull } from "@/components/pull-tests/start-pull";
 import { TableInOut } from "@/components/pull-tests/table-in-out";
+import { LinkButton } from "@/components/ui/button";
 import { Cautions, EmptyState, PageHeading, Section } from "@/components/ui/layout";
 import { requireContext } from "@/lib/auth/session";
 import { newId } from "@/lib/domain/ids";
@@ -38,7 +39,9 @@ export default async function PracticeFieldPage() {
       <PageHeading
         title="Practice field"
         lead={`${plural(view.total, "pull test")} of your own. They count, more weakly, for the same kind of ground on every trip that you lead or co-lead.`}
-      />
+      >
+        <LinkButton href="/pull-tests/compare">Against the model</LinkButton>
+      </PageHeading>
       <div className="grid gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,22rem)_minmax(0,1fr)]">
         <Section title="Log a pull">
           <PullForm action={logPracticePullAction} values={{}} firstId={newId()} anchors={view.anchors} start={fields}>

@@ -77,6 +77,7 @@ export default async function PullTestsPage({ params }: PullTestsPageProps) {
         }
       >
         <LinkButton href={base}>To the staking plan</LinkButton>
+        <LinkButton href={`/trips/${trip.id}/pull-tests`}>Against the model</LinkButton>
       </PageHeading>
       <div className="grid gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,22rem)_minmax(0,1fr)]">
         <Section title="Log a pull">
