@@ -37,7 +37,7 @@ const PAPER_POLICY = "base-uri 'none'; form-action 'none'; frame-ancestors 'none
 
 function choosePolicy(pathname: string, nonce: string): string {
   if (!pathname.startsWith("/api/")) return contentSecurityPolicy(nonce);
-  return /\/(papers|contact-sheet)$/.test(pathname) ? PAPER_POLICY : API_POLICY;
+  return /\/(papers|contact-sheet|practice-sheet)$/.test(pathname) ? PAPER_POLICY : API_POLICY;
 }
 
 /** A form of another site, whatever the browser or a proxy header says about it. */

@@ -199,6 +199,8 @@ async function callRoute(name: string, when: string | undefined, caller: Caller)
       const intentId = `m${Date.now().toString(36)}${caller.toLowerCase()}`.padEnd(26, "0");
       return request.post(api, { data: { intents: [{ intentId, baseVersion: 0, change }] } });
     }
+    case "GET /api/pull-tests/practice-sheet":
+      return request.get(api, { params: { ground: "firm-moist-loam" }, timeout: 60_000 });
     case "POST /api/trips/[tripId]/camps/[campId]/pull-tests":
     case "POST /api/pull-tests":
       return request.post(api, { headers: { "content-type": "text/csv" }, data: PULL_TABLE });

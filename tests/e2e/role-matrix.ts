@@ -131,6 +131,8 @@ export const ROUTE_ROWS: readonly Row[] = [
   row("POST /api/quick-check", ROUTE_SIGNED_IN),
   row("GET /api/trips/[tripId]/camps/[campId]/pull-tests", ROUTE_LEADERS),
   row("POST /api/trips/[tripId]/camps/[campId]/pull-tests", ROUTE_LEADERS),
+  row("GET /api/trips/[tripId]/camps/[campId]/practice-sheet", ROUTE_LEADERS),
+  row("GET /api/pull-tests/practice-sheet", ROUTE_SIGNED_IN),
   row("GET /api/pull-tests", ROUTE_SIGNED_IN),
   row("POST /api/pull-tests", ROUTE_SIGNED_IN),
   row("PUT /api/pull-tests/[pullTestId]/photo", ROUTE_LEADERS),

@@ -4,10 +4,12 @@ import { PracticeGroundFields } from "@/components/pull-tests/practice-ground-fi
 import { PullForm } from "@/components/pull-tests/pull-form";
 import { PullTestList } from "@/components/pull-tests/pull-test-list";
 import { startPull } from "@/components/pull-tests/start-pull";
+import { SheetForm } from "@/components/pull-tests/sheet-form";
 import { TableInOut } from "@/components/pull-tests/table-in-out";
 import { LinkButton } from "@/components/ui/button";
 import { Cautions, EmptyState, PageHeading, Section } from "@/components/ui/layout";
 import { requireContext } from "@/lib/auth/session";
+import { GROUNDS } from "@/lib/calc/tables/grounds";
 import { newId } from "@/lib/domain/ids";
 import type { PracticeView } from "@/lib/domain/pull-test/views";
 import { plural } from "@/lib/format/words";
@@ -86,6 +88,23 @@ export default async function PracticeFieldPage() {
           />
         </Section>
       )}
+      <Section
+        title="Practice sheet"
+        lead="The pulls that teach most by what is known now, in order, with boxes to write in. Leave the scale empty when it shows more than you can pull."
+      >
+        <SheetForm
+          action="/api/pull-tests/practice-sheet"
+          forceUnit={fields.forceUnit}
+          ground={{
+            name: "ground",
+            options: GROUNDS.filter((row) => row.model.kind !== "undriveable").map((row) => ({
+              value: row.kind,
+              label: row.name,
+            })),
+            value: view.readings[0]?.ground.kind ?? "firm-moist-loam",
+          }}
+        />
+      </Section>
       <Section title="As a table">
         <TableInOut address="/api/pull-tests" columns={COLUMNS} />
       </Section>

@@ -6,6 +6,7 @@ import { PatchField } from "@/components/pull-tests/patch-field";
 import { PullForm } from "@/components/pull-tests/pull-form";
 import { PullTestList } from "@/components/pull-tests/pull-test-list";
 import { startPull } from "@/components/pull-tests/start-pull";
+import { SheetForm } from "@/components/pull-tests/sheet-form";
 import { TableInOut } from "@/components/pull-tests/table-in-out";
 import { PageBody } from "@/components/trip/page-body";
 import { LinkButton } from "@/components/ui/button";
@@ -131,6 +132,24 @@ export default async function PullTestsPage({ params }: PullTestsPageProps) {
             showsGround={false}
           />
         )}
+      </Section>
+      <Section
+        title="Practice sheet"
+        lead="The pulls that teach most by what is known now, in order, with boxes to write in. Leave the scale empty when it shows more than you can pull."
+      >
+        <SheetForm
+          action={`/api/trips/${trip.id}/camps/${campId}/practice-sheet`}
+          forceUnit={start.fields.forceUnit}
+          ground={
+            view.patches.length > 1
+              ? {
+                  name: "patch",
+                  options: view.patches.map(({ patch, groundName }) => ({ value: patch, label: groundName })),
+                  value: "main",
+                }
+              : null
+          }
+        />
       </Section>
       <Section title="As a table">
         <TableInOut address={`/api/trips/${trip.id}/camps/${campId}/pull-tests`} columns={COLUMNS} />
