@@ -88,7 +88,7 @@ function pullRow(view: PracticeSheetView, row: PracticeSheetView["rows"][number]
         width: widths.expected,
         block: stack([
           textBlock(`${inUnit(row.lowN)} to ${inUnit(row.highN)}`, widths.expected, { size: TYPE.strong, weight: 800 }),
-          textBlock(`shows its end: ${formatChance(row.chanceExact)}`, widths.expected, {
+          textBlock(`chance it gives: ${formatChance(row.chanceExact)}`, widths.expected, {
             size: TYPE.small,
             color: GREY,
           }),
