@@ -25,6 +25,7 @@ import { updateTrip } from "@/lib/services/trips/update-trip";
 import { DEMO_PASSWORD, DEMO_PEOPLE, SECOND_LEADER, type DemoPerson } from "./people";
 import { seedCampPulls, seedPractice } from "./pull-tests";
 import { seedRoute } from "./seed-route";
+import { seedTalk } from "./seed-talk";
 import { seedWeather } from "./seed-weather";
 import { CAMPS, CONTACTS, KIT, SHELTERS, SLEEPS_IN, TRIP } from "./skarn-edge";
 
@@ -150,6 +151,8 @@ export async function seedDemo(): Promise<SeedReport | null> {
     return ctx;
   };
   const tripIds = [await createMainTrip(contextOf(DEMO_PEOPLE[0])), await createSecondTrip(contextOf(SECOND_LEADER))];
+  const [leader, coLeader, participant] = DEMO_PEOPLE.slice(0, 3).map(contextOf);
+  if (leader && coLeader && participant) await seedTalk({ leader, coLeader, participant }, tripIds[0] ?? "");
   const logIns = [
     ...withAccount.map(({ email, role }) => ({ email, role })),
     { email: SECOND_LEADER.email, role: "leader of another trip" },

@@ -84,6 +84,7 @@ test("a leader's pages", async ({ browser }) => {
     "/people",
     "/people/packing",
     "/papers",
+    "/history",
     "/post",
     "/mine",
   ];
@@ -92,6 +93,7 @@ test("a leader's pages", async ({ browser }) => {
     "/trips/new",
     "/account",
     "/quick-check",
+    "/knots",
     "/gear",
     "/gear/new",
     ...parts.map((part) => `${trip}${part}`),
@@ -99,6 +101,8 @@ test("a leader's pages", async ({ browser }) => {
     camp,
     `${camp}/place`,
     `${camp}/shelters`,
+    `${camp}/comments`,
+    `${camp.replace("/camps/", "/history/")}/1`,
     working,
   ]) {
     await check(page, path);

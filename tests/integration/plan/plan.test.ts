@@ -14,7 +14,8 @@ import { createPitch } from "@/lib/services/pitches/create-pitch";
 import { deletePitch } from "@/lib/services/pitches/delete-pitch";
 import { explainTieOutFor } from "@/lib/services/plan/explain-tie-out-for";
 import { getCampPlan } from "@/lib/services/plan/get-camp-plan";
-import { getPlanAtVersion } from "@/lib/services/plan/get-plan-at-version";
+import { loadEarlierPlan } from "@/lib/services/plan/earlier-plan";
+import { findCampState, loadTripState } from "@/lib/services/plan/load-trip-state";
 import { listPlanHistory } from "@/lib/services/plan/list-plan-history";
 import { savePlanIntents } from "@/lib/services/plan/save-plan-intents";
 import { createShelter } from "@/lib/services/shelters/create-shelter";
@@ -162,11 +163,13 @@ describe("a staking plan", () => {
     const input = { tripId: cast.tripId, campId: kit.campId };
     const history = await listPlanHistory({ ctx: cast.coLeader.ctx, input });
     expect(history[0]?.planVersion).toBe(plan.planVersion);
-    const rebuilt = await getPlanAtVersion({ ctx: cast.coLeader.ctx, input: { ...input, version: plan.planVersion } });
+    const state = await loadTripState(getDb(), cast.tripId);
+    const at = (version: number) => loadEarlierPlan(getDb(), findCampState(state, kit.campId), cast.tripId, version);
+    const rebuilt = await at(plan.planVersion);
     const sorted = (placements: readonly { tieOutId: string }[]) =>
       [...placements].sort((a, b) => (a.tieOutId < b.tieOutId ? -1 : 1));
     expect(sorted(rebuilt.placements)).toEqual(sorted(plan.placements));
-    const early = await getPlanAtVersion({ ctx: cast.coLeader.ctx, input: { ...input, version: 1 } });
+    const early = await at(1);
     expect(early.placements.map((one) => one.tieOutId)).toEqual(["ridge-front"]);
     expect(await codeOf(listPlanHistory({ ctx: cast.participant.ctx, input }))).toBe("forbidden");
   });
