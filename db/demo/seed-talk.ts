@@ -1,10 +1,12 @@
+import { withTransaction } from "@/db/client";
 import { newId } from "@/lib/domain/ids";
 import type { Context } from "@/lib/services/context/context";
 import { listCampSummaries } from "@/lib/services/camps/list-camp-summaries";
 import { createComment } from "@/lib/services/comments/create-comment";
+import { recordCopy } from "@/lib/services/own-pages/copies";
 import { getOwnHome } from "@/lib/services/own-pages/get-own-home";
 import { markOwnPagesRead } from "@/lib/services/own-pages/mark-own-pages-read";
-import { renderPaperFile } from "@/lib/services/papers/render-paper-file";
+import { getPaperDocument } from "@/lib/services/papers/get-paper-document";
 import { getCampPlan } from "@/lib/services/plan/get-camp-plan";
 import { savePlanIntents } from "@/lib/services/plan/save-plan-intents";
 
@@ -24,7 +26,11 @@ const SHELTER_TALK = "One corner loop is stitched anew. Look at it after each wi
 async function changeAfterReading({ coLeader, participant }: Talkers, tripId: string): Promise<void> {
   const { list, changedAt } = await getOwnHome({ ctx: participant, input: { tripId } });
   const paper = { kind: "pitch-and-pack" as const, personId: list.person.id, fold: "flat" as const };
-  await renderPaperFile({ ctx: participant, input: { tripId, paper } });
+  // As printed, but for the drawing of it: a seed has no renderer.
+  const printed = await getPaperDocument({ ctx: participant, input: { tripId, paper } });
+  if (printed.kind !== "pitch-and-pack") throw new Error("The demo printed something else.");
+  const copy = { tripId, personId: list.person.id, version: printed.header.version, content: printed.content };
+  await withTransaction((tx) => recordCopy(tx, participant, { ...copy, way: "printed" }));
   await markOwnPagesRead({ ctx: participant, input: { tripId, changedAt } });
   const night = list.nights.find((one) => one.pitchId !== null);
   if (!night) throw new Error("The demo's participant sleeps nowhere.");

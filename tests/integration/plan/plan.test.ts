@@ -2,6 +2,7 @@ import { beforeAll, describe, expect, it } from "vitest";
 import { makeCast } from "../../helpers/actors";
 import { anchorOf, makeCampKit, placementOf, shelterOf, windyCamp } from "../../helpers/camp-kit";
 import { codeOf } from "../../helpers/refusals";
+import { getDb } from "@/db/client";
 import { proposePlan } from "@/lib/calc/plan";
 import { newId } from "@/lib/domain/ids";
 import { toCampInput } from "@/lib/domain/plan/to-camp-input";
