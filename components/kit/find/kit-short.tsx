@@ -25,8 +25,8 @@ export function KitShort({
             <p className="mt-1 max-w-[46rem] text-15">{describeShort(camp)}</p>
             <p className="mt-1 max-w-[46rem] text-15">
               {camp.holdsToMs < 0.5
-                ? `Nothing of what there is holds, in any wind.`
-                : `With everything there is, it holds to ${formatHoldsTo(camp.holdsToMs, speedUnit)}; the plan says ${formatSpeed(camp.gustMs, speedUnit)}.`}
+                ? "Nothing of what there is holds, in any wind."
+                : `After its windy night, with everything there is, it holds to ${formatHoldsTo(camp.holdsToMs, speedUnit)}; the plan says ${formatSpeed(camp.gustMs, speedUnit)}.`}
             </p>
             <h4 className="mt-3 text-13 text-pencil">What would change that</h4>
             <ul className="mt-1 max-w-[46rem] list-disc pl-5 text-15">
@@ -64,9 +64,11 @@ function describeRemedy(remedy: Remedy, campName: string): string {
     joinWords(all.map((one) => `${one.count} × ${one.name}`));
   switch (remedy.type) {
     case "more":
-      return `Take ${pieces(remedy.pieces)} more.`;
+      return `Take more: ${pieces(remedy.pieces)}.`;
     case "other-kinds":
-      return `Take ${pieces(remedy.pieces)} from the library.`;
+      return `Take ${pieces(remedy.pieces)}, also from the library.`;
+    case "found-and-more":
+      return `Use what is found at ${campName}, and take ${pieces(remedy.pieces)}.`;
     case "found":
       return `Use what is found at ${campName}.`;
     case "doubling":

@@ -4,14 +4,18 @@ import { groupSpots, type Spots } from "./group-spots";
 import { listKinds } from "./match";
 import { readCampForKit, type KitCampChoice, type KitKindChoice, type KitSettings, type ReadCamp } from "./read-camp";
 import { inStrongerGust, toProblem, type KitSearch, type Progress } from "./search-input";
-import type { KitShortfall, ProgramSolver } from "./types";
+import { MOST_KINDS, type KitShortfall, type ProgramSolver } from "./types";
+
+type Pieces = readonly { readonly name: string; readonly count: number }[];
 
 export type Remedy =
-  /** More of a kind that is on the list. */
-  | { readonly type: "more"; readonly pieces: readonly { readonly name: string; readonly count: number }[] }
-  /** Kinds that are not on the list. */
-  | { readonly type: "other-kinds"; readonly pieces: readonly { readonly name: string; readonly count: number }[] }
+  /** More of the kinds that are on the list. */
+  | { readonly type: "more"; readonly pieces: Pieces }
+  /** More of them, and kinds that are not on the list. */
+  | { readonly type: "other-kinds"; readonly pieces: Pieces }
   | { readonly type: "found" }
+  /** What is found there, and more pieces or other kinds on top. */
+  | { readonly type: "found-and-more"; readonly pieces: Pieces }
   | { readonly type: "doubling" }
   | { readonly type: "fewer-spares" };
 
@@ -73,27 +77,31 @@ function listPieces(kinds: readonly KitKindChoice[], counts: readonly number[]) 
 
 function listRemedies(attempt: Attempt, otherKinds: readonly KitKindChoice[], solve: ProgramSolver): Remedy[] {
   const { camp, kinds, settings } = attempt;
-  const remedies: Remedy[] = [];
   const endless = kinds.map((kind) => ({ ...kind, most: null }));
-  const more = solveAlone({ ...attempt, kinds: endless }, solve);
-  if (more) remedies.push({ type: "more", pieces: listPieces(kinds, more) });
-  const others = otherKinds.map((kind) => ({ ...kind, most: null }));
-  const other = more || others.length === 0 ? null : solveAlone({ ...attempt, kinds: others }, solve);
-  if (other) {
-    const zero = otherKinds.map((kind) => ({ ...kind, most: 0 }));
-    remedies.push({ type: "other-kinds", pieces: listPieces(zero, other) });
-  }
-  const hasFound = !camp.allowFound && camp.input.tray.some((anchor) => anchor.found);
-  if (hasFound && solveAlone({ ...attempt, camp: { ...camp, allowFound: true } }, solve)) {
-    remedies.push({ type: "found" });
-  }
-  if (!settings.allowDoubling && solveAlone({ ...attempt, settings: { ...settings, allowDoubling: true } }, solve)) {
-    remedies.push({ type: "doubling" });
-  }
-  if (settings.spares > 0 && solveAlone({ ...attempt, settings: { ...settings, spares: 0 } }, solve)) {
-    remedies.push({ type: "fewer-spares" });
-  }
-  return remedies;
+  const unlisted = otherKinds.map((kind) => ({ ...kind, most: 0 }));
+  const all = [...endless, ...unlisted.map((kind) => ({ ...kind, most: null }))].slice(0, MOST_KINDS);
+  const inHand = [...kinds, ...unlisted].slice(0, MOST_KINDS);
+  const withMore = (type: "more" | "other-kinds" | "found-and-more", from: Attempt): Remedy | null => {
+    const counts = solveAlone(from, solve);
+    return counts && { type, pieces: listPieces(inHand, counts) };
+  };
+  const found = { ...camp, allowFound: true };
+  const hasFound = camp.input.tray.some((anchor) => anchor.found) && !camp.allowFound;
+  const isFoundEnough = hasFound && solveAlone({ ...attempt, camp: found }, solve) !== null;
+  const doubled = { ...settings, allowDoubling: true };
+  const isDoublingEnough = !settings.allowDoubling && solveAlone({ ...attempt, settings: doubled }, solve) !== null;
+  const lean = { ...settings, spares: 0 };
+  const isLeanEnough = settings.spares > 0 && solveAlone({ ...attempt, settings: lean }, solve) !== null;
+  const more = withMore("more", { ...attempt, kinds: endless }) ?? withMore("other-kinds", { ...attempt, kinds: all });
+  const last =
+    more || !hasFound || isFoundEnough ? null : withMore("found-and-more", { ...attempt, camp: found, kinds: all });
+  const remedies: (Remedy | null)[] = [
+    more,
+    isFoundEnough ? { type: "found" } : last,
+    isDoublingEnough ? { type: "doubling" } : null,
+    isLeanEnough ? { type: "fewer-spares" } : null,
+  ];
+  return remedies.filter((remedy) => remedy !== null);
 }
 
 /** Which camps can't be held, at which tie-outs, up to which gust they can, and what would change it. */

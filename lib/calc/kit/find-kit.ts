@@ -93,9 +93,9 @@ export function costOf(
   counts: readonly number[],
   foundUsed: readonly (readonly number[])[],
 ): number {
-  const carried = problem.kinds.map((kind, at) => pieceCost(problem, kind) * (counts[at] ?? 0));
+  const carried = problem.kinds.map((kind, at) => pieceCost(problem, kind) * itemAt(counts, at));
   const found = problem.camps.flatMap((camp, campAt) =>
-    camp.found.map((one, at) => foundCost(problem, one) * (foundUsed[campAt]?.[at] ?? 0)),
+    camp.found.map((one, at) => foundCost(problem, one) * itemAt(itemAt(foundUsed, campAt), at)),
   );
   return [...carried, ...found].reduce((sum, one) => sum + one, 0);
 }

@@ -28,7 +28,7 @@ export const countWithin = (classes: readonly NeedClass[], set: KindSet): number
 
 /** What there is of a set of kinds together. */
 export const supplyOf = (set: KindSet, supply: readonly number[]): number =>
-  listKinds(set).reduce((sum, kind) => sum + (supply[kind] ?? 0), 0);
+  listKinds(set).reduce((sum, kind) => sum + itemAt(supply, kind), 0);
 
 export interface Match {
   /** By class, then by kind: how many of its needs the kind meets. */
@@ -59,10 +59,10 @@ export function matchNeeds(classes: readonly NeedClass[], supply: readonly numbe
       const amount = Math.min(open, itemAt(left, end.kind), ...path.steps.slice(1).map((step) => step.room));
       path.steps.forEach(({ needClass, kind, from }) => {
         const row = itemAt(given, needClass);
-        row[kind] = (row[kind] ?? 0) + amount;
-        if (from !== null) row[from] = (row[from] ?? 0) - amount;
+        row[kind] = itemAt(row, kind) + amount;
+        if (from !== null) row[from] = itemAt(row, from) - amount;
       });
-      left[end.kind] = (left[end.kind] ?? 0) - amount;
+      left[end.kind] = itemAt(left, end.kind) - amount;
       open -= amount;
     }
   });
@@ -93,9 +93,9 @@ function findPath(
     for (const kind of listKinds(itemAt(classes, needClass).kinds)) {
       if (cameBy.has(kind)) continue;
       cameBy.set(kind, { needClass, kind, from, room });
-      if ((left[kind] ?? 0) > 0) return { steps: traceBack(cameBy, kind), reached: 0 };
+      if (itemAt(left, kind) > 0) return { steps: traceBack(cameBy, kind), reached: 0 };
       given.forEach((row, other) => {
-        const has = row[kind] ?? 0;
+        const has = itemAt(row, kind);
         if (has > 0) queue.push({ needClass: other, from: kind, room: has });
       });
     }

@@ -111,9 +111,9 @@ export function searchKit(search: KitSearch, solve: ProgramSolver, onProgress: P
         campId: read.camp.id,
         campName: read.camp.name,
         ...stakeCamp(read, supplyAt(solution.counts, used)),
-        foundUsed: read.camp.found.flatMap(({ name }, i) =>
-          (used[i] ?? 0) > 0 ? [{ name, count: used[i] ?? 0 }] : [],
-        ),
+        foundUsed: read.camp.found
+          .map(({ name }, i) => ({ name, count: itemAt(used, i) }))
+          .filter((one) => one.count > 0),
       };
     }),
     reasons,
