@@ -176,8 +176,6 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
           block: stackNotes([
             note("Place", [position ?? "position not said", altitude].filter(Boolean).join("\n"), width),
             water ? note("Water", water, width) : null,
-            details.wayOut ? note("Way out", details.wayOut, width) : null,
-            details.meetingPoint ? note("Meet at", details.meetingPoint, width) : null,
             details.notes ? note("Notes", details.notes, width) : null,
           ]),
         },
@@ -188,7 +186,14 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
             camp.result.retension === null ? null : note("Check again", camp.result.retension, width),
           ]),
         },
-        { width, block: contactsNote(contacts, width) },
+        {
+          width,
+          block: stackNotes([
+            contactsNote(contacts, width),
+            details.wayOut ? note("Way out", details.wayOut, width) : null,
+            details.meetingPoint ? note("Meet at", details.meetingPoint, width) : null,
+          ]),
+        },
       ],
       GAP,
     ),
