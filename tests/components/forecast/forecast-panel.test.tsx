@@ -56,7 +56,8 @@ const view = (over: Partial<CampForecastView> = {}): CampForecastView => ({
   ...over,
 });
 
-const done = () => Promise.resolve<ActionState>({ status: "done", message: "", data: null });
+type Action = (state: ActionState, form: FormData) => Promise<ActionState>;
+const done: Action = () => Promise.resolve({ status: "done", message: "", data: null });
 
 function show(forecast: CampForecastView, preferences: Preferences = METRIC, acceptAction = done) {
   return render(
@@ -73,7 +74,7 @@ function show(forecast: CampForecastView, preferences: Preferences = METRIC, acc
 }
 
 test("says what a worse forecast would do, before and after, with source and time, and waits", async () => {
-  const accept = vi.fn((_state: ActionState, _form: FormData) => done());
+  const accept = vi.fn(done);
   show(view(), METRIC, accept);
   expect(screen.getByText("Camp 3 now gives way: was holds.")).toBeInTheDocument();
   expect(screen.getByText("gust 72 km/h, holds to 79 km/h")).toBeInTheDocument();
