@@ -71,8 +71,12 @@ test("a leader's pages", async ({ browser }) => {
     (await page.getByRole("link", { name: "How this was calculated" }).first().getAttribute("href")) ?? "";
   await page.goto(`${trip}/shelters`);
   const shelter = (await page.locator(`a[href^="${trip}/shelters/"]`).last().getAttribute("href")) ?? "";
+  await page.goto("/pull-tests");
+  const practice =
+    (await page.locator('a[href^="/pull-tests/"]:not([href$="/compare"])').first().getAttribute("href")) ?? "";
   const parts = [
     "",
+    "/pull-tests",
     "/settings",
     "/camps",
     "/camps/new",
@@ -96,6 +100,9 @@ test("a leader's pages", async ({ browser }) => {
     "/knots",
     "/gear",
     "/gear/new",
+    "/pull-tests",
+    "/pull-tests/compare",
+    practice,
     ...parts.map((part) => `${trip}${part}`),
     shelter,
     camp,
@@ -103,6 +110,7 @@ test("a leader's pages", async ({ browser }) => {
     `${camp}/shelters`,
     `${camp}/comments`,
     `${camp.replace("/camps/", "/history/")}/1`,
+    `${camp}/pull-tests`,
     working,
   ]) {
     await check(page, path);
