@@ -14,7 +14,8 @@ function compareNights(before: readonly OwnNight[], after: readonly OwnNight[]):
     if (!was) changes.push(`A night more: ${night.campName}.`);
     else if (was.campId !== night.campId) changes.push(`You camp at ${night.campName} instead of ${was.campName}.`);
     else if (was.place !== night.place) {
-      changes.push(`${night.campName}: you sleep ${placeWords(night)} now. Before: ${placeWords(was)}.`);
+      const now = night.place === null ? "you have no place to sleep" : `you sleep ${placeWords(night)}`;
+      changes.push(`${night.campName}: ${now} now. Before: ${placeWords(was)}.`);
     } else if (was.withNames.join("|") !== night.withNames.join("|")) {
       const names = night.withNames.join(", ");
       changes.push(`${night.campName}: ${names ? `you share with ${names} now` : "nobody shares your shelter now"}.`);

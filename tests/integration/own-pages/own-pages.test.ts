@@ -107,7 +107,7 @@ describe("what changed since I last looked", () => {
   it("says where one sleeps now", async () => {
     await read();
     await saveSleepers({ ctx: cast.leader.ctx, input: one({ campId: kit.campId, sleepers: [] }) });
-    expect((await home()).changes).toContain("Otter Flat: you sleep not placed yet now. Before: in Ridge tarp.");
+    expect((await home()).changes).toContain("Otter Flat: you have no place to sleep now. Before: in Ridge tarp.");
   });
 
   it("of somebody else's list is no news", async () => {

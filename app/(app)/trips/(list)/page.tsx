@@ -4,7 +4,7 @@ import { EmptyState, PageHeading } from "@/components/ui/layout";
 import { requireContext } from "@/lib/auth/session";
 import { ROLE_NAMES } from "@/lib/domain/permissions/permissions";
 import type { TripListItem } from "@/lib/domain/views";
-import { formatDayRange } from "@/lib/format/days";
+import { dayOf, formatDayRange } from "@/lib/format/days";
 import { plural } from "@/lib/format/words";
 import { listTrips } from "@/lib/services/trips/list-trips";
 
@@ -13,6 +13,10 @@ export const metadata = { title: "Trips" };
 export default async function TripsPage() {
   const ctx = await requireContext();
   const trips = await listTrips({ ctx });
+  const today = dayOf(new Date(), "UTC");
+  const next = trips
+    .filter((trip) => trip.endDate >= today)
+    .toSorted((a, b) => a.startDate.localeCompare(b.startDate))[0];
   return (
     <>
       <PageHeading title="Trips" lead={trips.length > 0 ? "The ones you lead and the ones you join." : undefined}>
@@ -33,13 +37,30 @@ export default async function TripsPage() {
           </LinkButton>
         </EmptyState>
       ) : (
-        <ul className="border-b border-hair">
-          {trips.map((trip) => (
-            <TripRow key={trip.id} trip={trip} />
-          ))}
-        </ul>
+        <>
+          {next && <NextTrip trip={next} />}
+          <ul className="border-b border-hair">
+            {trips.map((trip) => (
+              <TripRow key={trip.id} trip={trip} />
+            ))}
+          </ul>
+        </>
       )}
     </>
+  );
+}
+
+/** What lies ahead first, with the way to one's own pages of it. */
+function NextTrip({ trip }: { readonly trip: TripListItem }) {
+  return (
+    <div className="mb-8 flex flex-wrap items-center justify-between gap-x-6 gap-y-3 border-l-4 border-spruce pl-4">
+      <p className="text-15">
+        <span className="block text-13 text-pencil">Next</span>
+        <span className="block text-18 font-bold">{trip.name}</span>
+        {formatDayRange(trip.startDate, trip.endDate)}
+      </p>
+      <LinkButton href={`/trips/${trip.id}/mine`}>Your pages</LinkButton>
+    </div>
   );
 }
 
