@@ -96,8 +96,8 @@ test("an earlier staking plan is looked at, brought back, and taken back again",
   const page = await openAs(browser, LEADER, PHONE);
   const trip = await openTrip(page);
   await page.goto(`${trip}/history`);
-  await page.getByLabel("Camp").selectOption({ label: "Skarn Edge" });
-  await page.getByRole("button", { name: "Show" }).tap();
+  await page.getByLabel("Camp", { exact: true }).selectOption({ label: "Skarn Edge" });
+  await page.getByRole("button", { name: "Show", exact: true }).tap();
   const versions = page.getByRole("list", { name: /^Versions of the staking plan/ });
   const before = await versions.getByRole("listitem").count();
   await versions.getByRole("link", { name: /version 1$/ }).tap();
