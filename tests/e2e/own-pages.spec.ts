@@ -75,7 +75,7 @@ test("the leader calls the co-leader by name in a comment, who gets it by mail a
       .getAttribute("href")) ?? "";
   await leader.goto(`${camp}/comments`);
   await leader.getByRole("button", { name: "@Tobi Oduya" }).tap();
-  await leader.getByLabel("Comment").pressSequentially("please pull two stakes at the wall.");
+  await leader.getByRole("textbox", { name: "Comment" }).pressSequentially("please pull two stakes at the wall.");
   await leader.getByRole("button", { name: "Write the comment" }).tap();
   await expect(leader.getByText("@Tobi Oduya please pull two stakes at the wall.").first()).toBeVisible();
   await expect(leader.getByText("mailed to Tobi Oduya").last()).toBeVisible();
