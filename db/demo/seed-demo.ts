@@ -12,6 +12,9 @@ import { getAuth } from "@/lib/auth/auth";
 import { createCamp } from "@/lib/services/camps/create-camp";
 import type { Context } from "@/lib/services/context/context";
 import { createKitItem } from "@/lib/services/kit/create-kit-item";
+import { saveGroupThings } from "@/lib/services/pack/save-group-things";
+import { saveLimit } from "@/lib/services/pack/save-person-load";
+import { saveShelterSplit } from "@/lib/services/pack/save-shelter-split";
 import { shareOutEvenly } from "@/lib/services/pack/share-out-evenly";
 import { createPerson } from "@/lib/services/people/create-person";
 import { listPeople } from "@/lib/services/people/list-people";
@@ -27,7 +30,7 @@ import { seedCampPulls, seedPractice } from "./pull-tests";
 import { seedRoute } from "./seed-route";
 import { seedTalk } from "./seed-talk";
 import { seedWeather } from "./seed-weather";
-import { CAMPS, CONTACTS, KIT, SHELTERS, SLEEPS_IN, TRIP } from "./skarn-edge";
+import { CAMPS, CARRY_LIMITS, CONTACTS, GROUP_THINGS, KIT, SHELTERS, SLEEPS_IN, TRIP } from "./skarn-edge";
 
 /** An account through the front door; its address counts as verified, and the mail that asks for it isn't sent. */
 async function createAccount({ name, email }: DemoPerson): Promise<Context> {
@@ -116,6 +119,16 @@ async function createMainTrip(ctx: Context): Promise<string> {
     await saveSleepers({ ctx, input: { tripId, campId, sleepers } });
     await planCamp(ctx, tripId, campId, details.name === "Skarn Edge");
     if (details === CAMPS[0]) await seedCampPulls(ctx, tripId, campId);
+  }
+  await saveGroupThings({ ctx, input: { tripId, things: [...GROUP_THINGS] } });
+  for (const [index, limits] of CARRY_LIMITS.entries()) {
+    const personId = personIds[index];
+    if (personId) await saveLimit({ ctx, input: { tripId, personId, ...limits } });
+  }
+  const tunnelId = shelterIds.at(-1);
+  if (tunnelId) {
+    const split = { shelterId: tunnelId, polesMassKg: 0.52, staysWithSleepers: true };
+    await saveShelterSplit({ ctx, input: { tripId, ...split } });
   }
   await shareOutEvenly({ ctx, input: { tripId } });
   await seedPractice(ctx);

@@ -138,6 +138,28 @@ const anchor = (id: string, count: number): KitItemDetails => {
   return { type: "anchor", name, spec, massKg, count };
 };
 
+/** What is neither shelter nor kit. */
+export const GROUP_THINGS = [
+  { id: null, name: "Stove and wind shield", massKg: 0.42 },
+  { id: null, name: "Gas, two cartridges", massKg: 0.76 },
+  { id: null, name: "Pots and lids", massKg: 0.68 },
+  { id: null, name: "First aid", massKg: 0.54 },
+  { id: null, name: "Water filter", massKg: 0.31 },
+  { id: null, name: "Trowel and repair things", massKg: 0.36 },
+];
+
+/** What each carries of their own, and the most that they carry, kg; by place in the list of people. */
+export const CARRY_LIMITS: readonly { readonly baseMassKg: number; readonly limitKg: number }[] = [
+  { baseMassKg: 9.4, limitKg: 16 },
+  { baseMassKg: 10.1, limitKg: 18 },
+  { baseMassKg: 8.2, limitKg: 12.5 },
+  { baseMassKg: 9.8, limitKg: 17 },
+  { baseMassKg: 8.9, limitKg: 14 },
+  { baseMassKg: 9.1, limitKg: 15 },
+  { baseMassKg: 8.6, limitKg: 13 },
+  { baseMassKg: 10.4, limitKg: 19 },
+];
+
 /** Forty-four stakes for forty-four tie-outs: just enough, and mixed. */
 export const KIT: readonly KitItemDetails[] = [
   anchor("three-blade-200", 18),

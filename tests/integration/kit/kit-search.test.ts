@@ -1,6 +1,6 @@
 import { makeCast } from "../../helpers/actors";
 import { anchorOf, makeCampKit, placementOf, windyCamp } from "../../helpers/camp-kit";
-import { codeOf } from "../../helpers/refusals";
+import { codeOf, refusalOf } from "../../helpers/refusals";
 import { beforeEach, describe, expect, it } from "vitest";
 import { eq } from "drizzle-orm";
 import { getDb } from "@/db/client";
@@ -171,6 +171,22 @@ describe("finding a kit", () => {
     await new Promise((resolve) => setTimeout(resolve, 10));
     expect(await getKitProgress({ ctx, input })).toMatchObject({ isRunning: false, failure: /stopped/ });
     expect((await getKitSearch({ ctx, input })).result).toBeNull();
+  });
+
+  it.each([
+    ["no anchors", { kinds: [] }, "settings.kinds"],
+    ["no camps", { campIds: [] }, "settings.campIds"],
+    ["an anchor that is none", { kinds: [{ source: "library" as const, id: "no-such", most: 1 }] }, "settings.kinds"],
+    ["a negative count", { kinds: [{ source: "library" as const, id: "v-160", most: -1 }] }, "settings.kinds.0.most"],
+    ["half an anchor", { kinds: [{ source: "library" as const, id: "v-160", most: 1.5 }] }, "settings.kinds.0.most"],
+    ["spares without end", { spares: 1e9 }, "settings.spares"],
+    ["work at a negative price", { workPriceKg: -1 }, "settings.workPriceKg"],
+    ["a price that is no number", { workPriceKg: NaN }, "settings.workPriceKg"],
+  ])("refuses %s, and starts nothing", async (_what, over, field) => {
+    const { ctx } = cast.leader;
+    const input = { tripId: cast.tripId, settings: settingsOf(over) };
+    expect(Object.keys((await refusalOf(startKitSearch({ ctx, input }))).fieldErrors)).toEqual([field]);
+    expect(await getKitProgress({ ctx, input })).toEqual({ isRunning: false, progress: null, failure: null });
   });
 
   it("is for leaders of the trip only", async () => {
