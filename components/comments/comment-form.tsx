@@ -22,8 +22,8 @@ export function CommentForm({
 }) {
   const router = useRouter();
   const [body, setBody] = useState("");
-  // Made when the first sending needs it: the server's and the browser's first picture must not differ.
-  const [commentId, setCommentId] = useState("");
+  // Made when the first sending needs it. No state: drawing the form anew would empty the hidden field before it is read.
+  const commentId = useRef("");
   const field = useRef<HTMLTextAreaElement>(null);
   function mention(name: string) {
     const at = field.current?.selectionStart ?? body.length;
@@ -37,14 +37,13 @@ export function CommentForm({
       action={action}
       className="mt-6 border-t border-hair pt-4"
       onSubmitCapture={(event) => {
-        const id = commentId || newId();
-        setCommentId(id);
+        commentId.current ||= newId();
         const hidden = event.currentTarget.elements.namedItem("commentId");
-        if (hidden instanceof HTMLInputElement) hidden.value = id;
+        if (hidden instanceof HTMLInputElement) hidden.value = commentId.current;
       }}
       onDone={() => {
         setBody("");
-        setCommentId("");
+        commentId.current = "";
         router.refresh();
       }}
     >
