@@ -25,6 +25,7 @@ import { createShelter } from "@/lib/services/shelters/create-shelter";
 import { saveSleepers } from "@/lib/services/sleepers/save-sleepers";
 import { createTrip } from "@/lib/services/trips/create-trip";
 import { updateTrip } from "@/lib/services/trips/update-trip";
+import { writeAboutPeople } from "./about-people";
 import { DEMO_PASSWORD, DEMO_PEOPLE, SECOND_LEADER, type DemoPerson } from "./people";
 import { seedCampPulls, seedPractice } from "./pull-tests";
 import { seedRoute } from "./seed-route";
@@ -166,6 +167,8 @@ export async function seedDemo(): Promise<SeedReport | null> {
   const tripIds = [await createMainTrip(contextOf(DEMO_PEOPLE[0])), await createSecondTrip(contextOf(SECOND_LEADER))];
   const [leader, coLeader, participant] = DEMO_PEOPLE.slice(0, 3).map(contextOf);
   if (leader && coLeader && participant) await seedTalk({ leader, coLeader, participant }, tripIds[0] ?? "");
+  const byEmail = (email: string) => contextOf(withAccount.find((one) => one.email === email));
+  await writeAboutPeople(contextOf(DEMO_PEOPLE[0]), byEmail, tripIds[0] ?? "");
   const logIns = [
     ...withAccount.map(({ email, role }) => ({ email, role })),
     { email: SECOND_LEADER.email, role: "leader of another trip" },

@@ -38,6 +38,8 @@ export const outboxMessage = sqliteTable(
     uniqueIndex("outbox_request_address").on(table.requestId, table.toAddress),
     index("outbox_due").on(table.state, table.nextAttemptAt),
     index("outbox_trip").on(table.tripId, table.createdAt),
+    // The worker asks for each message whether an earlier one to the same person still waits.
+    index("outbox_address").on(table.toAddress, table.state, table.createdAt),
   ],
 );
 

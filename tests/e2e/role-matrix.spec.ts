@@ -14,6 +14,12 @@ const OF_THE_LEADER = ["marco@leestead.example", "+99 000 01 42"];
 /** On no page that a participant is refused, though they know the trip. */
 const OF_LEADERS = [CO_LEADER, "marco@leestead.example", "+99 000 01 42", "Way down: the cairned path"];
 
+/** What people wrote about themselves: for themselves and for who leads, on two pages only. */
+const ABOUT_PEOPLE = ["saddle-sore", "hazel pollen", "Giulia Ferrobello", "+99 000 03 41", "Femi Oduya"];
+const MAY_TELL_LEADERS = ["/trips/[tripId]/people/contacts", "GET /api/trips/[tripId]/contact-sheet"];
+/** The co-leader finds their own there. */
+const OWN_PLACES = ["/trips/[tripId]/details", "GET /api/account/export"];
+
 interface Plan {
   readonly people: readonly { readonly id: string; readonly name: string }[];
   readonly pitches: readonly { readonly id: string; readonly version: number; readonly details: object }[];
@@ -112,6 +118,14 @@ const PULL_TABLE = `pulled_at,place,ground,wetness,anchor,lean_deg,line_angle_de
 2027-01-02,Matrix,firm-moist-loam,usual,three-blade-200,0,45,18,kgf,came-out
 `;
 
+/** Health notes and emergency contacts are in no answer but those they are meant for. */
+async function expectDiscreet(response: APIResponse, caller: Caller, name: string, what: string): Promise<void> {
+  if ((caller === "leader" || caller === "coLeader") && MAY_TELL_LEADERS.includes(name)) return;
+  if (caller === "coLeader" && OWN_PLACES.includes(name)) return;
+  const body = await response.text();
+  for (const word of ABOUT_PEOPLE) expect(body.includes(word), `${what} tells ${caller} “${word}”`).toBe(false);
+}
+
 const FORMS: readonly [string, Record<string, string>][] = [
   ["page", {}],
   ["data of a navigation", { RSC: "1" }],
@@ -159,6 +173,7 @@ for (const { name, outcome } of PAGE_ROWS) {
         const response = await getPage(as[caller], fill(name), headers);
         expect(response.headers()["cache-control"], what).toContain("no-store");
         if (expected !== "allowed") await expectSilent(response, caller, what);
+        await expectDiscreet(response, caller, name, what);
         // What is prefetched ends where the first part that asks who is there begins.
         if ("Next-Router-Prefetch" in headers) expect(response.status(), what).toBeLessThan(500);
         else if (expected === "allowed") {
@@ -255,9 +270,15 @@ for (const { name, when, outcome } of ROUTE_ROWS) {
       expect(response.status(), `${what}: ${(await response.text()).slice(0, 200)}`).toBe(status);
       expect(response.headers()["cache-control"], what).toContain("no-store");
       if (expected !== "allowed") await expectSilent(response, caller, what);
+      await expectDiscreet(response, caller, name, what);
     }
   });
 }
+
+test("leaders do find it on the contact sheet", async () => {
+  const sheet = await (await as.coLeader.get(`/trips/${ids.tripId}/people/contacts`)).text();
+  for (const word of ABOUT_PEOPLE) expect(sheet).toContain(word);
+});
 
 test("a route has no other methods", async () => {
   for (const name of new Set(ROUTE_ROWS.map((row) => row.name.split(" ")[1] ?? ""))) {

@@ -63,6 +63,11 @@ const COUNT = "trips/[tripId]/kit#countKitItemAction";
 const PERSON = "trips/[tripId]/people#createPersonAction";
 const SEND = "trips/[tripId]/papers#sendPapersAction";
 const CARRY = "trips/[tripId]/people/packing#assignCarryAction";
+const ROSTER = "trips/[tripId]/people#updateRosterAction";
+const IMPORT = "trips/[tripId]/people#importPeopleAction";
+const ANSWER = "trips/[tripId]/details#saveAnswerAction";
+const DETAILS = "trips/[tripId]/details#saveOwnDetailsAction";
+const EMERGENCY = "trips/[tripId]/emergency#saveEmergencyPlanAction";
 const COPY = "trips#copyTripAction";
 const GUST = { kind: "gust" };
 const million = "x".repeat(1e6);
@@ -116,6 +121,21 @@ const ROWS: readonly [string, string, () => object, string][] = [
     () => ({ contacts: Array(13).fill({ name: "A", phone: "112", note: "" }) as object }),
     "contacts",
   ],
+  [ROSTER, "no places at all", () => ({ capacity: 0 }), "capacity"],
+  [ROSTER, "an answer wanted after the trip begins", () => ({ answerBy: "2027-12-24" }), "answerBy"],
+  [ROSTER, "details kept for ever", () => ({ keepDetailsDays: 1e9 }), "keepDetailsDays"],
+  [IMPORT, "a file without a header", () => ({ csv: "Ada,ada@example.test" }), "csv"],
+  [IMPORT, "a file of a million letters", () => ({ csv: million }), "csv"],
+  [ANSWER, "an answer that is none", () => ({ value: "perhaps" }), "value"],
+  [ANSWER, "a note of a million letters", () => ({ note: million }), "note"],
+  [DETAILS, "a telephone of letters", () => ({ phone: "call me" }), "phone"],
+  [DETAILS, "no agreement", () => ({ hasConsent: false }), "hasConsent"],
+  [DETAILS, "notes of a million letters", () => ({ health: million }), "health"],
+  [EMERGENCY, "a day without a time", () => ({ dueBackTime: "" }), "dueBackTime"],
+  [EMERGENCY, "two addresses", () => ({ outsideEmail: "a@x.test, b@x.test" }), "outsideEmail"],
+  [SEND, "a message that says nothing", () => ({ pieces: [], message: "" }), "pieces"],
+  [SEND, "a time that is over", () => ({ intent: "later", sendDay: "2001-01-01", sendTime: "08:00" }), "sendDay"],
+  [SEND, "a template without a name", () => ({ intent: "template", message: "x", templateName: "" }), "templateName"],
   [COPY, "a day the wrong way round", () => ({ startDate: "01-09-2027" }), "startDate"],
   [PITCH, "a heading beyond the circle", () => ({ details: { headingDeg: 361, patch: "main" } }), "details.headingDeg"],
   [PITCH, "a patch that is not there", () => ({ details: { headingDeg: 1, patch: "third" } }), "details.patch"],

@@ -1,0 +1,1 @@
+CREATE INDEX `outbox_address` ON `outbox_message` (`to_address`,`state`,`created_at`);
