@@ -48,7 +48,7 @@ export function contactSheetPages(
 }
 
 const title = (text: string, width: number): Block =>
-  stack([spacer(12), textBlock(text, width, { size: TYPE.number, weight: 800 }), spacer(3), hairline()]);
+  stack([spacer(12), textBlock(text, width, { size: TYPE.number, weight: 800 })]);
 
 function general(view: ContactSheetView, width: number): PageBlock[] {
   const each = (width - GAP) / 2;
@@ -87,7 +87,7 @@ function personBlocks({ name, role, details }: SheetPerson, width: number): Page
   if (details === null || details === "unreadable") {
     const why = details === null ? "Has written nothing." : "Can't be read with the keys that this server has.";
     const remark = textBlock(why, each, small);
-    return [row(head, remark, each), stack([spacer(5), hairline()])];
+    return [row(head, remark, each)];
   }
   const calls =
     details.emergencyContacts.length === 0
@@ -102,7 +102,6 @@ function personBlocks({ name, role, details }: SheetPerson, width: number): Page
     { ...row(head, calls, each), keepsWithNext: true },
     ...labelled("Health", details.health, width),
     ...labelled("Food", details.diet, width),
-    stack([spacer(5), hairline()]),
   ];
 }
 

@@ -67,6 +67,14 @@ describe("the contact sheet on paper", () => {
     expect(flat(text)).toContain(flat("Can't be read with the keys"));
   });
 
+  it("has no page with nothing but a line on it, however many there are", async () => {
+    for (let count = 1; count <= 14; count += 1) {
+      const silent = Array.from({ length: count }, (_, i) => ({ ...person(`Person ${i}`), details: null }));
+      const { pages } = await render(silent);
+      for (const page of pages) expect(flat(page.text), `${count} people`).toContain(flat("Has written nothing."));
+    }
+  });
+
   it("loses nothing of the longest notes and keeps inside the page, for 40 people and for none", async () => {
     const long = person("L".repeat(80), {
       health: Array.from({ length: 100 }, (_, i) => `note ${i}`)
