@@ -107,7 +107,9 @@ function personBlocks({ name, role, details }: SheetPerson, width: number): Page
 
 const row = (left: Block, right: Block, each: number): Block =>
   stack([
-    spacer(7),
+    spacer(5),
+    hairline(),
+    spacer(6),
     columns(
       [
         { width: each, block: left },
