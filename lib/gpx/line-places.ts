@@ -5,6 +5,8 @@ import type { LineData } from "./measure-line";
 
 const RADIANS = Math.PI / 180;
 const DEGREE_M = 111_320;
+/** Places that differ by less than this, m, are alike. */
+const SAME_M = 0.01;
 
 /** Index of the last point that lies at or before a place along the line. */
 export function pointBefore(line: LineData, atM: number): number {
@@ -46,6 +48,12 @@ interface Found {
   readonly offM: number;
 }
 
+interface Candidate extends Found {
+  /** The point before it, and the share of the way to the next. */
+  readonly index: number;
+  readonly share: number;
+}
+
 /**
  * The place of the line nearest to a place, at or after `fromM`; the first of several that are alike. On a plane around
  * the place, which is good for the few hundred metres that count.
@@ -55,7 +63,7 @@ export function nearestOnLine(line: LineData, place: LatLon, fromM = 0): Found |
   const starts = new Set(line.starts);
   const xOf = (index: number) => normaliseLongitude(itemAt(line.longitudes, index) - place.longitude) * eastM;
   const yOf = (index: number) => (itemAt(line.latitudes, index) - place.latitude) * DEGREE_M;
-  let best: Found | null = null;
+  let best: Candidate | null = null;
   for (let index = 0; index + 1 < line.atM.length; index += 1) {
     const endM = itemAt(line.atM, index + 1);
     if (endM < fromM || starts.has(index + 1)) continue;
@@ -68,11 +76,14 @@ export function nearestOnLine(line: LineData, place: LatLon, fromM = 0): Found |
     const least = endM > startM ? Math.max(0, (fromM - startM) / (endM - startM)) : 0;
     const share = square > 0 ? Math.min(1, Math.max(least, -(ax * dx + ay * dy) / square)) : least;
     const offM = Math.hypot(ax + share * dx, ay + share * dy);
-    if (!best || offM < best.offM - 1) best = { atM: startM + (endM - startM) * share, offM };
+    if (!best || offM < best.offM - SAME_M) best = { atM: startM + (endM - startM) * share, offM, index, share };
   }
   return best && refine(line, place, best);
 }
 
-function refine(line: LineData, place: LatLon, found: Found): Found {
-  return { atM: found.atM, offM: distanceM(place, placeOnLine(line, found.atM)) };
+/** Measured on the ellipsoid, and between these two points: at a break, two places have the same distance walked. */
+function refine(line: LineData, place: LatLon, { atM, index, share }: Candidate): Found {
+  const from = { latitude: itemAt(line.latitudes, index), longitude: itemAt(line.longitudes, index) };
+  const to = { latitude: itemAt(line.latitudes, index + 1), longitude: itemAt(line.longitudes, index + 1) };
+  return { atM, offM: distanceM(place, placeBetween(from, to, share)) };
 }

@@ -102,7 +102,7 @@ export function simplifyLine(line: LineData): SimplifiedLine {
   const total = line.latitudes.length;
   return spans.map(([from, to]) => {
     const share = 2 + Math.floor((room * (to - from)) / total);
-    const { indices } = simplifyToCount(x.subarray(from, to), y.subarray(from, to), share);
+    const indices = simplifyToCount(x.subarray(from, to), y.subarray(from, to), share);
     return indices.map((index) => {
       const point = from + index;
       return [itemAt(line.latitudes, point), itemAt(line.longitudes, point), itemAt(line.atM, point)] as const;

@@ -10,7 +10,12 @@ const MAX_TEXT = 4000;
 /** White space before the first mark belongs to no XML file, but some programs write it. */
 const LEADING_SPACE = /^\s+/;
 
-const POINT_TAGS: Readonly<Record<string, PointTag>> = { trkpt: "trkpt", rtept: "rtept", wpt: "wpt" };
+/** Not an object: a file may have a part that is called "constructor". */
+const POINT_TAGS: ReadonlyMap<string, PointTag> = new Map([
+  ["trkpt", "trkpt"],
+  ["rtept", "rtept"],
+  ["wpt", "wpt"],
+]);
 
 /** Walks through the tags of one file and hands what counts to the builder. */
 class GpxReader {
@@ -20,7 +25,6 @@ class GpxReader {
   private readonly open: string[] = [];
   private prefix = "";
   private text = "";
-  private isDone = false;
 
   constructor() {
     this.parser.on("doctype", () => this.refuse("a DOCTYPE, which a GPX file never needs"));
@@ -44,7 +48,6 @@ class GpxReader {
 
   close(): GpxFile {
     this.parser.close();
-    if (!this.isDone) throw new GpxFault("The file is empty.");
     return this.builder.finish();
   }
 
@@ -62,7 +65,6 @@ class GpxReader {
     const [before, local] = tag.name.includes(":") ? tag.name.split(":", 2) : ["", tag.name];
     if (local !== "gpx") throw new GpxFault(`This is not a GPX file: it begins with <${tag.name.slice(0, 60)}>.`);
     this.prefix = before ? `${before}:` : "";
-    this.isDone = true;
     const version = tag.attributes.version;
     if (version !== "1.1" && version !== "1.0") {
       this.builder.remark(
@@ -83,7 +85,7 @@ class GpxReader {
     const name = parent === "" || parent === "extensions" ? "" : this.localName(tag.name);
     this.open.push(name);
     this.text = "";
-    const point = POINT_TAGS[name];
+    const point = POINT_TAGS.get(name);
     if (point) this.builder.openPoint(point, tag.attributes, this.parser.line);
     else if (name === "trk" || name === "rte") this.builder.openLine(name);
     else if (name === "trkseg") this.builder.openSegment();
@@ -95,9 +97,9 @@ class GpxReader {
     const text = this.text.trim();
     this.text = "";
     if (name === "") return;
-    if (POINT_TAGS[name]) this.builder.closePoint();
+    if (POINT_TAGS.has(name)) this.builder.closePoint();
     else if (name === "trk" || name === "rte") this.builder.closeLine();
-    else if (name === "ele" && POINT_TAGS[parent]) this.builder.setHeight(text, this.parser.line);
+    else if (name === "ele" && POINT_TAGS.has(parent)) this.builder.setHeight(text, this.parser.line);
     else if (name === "name") this.builder.setName(parent, text, this.open.length === 1);
     else if ((name === "desc" || name === "cmt") && parent === "wpt") this.builder.setNote(text);
   }
@@ -115,5 +117,6 @@ export function readGpx(bytes: Uint8Array): GpxFile {
     if (text !== "") isFirst = false;
     reader.write(text);
   }
+  if (isFirst) throw new GpxFault("The file is empty.");
   return reader.close();
 }

@@ -6,6 +6,7 @@ import { readFileSync, writeFileSync } from "node:fs";
 import { fileURLToPath } from "node:url";
 import { PUBLISHED_CASES } from "../fixtures/published-cases";
 import { PUBLISHED_LEARNING_CASES } from "../fixtures/published-cases-learning";
+import { PUBLISHED_ROUTE_CASES } from "../fixtures/published-cases-route";
 import { PUBLISHED_STRUCTURE_CASES } from "../fixtures/published-cases-structure";
 import { PUBLISHED_WEATHER_CASES } from "../fixtures/published-cases-weather";
 

@@ -23,11 +23,14 @@ function squareOf({ zone, eastingM, northingM }: Utm): string | null {
  * @param digits 1 (10 km) … 5 (1 m) @returns null where UTM does not reach
  */
 export function toMgrs(place: LatLon, digits = 5): string | null {
-  const utm = toUtm(place);
-  const square = utm && squareOf(utm);
-  if (!utm || !square) return null;
+  const found = toUtm(place);
+  if (!found) return null;
+  // A hair south of the equator the northing rounds up to the equator's, which has no square in the south.
+  const utm = found.isNorth ? found : { ...found, northingM: Math.min(found.northingM, 9_999_999.999) };
+  const square = squareOf(utm);
+  if (!square) return null;
   const part = (metres: number) =>
-    String(Math.floor((metres % SQUARE_M) + 1e-6))
+    String(Math.min(SQUARE_M - 1, Math.floor((metres % SQUARE_M) + 1e-6)))
       .padStart(5, "0")
       .slice(0, digits);
   return `${utm.zone}${utm.band} ${square} ${part(utm.eastingM)} ${part(utm.northingM)}`;

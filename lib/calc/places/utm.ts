@@ -108,13 +108,15 @@ export function toUtm({ latitude, longitude }: LatLon, zone = zoneOf(latitude, l
   requireInRange("longitude", longitude, -540, 540);
   if (latitude < UTM_SOUTH_DEG || latitude > UTM_NORTH_DEG) return null;
   const { x, y } = project(latitude, normaliseLongitude(longitude - meridianOf(zone)));
-  const isNorth = latitude >= 0;
+  const band = bandOf(latitude);
+  const isNorth = band >= "N";
+  const northM = y * SCALE;
   return {
     zone,
-    band: bandOf(latitude),
+    band,
     isNorth,
     eastingM: x * SCALE + FALSE_EASTING_M,
-    northingM: y * SCALE + (isNorth ? 0 : FALSE_NORTHING_M),
+    northingM: isNorth ? Math.max(0, northM) : northM + FALSE_NORTHING_M,
   };
 }
 

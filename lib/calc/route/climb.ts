@@ -1,7 +1,7 @@
 import { itemAt } from "../indexed";
 import { RADIANS_PER_DEGREE } from "../units";
 import { stationAtM } from "./profile";
-import { toblerSpeedMs } from "./walking-time";
+import { toblerSpeedMs, walkedSlope } from "./walking-time";
 import type { LegFacts, Profile } from "./types";
 
 /** Rises and falls smaller than this, m, are taken for scatter of the heights and not counted. Our choice. */
@@ -115,7 +115,7 @@ function addStep(totals: RunningTotals, index: number, counted: number): void {
   const down = isKnown ? Math.max(0, -counted) : 0;
   const slopeDeg = lengthM > 0 ? Math.atan(down / lengthM) / RADIANS_PER_DEGREE : 0;
   const rise = (profile.heightsM[index + 1] ?? 0) - (profile.heightsM[index] ?? 0);
-  const slope = isKnown && lengthM > 0 ? rise / lengthM : 0;
+  const slope = isKnown && lengthM > 0 ? walkedSlope(rise / lengthM) : 0;
   const add = (sums: Float64Array, value: number) => (sums[index + 1] = itemAt(sums, index) + value);
   add(totals.ascentM, up);
   add(totals.descentM, down);

@@ -1,6 +1,6 @@
 import { stationAtM } from "./profile";
 import type { Profile } from "./types";
-import { toblerSpeedMs } from "./walking-time";
+import { toblerSpeedMs, walkedSlope } from "./walking-time";
 import { walkingPowerW, type WalkerLoad } from "./energy";
 
 export interface LegEnergy {
@@ -43,7 +43,7 @@ function listSteps(profile: Profile, fromM: number, toM: number) {
     const high = profile.heightsM[index + 1] ?? null;
     if (low === null || high === null) return null;
     const lengthM = Math.min(endM, toM) - Math.max(startM, fromM);
-    if (lengthM > 0) steps.push({ lengthM, slope: (high - low) / (endM - startM) });
+    if (lengthM > 0) steps.push({ lengthM, slope: walkedSlope((high - low) / (endM - startM)) });
   }
   return steps;
 }

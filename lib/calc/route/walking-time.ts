@@ -44,6 +44,11 @@ export function toblerSpeedMs(slope: number): number {
   return (6 * Math.exp(-3.5 * Math.abs(slope + 0.05)) * METRES_PER_KM) / 3600;
 }
 
+/** Steeper than 45° nobody walks: such pieces are faults of heights, and count as 45°. Our choice. */
+export function walkedSlope(slope: number): number {
+  return Math.min(1, Math.max(-1, slope));
+}
+
 /** Off the path Tobler takes six tenths of the speed (same source). */
 export const TOBLER_OFF_PATH = 0.6;
 
