@@ -304,6 +304,8 @@ export interface PaperCamp {
   readonly forecast: PaperForecast | null;
   /** What to do first when ground is softer or wind stronger, per pitch id, in order. */
   readonly fallbacks: Readonly<Record<string, readonly string[]>>;
+  /** The day's way to it, in sentences; empty when it is not known. */
+  readonly way: readonly string[];
 }
 
 export type PaperDocument =

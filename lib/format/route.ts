@@ -1,7 +1,7 @@
 import type { Preferences } from "@/lib/domain/preferences";
 import type { LegResult, RouteView } from "@/lib/domain/route/views";
 import { describeDaylight } from "./daylight";
-import { formatClimb, formatDistance } from "./distances";
+import { formatClimb, formatClock, formatDistance } from "./distances";
 import { joinWords, numberWord, plural, startSentence } from "./words";
 
 type LengthUnit = Preferences["lengthUnit"];
@@ -72,12 +72,17 @@ function describeTotals(legs: readonly LegResult[], unit: LengthUnit): string {
   return `${parts.filter((part) => part !== null).join(", ")}.`;
 }
 
-/** "14.2 km, 480 m up" for the rail and other narrow places. */
-export function describeLegShort(
-  leg: { readonly distanceM: number | null; readonly ascentM: number | null },
-  unit: LengthUnit,
-): string | null {
-  if (leg.distanceM === null) return null;
-  const climb = leg.ascentM === null ? "" : `, ${formatClimb(leg.ascentM, unit)} up`;
-  return `${formatDistance(leg.distanceM, unit)}${climb}`;
+/** A day's way on paper: "From Otterbed: 10.4 km, 430 m up, 50 m down." and when it ends. */
+export function describeWay(leg: LegResult, pitchingMin: number | null, unit: LengthUnit): readonly string[] {
+  if (leg.distanceM === null) return [];
+  const parts = [
+    formatDistance(leg.distanceM, unit),
+    leg.ascentM === null ? null : `${formatClimb(leg.ascentM, unit)} up`,
+    leg.descentM === null ? null : `${formatClimb(leg.descentM, unit)} down`,
+  ];
+  const from = leg.fromName === "Start" ? "From the start" : `From ${leg.fromName}`;
+  const length = `${from}: ${parts.filter((part) => part !== null).join(", ")}.`;
+  if (leg.arriveMin === null || leg.setOffMin === null) return [length];
+  const hours = `${formatClock(leg.setOffMin)} to ${formatClock(leg.arriveMin)}.`;
+  return [length, `${hours} ${describeDaylight(leg, pitchingMin).text}`];
 }

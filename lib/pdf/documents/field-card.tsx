@@ -175,6 +175,7 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
           width,
           block: stackNotes([
             note("Place", [position ?? "position not said", altitude].filter(Boolean).join("\n"), width),
+            camp.way.length ? note("Way here", camp.way.join(" "), width) : null,
             water ? note("Water", water, width) : null,
             details.notes ? note("Notes", details.notes, width) : null,
           ]),

@@ -16,6 +16,7 @@ import { buildOwnPages } from "../own-pages/build-own-pages";
 import { buildPackList, loadPackSources } from "../pack/internal";
 import { findCampState, loadTripState, type TripState } from "../plan/load-trip-state";
 import { getPreferences } from "../preferences/get-preferences";
+import { listWays } from "../route/list-ways";
 import { toTripView } from "../trips/internal";
 import { parseInput } from "../trips/parse-input";
 import { markHandedOut } from "./mark-handed-out";
@@ -97,7 +98,9 @@ export async function getPaperDocument({
   const db = getDb();
   const state = await loadPrinted(ctx, paper, tripId, standing);
   const { speedUnit, lengthUnit } = await getPreferences({ ctx });
-  const desk: Desk = { state, standing, speedUnit, lengthUnit };
+  const hasWays = paper.kind === "field-card" || paper.kind === "booklet";
+  const ways = hasWays ? await listWays(db, tripId, lengthUnit) : undefined;
+  const desk: Desk = { state, standing, speedUnit, lengthUnit, ...(ways ? { ways } : {}) };
   const header = writeHeader(desk, paper);
   const { contacts } = state.trip;
   switch (paper.kind) {

@@ -11,6 +11,8 @@ import { listFallbacks } from "./fallbacks";
 export interface PaperDesk {
   readonly state: TripState;
   readonly speedUnit: Preferences["speedUnit"];
+  /** By the camp's id; papers without it do not print the way. */
+  readonly ways?: ReadonlyMap<string, readonly string[]>;
 }
 
 /** "3 of 5", or "3–4 of 5" for two nights. */
@@ -36,7 +38,7 @@ async function findPaperForecast({ state }: PaperDesk, own: CampState): Promise<
 
 /** A camp worked out for printing; one pitch of it, or all. */
 export async function toPaperCamp(desk: PaperDesk, own: CampState, pitchId: string | null): Promise<PaperCamp> {
-  const { state, speedUnit } = desk;
+  const { state, speedUnit, ways } = desk;
   const worked = await workOutCamp(own);
   const isWanted = (id: string) => pitchId === null || id === pitchId;
   const names = new Map(state.people.map((one) => [one.id, one.name]));
@@ -54,5 +56,6 @@ export async function toPaperCamp(desk: PaperDesk, own: CampState, pitchId: stri
       pitches.map((pitch) => [pitch.id, pitch.sleeperIds.flatMap((id) => names.get(id) ?? [])]),
     ),
     fallbacks: Object.fromEntries(Object.entries(fallbacks).filter(([id]) => isWanted(id))),
+    way: ways?.get(own.camp.id) ?? [],
   };
 }

@@ -10,6 +10,7 @@ import { cloneCamp } from "../camps/clone-camp";
 import { listAlternativeRows, listCampRows } from "../camps/internal";
 import { listKitRows } from "../kit/internal";
 import { loadLoadSources } from "../pack/load-pieces";
+import { copyRoute } from "../route/copy-route";
 import { listShelterRows } from "../shelters/internal";
 import { loadTripRow, recordChange, requireRoomForTrip } from "./internal";
 import { parseInput } from "./parse-input";
@@ -135,6 +136,7 @@ export async function copyTrip({
       });
       camps.set(camp.id, campId);
     }
+    await copyRoute(tx, tripId, copyId, camps);
     await recordChange(tx, ctx, {
       tripId: copyId,
       action: "copy",

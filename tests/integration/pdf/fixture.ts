@@ -100,6 +100,10 @@ export function paperCamp(requests: readonly PitchRequest[], details: CampDetail
     placements,
     result,
     sleeperNames: Object.fromEntries(requests.map((one, i) => [`${id}-pitch-${i + 1}`, one.sleepers ?? []])),
+    way: [
+      "From Otter Flat: 10.4\u2009km, 430\u2009m up, 50\u2009m down.",
+      "9:30 to 15:56. Pitching begins 44\u2009min before dark.",
+    ],
     fallbacks: Object.fromEntries(
       pitches.map((pitch) => [
         pitch.id,

@@ -1,7 +1,9 @@
+import Link from "next/link";
 import { redirect } from "next/navigation";
 import { Suspense } from "react";
 import { Alternatives } from "@/components/forecast/alternatives";
 import { TripForecasts } from "@/components/forecast/trip-forecasts";
+import { ElevationProfile } from "@/components/route/elevation-profile";
 import { AltitudeSteps } from "@/components/trip/altitude-steps";
 import { BeforeYouGo } from "@/components/trip/before-you-go";
 import { NightsTable } from "@/components/trip/nights-table";
@@ -10,11 +12,14 @@ import { TripFacts } from "@/components/trip/trip-facts";
 import { LinkButton } from "@/components/ui/button";
 import { Cautions, EmptyState, PageHeading, Section } from "@/components/ui/layout";
 import { isAllowed } from "@/lib/domain/permissions/permissions";
+import { workOutLegs } from "@/lib/domain/route/work-out-legs";
 import type { Preferences } from "@/lib/domain/preferences";
 import type { TripView } from "@/lib/domain/views";
 import { listAlternatives } from "@/lib/services/camps/list-alternatives";
 import { listTripForecasts } from "@/lib/services/forecast/list-trip-forecasts";
+import { describeRoute } from "@/lib/format/route";
 import type { Context } from "@/lib/services/context/context";
+import { getRoute } from "@/lib/services/route/get-route";
 import { getTripOverview } from "@/lib/services/trips/get-trip-overview";
 import { loadTrip } from "../_lib/load-trip";
 import { checkAllCampsAction, switchToAlternativeAction } from "../camps/[campId]/weather/actions";
@@ -41,6 +46,7 @@ export default async function TripPage({ params }: TripPageProps) {
 
 async function Overview({ ctx, tripId, preferences }: { ctx: Context; tripId: string; preferences: Preferences }) {
   const overview = await getTripOverview({ ctx, input: { tripId } });
+  const route = await getRoute({ ctx, input: { tripId } });
   const { trip, camps, headline, subline, todo } = overview;
   const mayArrange = isAllowed(trip.role, "camp.arrange");
   if (camps.length === 0) {
@@ -71,7 +77,19 @@ async function Overview({ ctx, tripId, preferences }: { ctx: Context; tripId: st
       }
     >
       <PageHeading title={headline} lead={subline} />
-      <AltitudeSteps camps={camps} unit={preferences.lengthUnit} />
+      {route.line ? (
+        <div className="mb-8 hidden sm:block">
+          <ElevationProfile view={route} unit={preferences.lengthUnit} moves={null} />
+          <p className="text-15">
+            {describeRoute(workOutLegs(route), route, preferences.lengthUnit).title}.{" "}
+            <Link href={`/trips/${trip.id}/route`} className="font-semibold text-spruce hover:underline">
+              Look at the days
+            </Link>
+          </p>
+        </div>
+      ) : (
+        <AltitudeSteps camps={camps} unit={preferences.lengthUnit} />
+      )}
       <h2 className="sr-only">Nights</h2>
       <NightsTable tripId={trip.id} camps={camps} preferences={preferences} />
       {mayArrange && (
