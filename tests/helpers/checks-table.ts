@@ -33,6 +33,7 @@ export function checksTable(): string {
     ...PUBLISHED_STRUCTURE_CASES,
     ...PUBLISHED_LEARNING_CASES,
     ...PUBLISHED_WEATHER_CASES,
+    ...PUBLISHED_ROUTE_CASES,
   ].map((row) => {
     const ours = row.ours();
     const numbers = [`${figure(row.published)} ${row.unit}`, figure(ours), difference(row.published, ours)];
