@@ -1,0 +1,56 @@
+import { expect, test, type CDPSession, type Page } from "@playwright/test";
+import { CO_LEADER, openAs } from "./people";
+
+/** A finger, as the browser itself reports one. */
+async function touch(cdp: CDPSession, type: "touchStart" | "touchMove" | "touchEnd", at?: { x: number; y: number }) {
+  await cdp.send("Input.dispatchTouchEvent", { type, touchPoints: at ? [at] : [] });
+}
+
+async function centreOf(page: Page, selector: ReturnType<Page["getByRole"]>): Promise<{ x: number; y: number }> {
+  const box = await selector.boundingBox();
+  if (!box) throw new Error("It is not on the screen.");
+  return { x: box.x + box.width / 2, y: box.y + box.height / 2 };
+}
+
+test("by touch: hold a piece of the tray, draw it onto a tie-out, let go", async ({ browser }) => {
+  const page = await openAs(browser, CO_LEADER, { viewport: { width: 1024, height: 1366 }, hasTouch: true });
+  const cdp = await page.context().newCDPSession(page);
+  await page
+    .getByRole("link", { name: /Skarn Edge round/ })
+    .first()
+    .click();
+  await page
+    .locator("a[href*='/camps/']")
+    .filter({ hasNotText: /add|new/i })
+    .first()
+    .click();
+  const tray = page.getByRole("region", { name: "Kit tray" });
+  const piece = tray.getByRole("button", { name: /[1-9]\d* of \d+ left/ }).first();
+  await piece.scrollIntoViewIfNeeded();
+  const before = (await piece.textContent()) ?? "";
+  const [, left, of] = /(\d+) of (\d+) left/.exec(before) ?? [];
+  const name = before.split(/\d+ of/)[0] ?? "";
+  const target = page
+    .getByLabel(/ from above/)
+    .getByRole("button", { name: /^Tie-out 1, / })
+    .first();
+
+  const from = await centreOf(page, piece);
+  const to = await centreOf(page, target);
+  await touch(cdp, "touchStart", from);
+  await page.waitForTimeout(350);
+  for (let step = 1; step <= 12; step += 1) {
+    await touch(cdp, "touchMove", {
+      x: from.x + ((to.x - from.x) * step) / 12,
+      y: from.y + ((to.y - from.y) * step) / 12,
+    });
+    await page.waitForTimeout(20);
+  }
+  await expect(page.getByText(/is over .*\b1\b/).first()).toBeAttached();
+  await touch(cdp, "touchEnd");
+  const same = tray.getByRole("button", { name: new RegExp(name.trim().replace(/[()]/g, "."), "i") }).first();
+  await expect(same).toContainText(`${Number(left) - 1} of ${of} left`);
+  await page.getByRole("button", { name: "Undo" }).click();
+  await expect(same).toContainText(`${left} of ${of} left`);
+  await page.context().close();
+});
