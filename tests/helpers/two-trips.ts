@@ -112,7 +112,6 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
     ctx,
     input: { tripId, campId: kit.campId, sleepers: [{ personId: sleeperId, pitchId: kit.pitchId }] },
   });
-  await keepFoundKit(tripId, kit);
   const line = { id: null, name: "Mug", isGroupThing: false, massKg: 0.1 };
   await savePackItems({ ctx, input: { tripId, personId: null, items: [line] } });
   const [item] = await getDb()
@@ -157,6 +156,8 @@ async function fillTrip(ctx: Context, tripId: string, sleeperId: string) {
   await savePhoto({ ctx, input: { pullTestId, keepsPosition: false, content: TINY_PNG } });
   await importGpx({ ctx, input: { tripId, fileName: "way.gpx" }, bytes: new TextEncoder().encode(SHORT_WAY) });
   const { gearId } = await createGear({ ctx, input: { details: { type: "anchor", anchor: cordOf("Own cord") } } });
+  // Last: a change of what it stands on would make it out of date.
+  await keepFoundKit(tripId, kit);
   return {
     ...kit,
     spareCampId,

@@ -68,6 +68,11 @@ const IMPORT = "trips/[tripId]/people#importPeopleAction";
 const ANSWER = "trips/[tripId]/details#saveAnswerAction";
 const DETAILS = "trips/[tripId]/details#saveOwnDetailsAction";
 const EMERGENCY = "trips/[tripId]/emergency#saveEmergencyPlanAction";
+const THINGS = "trips/[tripId]/people/packing#saveGroupThingsAction";
+const SPLIT = "trips/[tripId]/people/packing#saveShelterSplitAction";
+const LIMIT = "trips/[tripId]/people/packing#saveLimitAction";
+const SEASON = "trips/[tripId]/people/packing#addSeasonItemsAction";
+const OWN_LOAD = "trips/[tripId]/mine#saveOwnLoadAction";
 const COPY = "trips#copyTripAction";
 const GUST = { kind: "gust" };
 const million = "x".repeat(1e6);
@@ -121,6 +126,16 @@ const ROWS: readonly [string, string, () => object, string][] = [
     () => ({ contacts: Array(13).fill({ name: "A", phone: "112", note: "" }) as object }),
     "contacts",
   ],
+  [THINGS, "a thing of negative mass", () => ({ things: [{ id: null, name: "Pot", massKg: -1 }] }), "things.0.massKg"],
+  [THINGS, "a thing without a name", () => ({ things: [{ id: null, name: " ", massKg: 1 }] }), "things.0.name"],
+  [THINGS, "things as text", () => ({ things: "pots" }), "things"],
+  [SPLIT, "poles as heavy as the shelter", () => ({ polesMassKg: 0.75 }), "polesMassKg"],
+  [SPLIT, "poles of no number", () => ({ polesMassKg: "NaN" }), "polesMassKg"],
+  [LIMIT, "a limit of nothing", () => ({ limitKg: 0 }), "limitKg"],
+  [LIMIT, "own things of 1e308 kg", () => ({ baseMassKg: 1e308 }), "baseMassKg"],
+  [SEASON, "a season of no year", () => ({ season: "monsoon" }), "season"],
+  [OWN_LOAD, "a body of 3 kg", () => ({ bodyMassKg: 3 }), "bodyMassKg"],
+  [OWN_LOAD, "nine tenths of the body mass", () => ({ limitPercent: 90 }), "limitShare"],
   [ROSTER, "no places at all", () => ({ capacity: 0 }), "capacity"],
   [ROSTER, "an answer wanted after the trip begins", () => ({ answerBy: "2027-12-24" }), "answerBy"],
   [ROSTER, "details kept for ever", () => ({ keepDetailsDays: 1e9 }), "keepDetailsDays"],

@@ -82,6 +82,8 @@ describe("actions", () => {
       const text = JSON.stringify(form);
       for (const [own, foreign] of listTwins()) {
         if (!text.includes(own) || own === given.a.gearId) continue;
+        // A reading alone says where it belongs, and this person leads there too.
+        if (own === given.a.pullTestId && !("tripId" in form)) continue;
         await refuses(name, JSON.parse(text.replaceAll(own, foreign)) as object);
         tried.push(`${name} ${own}`);
       }
