@@ -8,6 +8,8 @@
  * rows stand at each level, compared from the worst level on. All cited from memory.
  */
 
+import { itemAt } from "./indexed";
+
 /** Rows × kinds. A value is better the larger it is; null means this kind can't be used there. */
 export interface GroupedProblem {
   /** One array per row with one entry per kind; finite numbers or null. */
@@ -201,7 +203,7 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
   const rank = new Int32Array(rows * kindsAndEmpty).fill(-1);
   for (let row = 0; row < rows; row++) {
     for (let kind = 0; kind < kinds; kind++) {
-      const value = problem.values[row]?.[kind] ?? null;
+      const value = itemAt(problem.values, row)[kind] ?? null;
       if (value !== null && at(problem.counts, kind) > 0) rank[row * kindsAndEmpty + kind] = levelOf.get(value) ?? -1;
     }
     rank[row * kindsAndEmpty + kinds] = levelOf.get(problem.emptyValues[row] ?? 0) ?? -1;
@@ -209,7 +211,7 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
 
   const kindOfRow = new Int32Array(rows).fill(-1);
   const rowsOfKind: number[][] = Array.from({ length: kindsAndEmpty }, () => []);
-  const isFree = (kind: number) => kind === kinds || (rowsOfKind[kind]?.length ?? 0) < at(problem.counts, kind);
+  const isFree = (kind: number) => kind === kinds || itemAt(rowsOfKind, kind).length < at(problem.counts, kind);
   /** The row of `from` that is moved to `to` at the least cost; −1 = none can. */
   const mover = new Int32Array(kindsAndEmpty * kindsAndEmpty).fill(-1);
   const findMovers = (from: number) => {
@@ -286,7 +288,7 @@ export function assignLexicographic(problem: GroupedProblem): Assignment {
     for (let kind = end; at(previous, kind) >= 0; kind = at(previous, kind)) {
       const from = at(previous, kind);
       const moved = at(mover, from * kindsAndEmpty + kind);
-      rowsOfKind[from] = (rowsOfKind[from] ?? []).filter((one) => one !== moved);
+      rowsOfKind[from] = itemAt(rowsOfKind, from).filter((one) => one !== moved);
       rowsOfKind[kind]?.push(moved);
       kindOfRow[moved] = kind;
       touched.push(from);
@@ -316,10 +318,10 @@ export function assignBottleneck(
         const value = values[row]?.[kind] ?? null;
         if (value === null || value < threshold || seen.has(kind)) continue;
         seen.add(kind);
-        const holders = rowsOfKind[kind] ?? [];
+        const holders = itemAt(rowsOfKind, kind);
         const yielding = holders.length < at(counts, kind) ? row : holders.find((holder) => place(holder, seen));
         if (yielding === undefined) continue;
-        rowsOfKind[kind] = [...(rowsOfKind[kind] ?? []).filter((one) => one !== yielding), row];
+        rowsOfKind[kind] = [...holders.filter((one) => one !== yielding), row];
         kindOfRow[row] = kind;
         return true;
       }
