@@ -56,7 +56,7 @@ test("pages for everybody", async ({ page }) => {
 });
 
 test("a leader's pages", async ({ browser }) => {
-  test.setTimeout(300_000);
+  test.setTimeout(600_000);
   const page = await openAs(browser, LEADER);
   await page.goto("/trips");
   const trip = (await page.getByRole("link", { name: "Skarn Edge round" }).getAttribute("href")) ?? "";
