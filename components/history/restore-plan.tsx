@@ -1,7 +1,6 @@
 "use client";
 
 import { useState } from "react";
-import { useRouter } from "next/navigation";
 import { ConfirmButton } from "@/components/ui/confirm-button";
 import type { FormAction } from "@/components/ui/action-form";
 import type { PlanPreview } from "@/lib/domain/history/views";
@@ -18,7 +17,6 @@ export function RestorePlan({
   readonly preview: PlanPreview;
   readonly intentId: string;
 }) {
-  const router = useRouter();
   const [id] = useState(intentId);
   return (
     <ConfirmButton
@@ -34,7 +32,6 @@ export function RestorePlan({
         "baseVersion:number": String(preview.currentVersion),
         intentId: id,
       }}
-      onDone={() => router.push(`/trips/${tripId}/history?camp=${preview.campId}`)}
     >
       <p>
         The plan becomes as it was then, as a new version. The one of now stays in the history and can be brought back
