@@ -99,6 +99,7 @@ test("an earlier staking plan is looked at, brought back, and taken back again",
   await page.getByLabel("Camp", { exact: true }).selectOption({ label: "Skarn Edge" });
   await page.getByRole("button", { name: "Show", exact: true }).tap();
   const versions = page.getByRole("list", { name: /^Versions of the staking plan/ });
+  await expect(versions).toBeVisible();
   const before = await versions.getByRole("listitem").count();
   await versions.getByRole("link", { name: /version 1$/ }).tap();
   await expect(page.getByRole("heading", { name: /tie-outs? would change/ })).toBeVisible();

@@ -22,16 +22,22 @@ test("by touch: hold a piece of the tray, draw it onto a tie-out, let go", async
   const camp = page.getByRole("link", { name: /Alder Bottom/ }).first();
   await page.goto((await camp.getAttribute("href")) ?? "");
   const tray = page.getByRole("region", { name: "Kit tray" });
-  const piece = tray.getByRole("button", { name: /[1-9]\d* of \d+ left/ }).first();
-  await piece.scrollIntoViewIfNeeded();
-  const before = (await piece.textContent()) ?? "";
-  const [, left, of] = /(\d+) of (\d+) left/.exec(before) ?? [];
-  const name = (/^.*?\d\s*mm/.exec(before)?.[0] ?? before).replace(/\s+/g, "\\s+");
   const target = page
     .getByLabel(/ from above/)
     .getByRole("button", { name: /^Tie-out 1, / })
     .first();
 
+  // A kind that does not stand there yet, so that the count shows what happened.
+  const there = (await target.getAttribute("aria-label")) ?? "";
+  const nameOf = (text: string) => /^.*?\d\s*mm/.exec(text)?.[0] ?? text;
+  const pieces = tray.getByRole("button", { name: /[1-9]\d* of \d+ left/ });
+  const texts = await pieces.allTextContents();
+  const index = texts.findIndex((text) => !there.replace(/\s/g, " ").includes(nameOf(text).replace(/\s/g, " ")));
+  const piece = pieces.nth(index);
+  await piece.scrollIntoViewIfNeeded();
+  const before = (await piece.textContent()) ?? "";
+  const [, left, of] = /(\d+) of (\d+) left/.exec(before) ?? [];
+  const name = nameOf(before).replace(/\s+/g, "\\s+");
   const from = await centreOf(page, piece);
   const to = await centreOf(page, target);
   await touch(cdp, "touchStart", from);
