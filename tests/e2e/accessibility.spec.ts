@@ -122,6 +122,22 @@ test("a leader's pages", async ({ browser }) => {
   await page.context().close();
 });
 
+test("a leader's pages of the way, the weather, the kit and the people", async ({ browser }) => {
+  test.setTimeout(600_000);
+  const page = await openAs(browser, LEADER);
+  await page.goto("/trips");
+  const trip = (await page.getByRole("link", { name: "Skarn Edge round" }).getAttribute("href")) ?? "";
+  await page.goto(trip);
+  const camp =
+    (await page
+      .getByRole("link", { name: /Skarn Edge/ })
+      .first()
+      .getAttribute("href")) ?? "";
+  const parts = ["/route", "/kit/find", "/people/contacts", "/emergency", "/details", "/messages"];
+  for (const path of [...parts.map((part) => `${trip}${part}`), `${camp}/weather`]) await check(page, path);
+  await page.context().close();
+});
+
 test("a participant's pages", async ({ browser }) => {
   const page = await openAs(browser, PARTICIPANT);
   await page.goto("/trips");
