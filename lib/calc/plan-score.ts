@@ -5,7 +5,7 @@ import { readPlan } from "./rig-anchor";
 import { Stock } from "./stock";
 import type { Placement } from "./types";
 
-/** A margin above this is as good as any (judgement): better anchors are then free for others. */
+/** A larger margin than this counts no more than this (judgement): better anchors are then free for others. */
 export const MARGIN_CAP = 3;
 /** Weighted margins closer than this count as equal, so that rounding does not decide over mass and work. */
 const MARGIN_STEP = 1e-6;

@@ -15,7 +15,7 @@ import { createTrip } from "@/lib/services/trips/create-trip";
 let cast: Awaited<ReturnType<typeof makeCast>>;
 const million = "x".repeat(1e6);
 
-/** What arrives from outside has any type. */
+/** What arrives from outside is not typed; the services have to find out. */
 const asInput = <Input>(value: unknown) => value as Input;
 
 async function everything() {
