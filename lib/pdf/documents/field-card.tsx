@@ -7,9 +7,9 @@ import { withUnit } from "@/lib/format/numbers";
 import { formatPosition } from "@/lib/format/positions";
 import { formatBeaufort, formatSpeed } from "@/lib/format/speeds";
 import { startSentence } from "@/lib/format/words";
-import { columns, fillPages, hairline, rule, spacer, stack, textBlock, type Block } from "../sections/block";
+import { fillPages, hairline, rule, spacer, stack, textBlock, type Block } from "../sections/block";
 import { factRow } from "../sections/facts";
-import { contactsNote, note, stackNotes } from "../sections/notes";
+import { contactsNote, note, noteColumns } from "../sections/notes";
 import {
   bodyHeight,
   continuedHeader,
@@ -169,33 +169,20 @@ function campNotes({ camp, contacts, sheet, preferences }: CardContext): Block {
   const water = waterWords(details, preferences.lengthUnit);
   return stack([
     spacer(8),
-    columns(
+    noteColumns(
       [
-        {
-          width,
-          block: stackNotes([
-            note("Place", [position ?? "position not said", altitude].filter(Boolean).join("\n"), width),
-            camp.way.length ? note("Way here", camp.way.join(" "), width) : null,
-            water ? note("Water", water, width) : null,
-            details.notes ? note("Notes", details.notes, width) : null,
-          ]),
-        },
-        {
-          width,
-          block: stackNotes([
-            hazards.length ? note("Mind", `${startSentence(hazards.map(lowerFirst).join(", "))}.`, width) : null,
-            camp.result.retension === null ? null : note("Check again", camp.result.retension, width),
-          ]),
-        },
-        {
-          width,
-          block: stackNotes([
-            contactsNote(contacts, width),
-            details.wayOut ? note("Way out", details.wayOut, width) : null,
-            details.meetingPoint ? note("Meet at", details.meetingPoint, width) : null,
-          ]),
-        },
+        note("Place", [position ?? "position not said", altitude].filter(Boolean).join("\n"), width),
+        camp.way.length ? note("Way here", camp.way.join(" "), width) : null,
+        water ? note("Water", water, width) : null,
+        hazards.length ? note("Mind", `${startSentence(hazards.map(lowerFirst).join(", "))}.`, width) : null,
+        camp.result.retension === null ? null : note("Check again", camp.result.retension, width),
+        contactsNote(contacts, width),
+        details.wayOut ? note("Way out", details.wayOut, width) : null,
+        details.meetingPoint ? note("Meet at", details.meetingPoint, width) : null,
+        details.notes ? note("Notes", details.notes, width) : null,
       ],
+      width,
+      3,
       GAP,
     ),
     spacer(8),

@@ -39,3 +39,25 @@ export function stackNotes(blocks: readonly (Block | null)[], gap = 8): Block {
   const present = blocks.filter((block): block is Block => block !== null);
   return present.length === 0 ? spacer(0) : stack(present, gap);
 }
+
+const heightOf = (blocks: readonly Block[]): number => stackNotes(blocks).height;
+
+/** Notes in their order in columns of this width, parted so that the tallest column is as low as it can be. */
+export function noteColumns(notes: readonly (Block | null)[], width: number, count: number, gap: number): Block {
+  const present = notes.filter((block): block is Block => block !== null);
+  const part = (from: number, left: number): { readonly tallest: number; readonly parts: readonly Block[][] } => {
+    if (left === 1) return { tallest: heightOf(present.slice(from)), parts: [present.slice(from)] };
+    let best = { tallest: Infinity, parts: [] as Block[][] };
+    for (let end = from; end <= present.length; end += 1) {
+      const own = present.slice(from, end);
+      const rest = part(end, left - 1);
+      const tallest = Math.max(heightOf(own), rest.tallest);
+      if (tallest < best.tallest) best = { tallest, parts: [own, ...rest.parts] };
+    }
+    return best;
+  };
+  return columns(
+    part(0, count).parts.map((own) => ({ width, block: stackNotes(own) })),
+    gap,
+  );
+}

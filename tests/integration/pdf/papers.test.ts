@@ -113,10 +113,7 @@ describe("field card", () => {
     const read = await readPdf(await renderPaper(fieldCard(camp), { size }));
     expectSound(read);
     const [first] = read.pages;
-    // Letter is 18 mm shorter: the fourth shelter goes over to the next page.
-    const onFirst = size === "A4" ? camp.pitches : camp.pitches.slice(0, 3);
-    for (const pitch of onFirst) expect(first?.text).toContain(pitch.name);
-    for (const pitch of camp.pitches) expect(read.text).toContain(pitch.name);
+    for (const pitch of camp.pitches) expect(first?.text).toContain(pitch.name);
     expect(first?.text).toContain("54.21348° N, 3.10112° W");
     expect(first?.text).toContain("Spring 120 m east");
     expect(first?.text).toContain("ridge or summit in thunder");
